@@ -1,0 +1,231 @@
+import * as z from 'zod';
+import {
+  kinds, methodClasses, provenances, sampleTypes, scopes, siteTypes, structures,
+} from '../domain/kinds.ts';
+import { states } from '../domain/states.ts';
+import { endpoint } from './endpoint.ts';
+import { quantity, quantityInput } from './quantities.ts';
+import { sourceSummary } from './sources.ts';
+
+/** What the printed rate counts: one event of the step as written, consumption of a named species, or not known. */
+export const rateOf = z.union([z.literal('event'), z.literal('unknown'), z.object({ consumptionOf: z.string().min(1).max(60) })]);
+
+export const temperatureRange = z.object({ min: z.number(), max: z.number() });
+
+/** Conditions under their standard names; what a value needs depends on its method. */
+export const conditions = z.object({
+  coverage: z.string().max(200).optional(),
+  coverageDefinition: z.enum(['per-surface-atom', 'per-adsorption-site', 'relative-to-saturation']).optional(),
+  pressures: z.string().max(200).optional(),
+  temperatureK: z.number().optional(),
+  siteDensityPerM2: z.number().positive().optional(),
+  siteDensitySource: z.string().max(200).optional(),
+  promoter: z.string().max(100).optional(),
+  heatingRateKPerS: z.number().positive().optional(),
+  exposureLangmuir: z.number().positive().optional(),
+  functional: z.string().max(60).optional(),
+  supercell: z.string().max(60).optional(),
+  endStateReference: z.enum(['gas', 'isolated', 'co-adsorbed']).optional(),
+  isotopes: z.string().max(100).optional(),
+  kieDirection: z.enum(['light/heavy', 'heavy/light']).optional(),
+  text: z.string().max(1000).optional(),
+});
+export type Conditions = z.infer<typeof conditions>;
+
+export const surfaceInput = z.object({
+  /** A pure metal by symbol, or an alloy by formula: one of the two. */
+  metal: z.string().max(20).optional(),
+  formula: z.string().max(60).optional(),
+  structure: z.enum(structures).optional(),
+  facet: z.string().max(20).optional(),
+  site: z.enum(siteTypes).optional(),
+  sampleType: z.enum(sampleTypes).optional(),
+  support: z.string().max(60).optional(),
+  particleSizeNm: z.number().positive().max(1e6).optional(),
+});
+export type SurfaceInput = z.infer<typeof surfaceInput>;
+
+export const sourceInput = z.object({
+  id: z.string().max(60).optional(),
+  doi: z.string().max(300).optional(),
+  bibtex: z.string().max(20_000).optional(),
+  ris: z.string().max(20_000).optional(),
+  /** A citation typed by hand, used when there is no DOI or its service does not answer. */
+  csl: z.looseObject({
+    type: z.string().max(40).optional(),
+    title: z.string().max(1000).optional(),
+  }).optional(),
+});
+
+/** The whole of what a contributor types; everything is optional in a draft. */
+export const entryInput = z.object({
+  kind: z.enum(kinds).optional(),
+  scope: z.enum(scopes).optional(),
+  provenance: z.enum(provenances).optional(),
+  step: z.object({ equation: z.string().max(500) }).optional(),
+  surface: surfaceInput.optional(),
+  source: sourceInput.optional(),
+  locator: z.string().max(200).optional(),
+  method: z.object({
+    class: z.enum(methodClasses).optional(), technique: z.string().max(80).optional(), detail: z.string().max(500).optional(),
+  }).optional(),
+  quantities: z.array(quantityInput).max(12).optional(),
+  correlation: z.number().min(-1).max(1).optional(),
+  rateOf: rateOf.optional(),
+  kineticOrders: z.record(z.string().max(60), z.number().min(-5).max(5)).optional(),
+  conditions: conditions.optional(),
+  validRange: z.object({ min: z.number().optional(), max: z.number().optional() }).optional(),
+  note: z.string().max(4000).optional(),
+});
+export type EntryInput = z.infer<typeof entryInput>;
+
+export const checkSeverities = ['blocking', 'warning', 'note'] as const;
+export const check = z.object({ code: z.string(), severity: z.enum(checkSeverities), message: z.string() });
+export type Check = z.infer<typeof check>;
+
+/** What the viewer may do with an entry; the client shows by this only. */
+export const entryActions = ['edit', 'submit', 'withdraw', 'revise', 'claim', 'decide', 'export'] as const;
+export type EntryAction = (typeof entryActions)[number];
+
+/** A fault in a draft: where in the input, and what to do. */
+export const fault = z.object({ path: z.string(), message: z.string(), code: z.string().optional(), suggestion: z.string().optional() });
+export type Fault = z.infer<typeof fault>;
+
+export const stepView = z.object({
+  key: z.string(), variantKey: z.string(), equation: z.string(), class: z.string(), direction: z.union([z.literal(1), z.literal(-1)]),
+});
+
+export const surfaceView = z.object({
+  id: z.string().nullable(), metal: z.string().nullable(), formula: z.string(), structure: z.string().nullable(), facet: z.string().nullable(),
+  site: z.string().nullable(), sampleType: z.string().nullable(), support: z.string().nullable(), label: z.string(),
+});
+
+export const kAtT = z.object({
+  temperatureK: z.number(), value: z.number(), unit: z.string(), uLnK: z.number().nullable(),
+  uLnKRange: z.tuple([z.number(), z.number()]).nullish(), extrapolated: z.boolean(),
+});
+
+/** An entry as the interface gives it; parts that a draft lacks are null. */
+export const entry = z.object({
+  accession: z.string(),
+  version: z.int().nullable(),
+  revision: z.int(),
+  state: z.enum(states),
+  kind: z.enum(kinds).nullable(),
+  scope: z.enum(scopes).nullable(),
+  provenance: z.enum(provenances).nullable(),
+  step: stepView.nullable(),
+  surface: surfaceView.nullable(),
+  source: sourceSummary.nullable(),
+  locator: z.string().nullable(),
+  method: z.object({ class: z.enum(methodClasses).nullable(), technique: z.string().nullable(), detail: z.string().nullable() }),
+  quantities: z.array(quantity),
+  correlation: z.number().nullable(),
+  rateOf: rateOf.nullable(),
+  kineticOrders: z.record(z.string(), z.number()).nullable(),
+  conditions: conditions,
+  validRange: z.object({ min: z.number().nullable(), max: z.number().nullable() }).nullable(),
+  note: z.string().nullable(),
+  checks: z.array(check),
+  kAtT: kAtT.nullable(),
+  /** Constants and core versions of the conversion shown. */
+  conversion: z.object({ coreVersion: z.string(), constantsVersion: z.string(), at: z.string() }).nullable(),
+  contributor: z.string().nullable(),
+  acceptedAt: z.string().nullable(),
+  actions: z.array(z.enum(entryActions)),
+  links: z.object({ self: z.string(), page: z.string() }),
+});
+export type Entry = z.infer<typeof entry>;
+
+/** A draft as its contributor sees it: the entry so far, what was typed, and what still stands in the way of submitting. */
+export const entryForEditing = entry.extend({
+  input: entryInput,
+  faults: z.array(fault),
+  lock: z.int(),
+  lastDecision: z.object({ decision: z.string(), reason: z.string().nullable(), comment: z.string(), by: z.string(), at: z.string() }).nullable(),
+  submission: z.string().nullable(),
+});
+export type EntryForEditing = z.infer<typeof entryForEditing>;
+
+const accessionParam = z.object({ accession: z.string().max(20) });
+
+/** One line of an entry's history, in plain words. */
+export const historyLine = z.object({ at: z.string(), by: z.string(), what: z.string(), version: z.int().nullable() });
+
+export const entryDetail = entry.extend({
+  sourceDetail: z.object({ citation: z.string(), bibtex: z.string(), ris: z.string() }).nullable(),
+  history: z.array(historyLine),
+  versions: z.array(z.object({ version: z.int(), state: z.enum(states), acceptedAt: z.string() })),
+  /** Accepted entries for the same elementary step on the same surface, and those of the reverse step. */
+  sameStepAndSurface: z.array(z.object({ accession: z.string(), asPrinted: z.string(), label: z.string(), energyKJPerMol: z.number().nullable(), computed: z.boolean() })),
+  reverse: z.array(z.object({ accession: z.string(), asPrinted: z.string(), label: z.string(), energyKJPerMol: z.number().nullable(), computed: z.boolean() })),
+  submission: z.string().nullable(),
+});
+export type EntryDetail = z.infer<typeof entryDetail>;
+
+const temperatureQuery = z.object({ T: z.coerce.number().min(1).max(5000).optional() });
+
+export const getEntry = endpoint({
+  method: 'GET', path: '/entries/:accession', access: 'visitor', summary: 'One entry: its public version, or the open revision for those who may see it',
+  params: accessionParam, query: temperatureQuery, response: entryDetail,
+});
+export const getEntryVersion = endpoint({
+  method: 'GET', path: '/entries/:accession/versions/:version', access: 'visitor', summary: 'One public version of an entry',
+  params: accessionParam.extend({ version: z.coerce.number().int().min(1) }), query: temperatureQuery, response: entryDetail,
+});
+export const listEntryVersions = endpoint({
+  method: 'GET', path: '/entries/:accession/versions', access: 'visitor', summary: 'The public versions of an entry',
+  params: accessionParam, response: z.object({ items: entryDetail.shape.versions }),
+});
+export const getDraft = endpoint({
+  method: 'GET', path: '/entries/:accession/draft', access: 'contributor', summary: 'The open revision of an entry as its contributor typed it',
+  params: accessionParam, response: entryForEditing,
+});
+export const createEntry = endpoint({
+  method: 'POST', path: '/entries', access: 'contributor', summary: 'Make a draft; everything is optional', body: entryInput, response: entryForEditing,
+});
+export const preview = z.object({
+  step: stepView.nullable(), surface: surfaceView.nullable(), quantities: z.array(quantity), kAtT: kAtT.nullable(),
+  checks: z.array(check), faults: z.array(fault),
+  /** Accepted values for the same step, to set this one among. */
+  neighbours: z.array(z.object({
+    accession: z.string(), label: z.string(), energyKJPerMol: z.number(), computed: z.boolean(), sameSurface: z.boolean(),
+  })),
+});
+export type Preview = z.infer<typeof preview>;
+export const previewEntry = endpoint({
+  method: 'POST', path: '/entries/preview', access: 'contributor', csrf: false,
+  summary: 'What an entry would become: converted values, derivation, k at the temperature of interest, checks. Stores nothing',
+  query: temperatureQuery, body: entryInput, response: preview,
+});
+export const patchEntry = endpoint({
+  method: 'PATCH', path: '/entries/:accession', access: 'contributor', summary: 'Change a draft by JSON Merge Patch (RFC 7396); send If-Match with the ETag you saw',
+  params: accessionParam, body: z.record(z.string(), z.unknown()), response: entryForEditing,
+});
+export const submitEntry = endpoint({
+  method: 'POST', path: '/entries/:accession/submit', access: 'contributor', summary: 'Hand a draft in for review: it is frozen', params: accessionParam, response: entryForEditing,
+});
+export const withdrawEntry = endpoint({
+  method: 'POST', path: '/entries/:accession/withdraw', access: 'contributor', summary: 'Withdraw an open revision', params: accessionParam,
+  response: z.object({ accession: z.string(), state: z.enum(states) }),
+});
+export const reviseEntry = endpoint({
+  method: 'POST', path: '/entries/:accession/revise', access: 'contributor',
+  summary: 'Open a new draft revision of an accepted or returned entry, copied from the last', params: accessionParam,
+  body: z.object({ reason: z.string().trim().max(1000).optional() }), response: entryForEditing,
+});
+
+/** One of my own submissions and where it stands. */
+export const myEntry = z.object({
+  accession: z.string(), revision: z.int(), version: z.int().nullable(), state: z.enum(states), kind: z.enum(kinds).nullable(),
+  equation: z.string().nullable(), surface: z.string().nullable(), asPrinted: z.string().nullable(), unitAsPrinted: z.string().nullable(),
+  sourceLabel: z.string().nullable(), changedAt: z.string(),
+  /** Whose turn it is, in words. */
+  standing: z.string(),
+  lastComment: z.string().nullable(), actions: z.array(z.enum(entryActions)),
+});
+export const listMyEntries = endpoint({
+  method: 'GET', path: '/contributions', access: 'contributor', summary: 'My entries that are not public yet, and the latest that are',
+  query: z.object({ state: z.enum(states).optional(), limit: z.coerce.number().int().min(1).max(200).default(50), cursor: z.string().max(500).optional() }),
+  response: z.object({ items: z.array(myEntry), total: z.int(), totalIsExact: z.boolean(), nextCursor: z.string().nullable(), counts: z.record(z.string(), z.int()) }),
+});

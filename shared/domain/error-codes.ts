@@ -1,0 +1,61 @@
+/**
+ * The closed list of error codes and the HTTP status each is answered with.
+ * A code names what went wrong for a program; the problem document's `detail` says it for a person.
+ */
+export const errorStatus = {
+  'bad-request': 400,
+  'malformed-json': 400,
+  'cursor-invalid': 400,
+  'sign-in-required': 401,
+  'sign-in-failed': 401,
+  'forbidden': 403,
+  'csrf-invalid': 403,
+  'own-submission': 403,
+  'not-found': 404,
+  'doi-not-found': 404,
+  'conflict': 409,
+  'claimed-by-another': 409,
+  'already-decided': 409,
+  'state-conflict': 409,
+  'revision-open': 409,
+  'stale-version': 412,
+  'payload-too-large': 413,
+  'invalid-input': 422,
+  'not-ready-to-submit': 422,
+  'precondition-required': 428,
+  'too-many-requests': 429,
+  'internal': 500,
+  'doi-service-unavailable': 503,
+  'database-unavailable': 503,
+  'busy': 503,
+} as const;
+export type ErrorCode = keyof typeof errorStatus;
+
+/** Short titles of the problem documents, one a code. */
+export const errorTitle: Readonly<Record<ErrorCode, string>> = {
+  'bad-request': 'The request could not be read',
+  'malformed-json': 'The request body is not JSON',
+  'cursor-invalid': 'The page marker does not belong to this search',
+  'sign-in-required': 'Sign in to do this',
+  'sign-in-failed': 'E-mail or password is not right',
+  'forbidden': 'Your role does not allow this',
+  'csrf-invalid': 'The form token has expired',
+  'own-submission': 'Nobody decides on their own submission',
+  'not-found': 'There is nothing here',
+  'doi-not-found': 'The DOI is not registered',
+  'conflict': 'Somebody else was faster',
+  'claimed-by-another': 'Another reviewer holds this submission',
+  'already-decided': 'This submission has been decided',
+  'state-conflict': 'The entry is not in a state that allows this',
+  'revision-open': 'A revision of this entry is already on its way',
+  'stale-version': 'This was changed since you opened it',
+  'payload-too-large': 'The request is too large',
+  'invalid-input': 'Some of the input is not right',
+  'not-ready-to-submit': 'The entry is not complete yet',
+  'precondition-required': 'Say which version you saw',
+  'too-many-requests': 'Too many requests',
+  'internal': 'Something went wrong on our side',
+  'doi-service-unavailable': 'The DOI service does not answer',
+  'database-unavailable': 'The database does not answer',
+  'busy': 'Too much is going on at once',
+};
