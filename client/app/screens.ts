@@ -1,0 +1,21 @@
+import type { ComponentType } from 'react';
+import type { Role } from '#shared/domain/roles.ts';
+
+/** What a page's module gives the router; loaded when the page is first opened. */
+export interface ScreenModule {
+  Component: ComponentType;
+}
+
+export interface Screen {
+  path: string;
+  load: () => Promise<ScreenModule>;
+  /** The word in the header; a screen without it is reached from others. */
+  nav?: { label: string; group: 'read' | 'write'; needs?: Role; count?: 'reviewsWaiting' };
+  /** The temperature of interest and the unit change what is shown: they are kept in the address. */
+  instrument?: true;
+}
+
+/** Every page of the application, one line each, in the order of the header. */
+export const screens: readonly Screen[] = [
+  // A page is registered here when its module is there.
+];
