@@ -1,0 +1,54 @@
+/** One operation on the way from the value as printed to the converted value. */
+export interface DerivationLine {
+  /** What was done, in plain words. */
+  operation: string;
+  /** The value with its unit before the operation. */
+  from: string;
+  /** The value with its unit after it. */
+  to: string;
+  /** The constant used, with its value and unit. */
+  constant?: string;
+  /** What was taken for granted, and where it came from. */
+  assumption?: string;
+  /** The standard, paper or rule behind the operation. */
+  reference: string;
+}
+
+/** References that derivations cite, spelled once. */
+export const references = {
+  siBrochure: 'BIPM SI Brochure, 9th edition',
+  sp811: 'NIST SP 811 (2008)',
+  codata: 'CODATA 2022',
+  gum: 'JCGM 100:2008 (GUM)',
+  greenBook: 'IUPAC Green Book, 3rd edition',
+  glossary: 'IUPAC glossary of terms used in chemical kinetics, Pure Appl. Chem. 68 (1996) 149',
+  printed: 'as printed in the source',
+  idealGas: 'ideal gas law, k_p = k_c/(RT)^g',
+  siteBalance: 'rate per area = site density × rate per site',
+} as const;
+
+/** Writes a number at full double precision, with a unit after it when there is one. */
+export function quantityText(value: number, unit = ''): string {
+  return unit ? `${value} ${unit}` : String(value);
+}
+
+/** The first line of every derivation: what the source prints. */
+export function printedLine(text: string, unit: string | null, reading: string): DerivationLine {
+  return {
+    operation: 'Read the printed value',
+    from: unit && !text.includes(unit) ? `${text} ${unit}` : text,
+    to: reading,
+    reference: references.printed,
+  };
+}
+
+/** A line for a multiplication or another operation that turns one number into another. */
+export function operationLine(
+  operation: string,
+  from: { value: number; unit?: string },
+  to: { value: number; unit?: string },
+  reference: string,
+  extra: { constant?: string; assumption?: string } = {},
+): DerivationLine {
+  return { operation, from: quantityText(from.value, from.unit), to: quantityText(to.value, to.unit), ...extra, reference };
+}
