@@ -1,0 +1,2 @@
+/** The browser's program, or null. */
+export function findBrowser(): string | null;
