@@ -1,0 +1,41 @@
+import { memo, type ReactNode } from 'react';
+import { equationTokens, speakEquation, type EquationToken } from '#client/lib/equation-tokens.ts';
+import { Sign } from './signs.tsx';
+
+interface EquationProps {
+  /** An equation in plain spelling: `N* + N* -> N2 + 2*`. */
+  equation: string;
+  /** In the slab face, for group rows and headings. */
+  display?: boolean;
+}
+
+function setToken(token: EquationToken): ReactNode {
+  switch (token.kind) {
+    case 'index': return <sub>{token.text}</sub>;
+    case 'isotope': return <><span className="plain-spelling">[</span><sup>{token.text}</sup></>;
+    case 'charge': return <><span className="plain-spelling">^</span><sup>{token.text.slice(1).replace('-', '\u2212')}</sup></>;
+    case 'site': return <><span className="plain-spelling">_</span><sub className="equation-site">{token.text.slice(1)}</sub></>;
+    case 'star': return <span className="equation-star">{token.text}</span>;
+    case 'phase': return <span className="equation-phase">{token.text}</span>;
+    case 'plus': return <span className="equation-plus">{' + '}</span>;
+    case 'arrow': return <>{' '}<Sign of="->" className="equation-arrow" />{' '}</>;
+    case 'equilibrium': return <>{' '}<Sign of="<->" className="equation-arrow" />{' '}</>;
+    default: return token.text;
+  }
+}
+
+/** An equation set with true indices and quiet raised asterisks; read aloud in words, copied in plain spelling. */
+export const Equation = memo(function Equation({ equation, display = false }: EquationProps) {
+  const tokens = equationTokens(equation);
+  return (
+    <span className={display ? 'equation equation-display' : 'equation'} role="img" aria-label={speakEquation(tokens)}>
+      {tokens.map((token, index) => {
+        const before = tokens[index - 1];
+        // A hair of room after a count of species, so that "2 N*" is not read as "2N".
+        const gap = before?.kind === 'count' && token.kind !== 'star' ? <span className="equation-gap" /> : null;
+        const close = before?.kind === 'text' && tokens[index - 2]?.kind === 'isotope' ? <span className="plain-spelling">]</span> : null;
+        return <span key={index}>{close}{gap}{setToken(token)}</span>;
+      })}
+    </span>
+  );
+});
