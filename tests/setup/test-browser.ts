@@ -3,7 +3,7 @@ import { chromium } from 'playwright-core';
 import type { TestProject } from 'vitest/node';
 import { findBrowser } from '#server/bootstrap/browser.mjs';
 import { buildWhatIsStale } from '#server/bootstrap/build.mjs';
-import { createEmptyDatabase, databaseUrl, testRoles } from './test-server.ts';
+import { createEmptyDatabase, databaseUrl } from './test-server.ts';
 
 declare module 'vitest' {
   export interface ProvidedContext {
