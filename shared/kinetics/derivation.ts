@@ -27,9 +27,11 @@ export const references = {
   siteBalance: 'rate per area = site density × rate per site',
 } as const;
 
-/** Writes a number at full double precision, with a unit after it when there is one. */
+/** Writes a number at full double precision, as a power of ten outside 1e-4 to 1e7, with a unit after it when there is one. */
 export function quantityText(value: number, unit = ''): string {
-  return unit ? `${value} ${unit}` : String(value);
+  const size = Math.abs(value);
+  const text = size !== 0 && (size >= 1e7 || size < 1e-4) ? value.toExponential().replace('e+', 'e') : String(value);
+  return unit && unit !== '1' ? `${text} ${unit}` : text;
 }
 
 /** The first line of every derivation: what the source prints. */

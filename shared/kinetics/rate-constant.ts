@@ -1,5 +1,5 @@
 import { N_A, R } from './constants.ts';
-import { operationLine, references, type DerivationLine } from './derivation.ts';
+import { operationLine, quantityText, references, type DerivationLine } from './derivation.ts';
 import { KineticsError, requireFinite, requireNonNegative, requirePositive, requireTemperature } from './kinetics-error.ts';
 import { basisScale, isAmbiguousArea, omissionCandidates, rateBasisOf, unitOfBasis, type RateBasis } from './rate-basis.ts';
 import { dimensionText, findUnit, type Unit } from './units.ts';
@@ -108,7 +108,7 @@ function walk(input: RateConstantInput, value: number, u: number | null, from: U
   }
   let current = { value: (value * source.numerator) / source.denominator, unit: unitOfBasis(bases.from).symbol };
   derivation.push(
-    operationLine(`SI unit of ${from.symbol}`, { value, unit: from.symbol }, current, references.sp811, from.molecular !== 0 || bases.from.omittedMolecule !== 0 ? { constant: `N_A = ${N_A} mol-1` } : {}),
+    operationLine(`SI unit of ${from.symbol}`, { value, unit: from.symbol }, current, references.sp811, from.molecular !== 0 || bases.from.omittedMolecule !== 0 ? { constant: `N_A = ${quantityText(N_A)} mol-1` } : {}),
   );
   const toConcentration = Number((bases.to.gasConcentration - bases.from.gasConcentration).toPrecision(12));
   if (toConcentration !== 0) {
@@ -147,11 +147,11 @@ function walk(input: RateConstantInput, value: number, u: number | null, from: U
     }
     const gamma = (density / N_A) ** Math.abs(toSite);
     const next = { value: toSite > 0 ? current.value * gamma : current.value / gamma, unit: unitOfBasis({ ...bases.to, omittedMolecule: 0 }).symbol };
-    assumptions.push(`site density ${density} m-2`);
+    assumptions.push(`site density ${quantityText(density)} m-2`);
     derivation.push(
       operationLine(`${toSite > 0 ? 'Multiply' : 'Divide'} by the site density^${Math.abs(toSite)}`, current, next, references.siteBalance, {
-        constant: `N_A = ${N_A} mol-1`,
-        assumption: `site density ${density} m-2, the same amount unit on both sides`,
+        constant: `N_A = ${quantityText(N_A)} mol-1`,
+        assumption: `site density ${quantityText(density)} m-2, the same amount unit on both sides`,
       }),
     );
     current = next;

@@ -1,5 +1,5 @@
 import { N_A } from './constants.ts';
-import { operationLine, references, type DerivationLine } from './derivation.ts';
+import { operationLine, quantityText, references, type DerivationLine } from './derivation.ts';
 import { KineticsError, requirePositive } from './kinetics-error.ts';
 
 /** Crystal structures that facets are written for. */
@@ -82,7 +82,7 @@ export function siteDensity(input: { structure: string; facet: string; aAngstrom
     molPerM2: perM2 / N_A,
     derivation: [
       operationLine(`Outermost atoms of the ideal ${input.structure}(${name}) facet, ${count} / a²`, { value: a, unit: 'angstrom' }, { value: perM2, unit: 'm-2' }, references.greenBook, {
-        constant: `N_A = ${N_A} mol-1`,
+        constant: `N_A = ${quantityText(N_A)} mol-1`,
         assumption: 'one site per outermost atom of an unreconstructed terrace',
       }),
     ],

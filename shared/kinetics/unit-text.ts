@@ -36,7 +36,7 @@ function tidy(text: string): string {
     .trim();
 }
 
-const nameAt = /[A-Za-zÅåöÖ_ℓ]+/y;
+const nameAt = /[A-Za-zÅåöÖ_ℓ]+|%/y;
 const exponentAt = /\^? ?(?:\{ ?([+-]?[\d.]+(?: ?\/ ?\d+)?) ?\}|\( ?([+-]?[\d.]+(?: ?\/ ?\d+)?) ?\)|([+-]?\d+(?:\.\d+)?|[+-]?\.\d+))/y;
 
 function exponentNumber(text: string): number {

@@ -97,6 +97,7 @@ export const unitTokens: readonly UnitToken[] = [
   token('kB', { energy: 1, temperature: -1 }, k_B, 1, ['k_B']),
   token('eu', { energy: 1, amount: -1, temperature: -1 }, 4184, 1000, ['EU']),
   token('K', { temperature: 1 }, 1, 1, ['kelvin', 'Kelvin']),
+  token('%', {}, 1, 100, ['percent']),
   token('Btu_IT', energy, btuInternationalTable, 1, ['BTU_IT', 'BtuIT']),
   token('Btu_th', energy, btuThermochemical, 1, ['BTU_th', 'Btuth']),
   token('lbmol', amount, 453.59237, 1, ['lbmole', 'lb_mol']),
