@@ -18,7 +18,8 @@ export interface OutlierResult {
   /** 1.4826 × median absolute deviation. */
   scaledDeviation: number;
   hint: SlipHint | null;
-  check: Check | null;
+  /** The check that it raises: none or one. */
+  checks: Check[];
 }
 
 /** Slips that are common in tables, with what they are. Source: common practice; factors from CODATA 2022 and NIST SP 811. */
@@ -39,6 +40,16 @@ export const slipFactors: readonly SlipHint[] = [
   { factor: N_A, name: 'molecule for mole' },
 ];
 
+/** How a family is compared. */
+export interface FamilyOptions {
+  /** Compare logarithms. */
+  logarithmic?: boolean;
+  /** Scaled deviations beyond which a value is an outlier, 3.5 when absent. */
+  threshold?: number;
+  /** Further slips to try, such as a site density. */
+  extraFactors?: readonly SlipHint[];
+}
+
 function medianOf(sorted: readonly number[]): number {
   const middle = sorted.length >> 1;
   return sorted.length % 2 === 1 ? (sorted[middle] as number) : ((sorted[middle - 1] as number) + (sorted[middle] as number)) / 2;
@@ -57,10 +68,9 @@ function center(values: readonly number[]): { median: number; scaled: number } {
  * A value more than `threshold` scaled deviations away is an outlier. Where a common slip would bring it within two, the hint names it.
  * With `logarithmic` the comparison is on ln (rate constants, factors). A family without any scatter uses a hundredth of its median as the deviation.
  * Source: median absolute deviation scaled by 1.4826, Rousseeuw & Croux, J. Am. Stat. Assoc. 88 (1993) 1273; threshold 3.5: common practice.
- * @param extraFactors further slips to try, such as a site density
- * @example outlierCheck(25, [101, 104, 106, 108, 110])?.hint?.name // 'calorie for joule'
+ * @example compareWithFamily(25, [101, 104, 106, 108, 110])?.hint?.name // 'calorie for joule'
  */
-export function outlierCheck(value: number, others: readonly number[], options: { logarithmic?: boolean; threshold?: number; extraFactors?: readonly SlipHint[] } = {}): OutlierResult | null {
+export function compareWithFamily(value: number, others: readonly number[], options: FamilyOptions = {}): OutlierResult | null {
   const transform = options.logarithmic ? Math.log : (x: number): number => x;
   const family = others.map(transform).filter(Number.isFinite);
   const own = transform(value);
@@ -70,10 +80,10 @@ export function outlierCheck(value: number, others: readonly number[], options: 
   const scale = Math.max(scaled, floor);
   const score = Math.abs(own - median) / scale;
   const shown = options.logarithmic ? Math.exp(median) : median;
-  if (score <= (options.threshold ?? 3.5)) return { outlier: false, score, median: shown, scaledDeviation: scaled, hint: null, check: null };
+  if (score <= (options.threshold ?? 3.5)) return { outlier: false, score, median: shown, scaledDeviation: scaled, hint: null, checks: [] };
   const hint = findSlip(value, transform, median, scale, [...(options.extraFactors ?? []), ...slipFactors]);
   const message = `${value} is ${score.toFixed(1)} scaled deviations from the median ${Number(shown.toPrecision(4))} of ${family.length} accepted values${hint ? `; ${hint.name} would explain it (factor ${Number(hint.factor.toPrecision(5))})` : ''}`;
-  return { outlier: true, score, median: shown, scaledDeviation: scaled, hint, check: { code: 'outlier', severity: 'warning', message } };
+  return { outlier: true, score, median: shown, scaledDeviation: scaled, hint, checks: [{ code: 'outlier', severity: 'warning', message }] };
 }
 
 function findSlip(value: number, transform: (x: number) => number, median: number, scale: number, factors: readonly SlipHint[]): SlipHint | null {
@@ -91,4 +101,9 @@ function findSlip(value: number, transform: (x: number) => number, median: numbe
     attempt({ factor: 10 ** -power, name: `a power of ten (10^-${power})` });
   }
   return (best as { hint: SlipHint } | null)?.hint ?? null;
+}
+
+/** The check that an outlier raises, as a list of none or one; silent with fewer than five others. See `compareWithFamily`. */
+export function outlierCheck(value: number, others: readonly number[], options: FamilyOptions = {}): Check[] {
+  return compareWithFamily(value, others, options)?.checks ?? [];
 }

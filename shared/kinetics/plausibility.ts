@@ -148,3 +148,5 @@ export function checkKie(value: number, limits: { semiclassicalLimit?: number; h
   if (limits.semiclassicalLimit !== undefined && value > limits.semiclassicalLimit) return [check('kie-unusual', 'warning', `the isotope effect ${value} is above the semiclassical limit ${limits.semiclassicalLimit.toFixed(1)}`)];
   return [];
 }
+
+export { outlierCheck } from './outlier.ts';
