@@ -19,7 +19,7 @@ export function makeRoutes(): RouteObject[] {
           lazy: async () => ({ Component: (await screen.load()).Component }),
         })),
         ...(import.meta.env.DEV
-          ? [{ path: '/gallery', lazy: async () => ({ Component: (await import('#client/routes/gallery.tsx')).Component }) }]
+          ? [{ path: '/gallery', lazy: async () => ({ Component: (await import('#client/routes/gallery/page.tsx')).Component }) }]
           : []),
         { path: '*', element: <NotFoundPage /> },
       ],

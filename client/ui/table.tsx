@@ -1,0 +1,146 @@
+import { useId, useMemo, useRef, useState, type KeyboardEvent, type ReactNode } from 'react';
+import { useNarrow } from '#client/lib/use-media-query.ts';
+import { Checkbox } from './choice.tsx';
+import { TableHead } from './table-head.tsx';
+import { useTableModel, type DataColumn, type DataRow, type RowGroup, type TableSort } from './table-model.ts';
+import { TableRows, type TableLine } from './table-rows.tsx';
+import { StanzaList } from './table-stanzas.tsx';
+
+export type { DataColumn, RowGroup, TableSort } from './table-model.ts';
+
+export interface DataTableProps<T extends object> {
+  /** What the table holds; heard, and seen only with `showCaption`. */
+  caption: string;
+  showCaption?: boolean;
+  columns: readonly DataColumn<T>[];
+  rows: readonly T[];
+  rowId: (row: T) => string;
+  /** A row in words, for its check box: "Ru(0001), Vantongeren 1994". */
+  rowLabel: (row: T) => string;
+  hidden?: ReadonlySet<string>;
+  sort?: TableSort | null;
+  onSort?: (sort: TableSort | null) => void;
+  chosen?: ReadonlySet<string>;
+  /** Rows can be chosen. */
+  onChosen?: (chosen: Set<string>) => void;
+  /** Rows with the same key, which follow one another, stand under one heading. */
+  group?: (row: T) => RowGroup;
+  activeId?: string | null;
+  onActive?: (id: string | null) => void;
+  onOpen?: (row: T) => void;
+  /** A row where the page is narrow; without it the columns become pairs of a name and a value. */
+  stanza?: (row: T) => ReactNode;
+  /** What stands under the table instead of rows. */
+  empty?: ReactNode;
+  /** New rows are on their way; the old ones stay, quieter. */
+  stale?: boolean;
+}
+
+const none: ReadonlySet<string> = new Set();
+
+/**
+ * A table of records: real heads, sorting by the server, chosen rows, groups, movement by the keyboard (arrows or j and k,
+ * Enter opens, space chooses), stanzas where the page is narrow, only the rows in sight drawn when there are many.
+ */
+export function DataTable<T extends object>(props: DataTableProps<T>) {
+  const { caption, showCaption = false, columns, rows, rowId, rowLabel, hidden = none, sort = null, onSort, chosen = none, onChosen, group, onOpen, empty, stale = false } = props;
+  const narrow = useNarrow();
+  const model = useTableModel({ columns, rows, rowId, hidden, chosen, onChosen, sort, onSort });
+  const [ownActive, setOwnActive] = useState<string | null>(null);
+  const activeId = props.activeId !== undefined ? props.activeId : ownActive;
+  const setActive = (id: string | null) => {
+    setOwnActive(id);
+    props.onActive?.(id);
+  };
+  const table = useRef<HTMLTableElement>(null);
+  const hintId = useId();
+  const visible = columns.filter((column) => !hidden.has(column.id));
+  const modelRows = model.getRowModel().rows;
+  const lines = useMemo(() => linesOf(modelRows, group), [modelRows, group]);
+
+  if (narrow) {
+    return <StanzaList {...props} columns={visible} lines={lines} chosen={chosen} onToggle={(row) => row.toggleSelected()} />;
+  }
+
+  /** Moves the focus from row to row; rows not drawn yet are scrolled to first. */
+  function focusRow(index: number) {
+    const ids = modelRows.map((row) => row.id);
+    const id = ids[Math.max(0, Math.min(ids.length - 1, index))];
+    if (id === undefined) return;
+    setActive(id);
+    const find = () => table.current?.querySelector<HTMLElement>(`tr[data-row="${CSS.escape(id)}"]`);
+    find()?.focus();
+    find()?.scrollIntoView({ block: 'nearest' });
+  }
+
+  function onRowKey(event: KeyboardEvent, row: DataRow<T>) {
+    if (event.target !== event.currentTarget) return;
+    const index = modelRows.findIndex((one) => one.id === row.id);
+    const moves: Record<string, number> = {
+      ArrowDown: index + 1, j: index + 1, ArrowUp: index - 1, k: index - 1, Home: 0, End: modelRows.length - 1, PageDown: index + 10, PageUp: index - 10,
+    };
+    const to = moves[event.key];
+    if (to !== undefined) {
+      event.preventDefault();
+      focusRow(to);
+    } else if (event.key === 'Enter' && onOpen) onOpen(row.original);
+    else if ((event.key === ' ' || event.key === 'x') && onChosen) {
+      event.preventDefault();
+      row.toggleSelected();
+    }
+  }
+
+  const all = model.getIsAllRowsSelected();
+  return (
+    <div className="table-frame">
+      <p className="sr-only" id={hintId}>
+        {`Arrow keys move from row to row${onOpen ? ', Enter opens one' : ''}${onChosen ? ', space chooses one' : ''}.`}
+      </p>
+      <table className={`data-table ${stale ? 'data-table-stale' : ''}`} ref={table} aria-busy={stale || undefined} aria-describedby={onOpen || onChosen ? hintId : undefined}>
+        <caption className={showCaption ? 'table-caption' : 'sr-only'}>{caption}</caption>
+        <thead>
+          <tr>
+            {onChosen && (
+              <th scope="col" className="table-choose">
+                <Checkbox label="Choose all rows shown" hideLabel checked={all} indeterminate={!all && model.getIsSomeRowsSelected()} onChange={() => model.toggleAllRowsSelected()} />
+              </th>
+            )}
+            {visible.map((column) => (
+              <TableHead
+                key={column.id}
+                column={column}
+                sort={sort}
+                onSort={onSort && (() => model.getColumn(column.id)?.toggleSorting())}
+              />
+            ))}
+          </tr>
+        </thead>
+        <TableRows
+          lines={lines}
+          columns={visible}
+          choosable={onChosen !== undefined}
+          chosen={chosen}
+          rowLabel={rowLabel}
+          activeId={activeId}
+          onActive={setActive}
+          onRowKey={onRowKey}
+          onOpen={onOpen}
+        />
+      </table>
+      {rows.length === 0 && empty}
+    </div>
+  );
+}
+
+/** The rows with the headings of their groups between them. */
+function linesOf<T extends object>(rows: readonly DataRow<T>[], group: ((row: T) => RowGroup) | undefined): TableLine<T>[] {
+  const lines: TableLine<T>[] = [];
+  let last: string | null = null;
+  for (const row of rows) {
+    const heading = group?.(row.original);
+    if (heading && heading.key !== last) lines.push({ heading });
+    last = heading?.key ?? null;
+    lines.push({ row });
+  }
+  return lines;
+}
