@@ -15,6 +15,9 @@ import { SetupError } from './say.mjs';
 /** Whether this process is root. */
 export const isRoot = process.getuid?.() === 0;
 
+// What root makes here is read by the unprivileged accounts below; what is secret names its own narrower rights.
+if (isRoot) process.umask(0o022);
+
 /**
  * The account of that name or number, or null when the machine has none.
  * @param {string} name

@@ -20,9 +20,9 @@ export const remoteDataFolder = join('/var/lib/sillstone', createHash('sha256').
 /**
  * Chooses the data folder, makes it, and says so when it is not the usual one.
  * @param {import('./accounts.mjs').Account | null} account whom PostgreSQL runs as
- * @param {{ quiet?: boolean }} [options]
+ * @param {{ announce?: boolean }} [options] say where the data is although it was there before
  */
-export function chooseDataFolder(account, { quiet = false } = {}) {
+export function chooseDataFolder(account, { announce = false } = {}) {
   if (!isRoot || !account || mayUse(account, nearestExisting(wantedDataFolder))) {
     mkdirSync(wantedDataFolder, { recursive: true });
     return wantedDataFolder;
@@ -30,7 +30,9 @@ export function chooseDataFolder(account, { quiet = false } = {}) {
   if (process.env.SILLSTONE_DATA_DIR) {
     throw new SetupError(`SILLSTONE_DATA_DIR is ${wantedDataFolder}, which the account "${account.name}" that runs PostgreSQL cannot enter. Name a folder it can reach.`);
   }
-  if (!quiet) say(`The account "${account.name}" that runs PostgreSQL cannot enter ${checkout}, so the data is kept in ${remoteDataFolder}.`);
+  if (announce || !existsSync(join(remoteDataFolder, 'postgres'))) {
+    say(`The account "${account.name}" that runs PostgreSQL cannot enter ${checkout}, so the data is kept in ${remoteDataFolder}.`);
+  }
   mkdirSync(remoteDataFolder, { recursive: true, mode: 0o755 });
   const note = join(remoteDataFolder, 'checkout.txt');
   if (!existsSync(note)) writeFileSync(note, `${checkout}\n`);

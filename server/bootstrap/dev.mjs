@@ -36,7 +36,7 @@ await main(async () => {
 /** @param {(() => Promise<void> | void)[]} undo */
 async function develop(undo) {
   await ensurePackages();
-  const database = process.env.DATABASE_URL ? null : await openLocalDatabase();
+  const database = process.env.DATABASE_URL ? null : await openLocalDatabase({ announce: true });
   if (database) {
     await claimInstance(database.dataFolder);
     undo.push(() => stopCluster(database.cluster), () => releaseInstance(database.dataFolder));

@@ -20,12 +20,13 @@ import { ensureSecrets, readSecrets } from './secrets.mjs';
 
 /**
  * Starts the local database, installing and making what is missing.
+ * @param {{ announce?: boolean }} [options] say where the data is when that is not the usual place
  * @returns {Promise<LocalDatabase>}
  */
-export async function openLocalDatabase() {
+export async function openLocalDatabase(options = {}) {
   const programs = await ensurePostgresPrograms(existingDirectory());
   const account = databaseAccount(existingDirectory() ?? join(wantedDataFolder, 'postgres'));
-  const dataFolder = chooseDataFolder(account);
+  const dataFolder = chooseDataFolder(account, options);
   const directory = join(dataFolder, 'postgres');
   if (existsSync(directory) && !readSecrets(dataFolder)) {
     throw new SetupError(`The database in ${directory} is there but its passwords (secrets.json beside it) are gone. Put the file back, or move the folder away to begin with an empty database.`);

@@ -71,7 +71,7 @@ async function start(undo) {
  */
 async function openDatabase(undo) {
   if (process.env.DATABASE_URL) return { settings: chosenEnvironment(null), database: null };
-  const database = await openLocalDatabase();
+  const database = await openLocalDatabase({ announce: true });
   undo.push(() => stopCluster(database.cluster));
   await claimInstance(database.dataFolder).catch((/** @type {unknown} */ error) => {
     // It belongs to another start of this checkout: leave it running.

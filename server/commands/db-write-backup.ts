@@ -1,4 +1,4 @@
-import { rename, rm, stat, writeFile } from 'node:fs/promises';
+import { chmod, rename, rm, stat, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import pg from 'pg';
 import { BackupError, fileHash, listTables, manifestPath, readContents, type BackupManifest } from './db-manifest.ts';
@@ -19,6 +19,8 @@ export async function writeBackup({ ownerUrl, programs, file }: { ownerUrl: stri
     const snapshot = rows[0]?.snapshot ?? '';
     if ((await listTables(client)).length === 0) throw new BackupError('The database is empty: there is nothing to back up.');
     await runDatabaseProgram(programs, 'pg_dump', ownerUrl, ['--format=custom', `--snapshot=${snapshot}`, `--file=${unfinished}`]);
+    // It holds addresses and password hashes.
+    await chmod(unfinished, 0o600);
     const manifest: BackupManifest = {
       format: 1,
       madeAt: new Date().toISOString(),
