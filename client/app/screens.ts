@@ -17,5 +17,5 @@ export interface Screen {
 
 /** Every page of the application, one line each, in the order of the header. */
 export const screens: readonly Screen[] = [
-  // A page is registered here when its module is there.
+  { path: '/search', load: () => import('#client/routes/search/search-page.tsx'), nav: { label: 'Search', group: 'read' }, instrument: true },
 ];

@@ -1,7 +1,7 @@
 import { useSyncExternalStore } from 'react';
 import type { Entry } from '#shared/contracts/entries.ts';
 
-/** A chosen row: enough to say what it is when its page of rows is no longer shown. */
+/** A chosen row: enough to act on when its page of rows is no longer shown. */
 export interface ChosenEntry {
   accession: string;
   sourceId: string | null;
@@ -17,12 +17,14 @@ function put(next: Chosen): void {
   for (const listener of listeners) listener();
 }
 
-/** Chooses entries or lets them go. They stay chosen over pages, filters, sorting and other screens. */
-export function choose(entries: readonly Entry[], on: boolean): void {
-  const next = new Map(chosen);
-  for (const { accession, source } of entries) {
-    if (on) next.set(accession, { accession, sourceId: source?.id ?? null });
-    else next.delete(accession);
+/**
+ * Takes over which accessions are chosen now. They stay chosen over pages, filters, sorting and other screens;
+ * `shown` are the rows among which newly chosen ones are found.
+ */
+export function setChosen(accessions: ReadonlySet<string>, shown: readonly Entry[]): void {
+  const next = new Map([...chosen].filter(([accession]) => accessions.has(accession)));
+  for (const { accession, source } of shown) {
+    if (accessions.has(accession) && !next.has(accession)) next.set(accession, { accession, sourceId: source?.id ?? null });
   }
   put(next);
 }

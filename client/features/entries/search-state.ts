@@ -81,10 +81,11 @@ export function useEntrySearchState(): EntrySearchState {
   return { ...read, grouping, changeFilter, clearFilter, changeSort, changeGrouping };
 }
 
-const groupSorts: Readonly<Record<Exclude<Grouping, 'none'>, SortKey>> = { step: 'step', surface: 'metal', source: 'source' };
+/** The order in which groups come whole. */
+export const groupSorts: Readonly<Record<Grouping, SortKey>> = { step: 'step', surface: 'metal', source: 'source', none: 'step' };
 
 /** Groups come whole when the rows are sorted by what they are grouped by; a sort the reader chose by a figure stays. */
 function sortFor(grouping: Grouping, sort: SortKey): SortKey {
   const byGroup = Object.values(groupSorts).includes(sort);
-  return grouping !== 'none' && byGroup ? groupSorts[grouping] : sort;
+  return byGroup ? groupSorts[grouping] : sort;
 }

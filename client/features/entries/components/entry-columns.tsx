@@ -1,0 +1,51 @@
+import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
+import { energyTypeWords } from '#shared/domain/kinds.ts';
+import type { Entry } from '#shared/contracts/entries.ts';
+import { Equation } from '#client/ui/equation.tsx';
+import type { DataColumn } from '#client/ui/table.tsx';
+import { UnitText } from '#client/ui/unit-text.tsx';
+import { columnSort, columnWords, type ColumnName } from '../columns.ts';
+import type { Grouping } from '../search-state.ts';
+import { barrierOf } from '../row-figures.ts';
+import type { EntryRow, RowView } from '../table-rows.ts';
+import { BarrierCell, MethodCell, PrintedText, RangeCell, RateCell, SourceCell, UncertaintyCell, ValueCell } from './row-cells.tsx';
+
+interface Heading {
+  node: ReactNode;
+  text: string;
+}
+
+/** The columns of the table of entries; the one that names the row is whatever the groups do not say already. */
+export function entryColumns(view: RowView, grouping: Grouping, value: Heading): DataColumn<EntryRow>[] {
+  const naming: ColumnName = grouping === 'surface' ? 'step' : 'surface';
+  const column = (id: ColumnName, rest: Partial<DataColumn<EntryRow>> & Pick<DataColumn<EntryRow>, 'cell'>): DataColumn<EntryRow> =>
+    ({ id, header: columnWords[id], ...(columnSort[id] ? { sortKey: columnSort[id] } : {}), ...rest });
+  const unit = (text: string | null) => (text ? { unit: <UnitText unit={text} /> } : {});
+  const named = (id: ColumnName, words: (entry: Entry) => ReactNode): Pick<DataColumn<EntryRow>, 'cell' | 'rowHeader'> => (id === naming
+    ? { rowHeader: true, cell: ({ entry }) => <Link to={`/entries/${entry.accession}`}>{words(entry)}</Link> }
+    : { cell: ({ entry }) => words(entry) });
+  const columns = [
+    column('step', named('step', (entry) => (entry.step ? <Equation equation={entry.step.equation} /> : 'not given yet'))),
+    column('surface', named('surface', (entry) => entry.surface?.label ?? 'not given yet')),
+    column('barrier', { header: '', headerText: columnWords.barrier, cell: ({ entry }) => <BarrierCell entry={entry} view={view} /> }),
+    column('value', { header: value.node, headerText: value.text, numeric: true, ...unit(view.valueUnit), cell: ({ figure }) => <ValueCell figure={figure} view={view} /> }),
+    column('uncertainty', { header: <>standard<br />uncertainty</>, headerText: columnWords.uncertainty, className: 'text-second', cell: ({ figure }) => <UncertaintyCell figure={figure} /> }),
+    column('printed', { header: 'as printed', printed: true, cell: ({ figure }) => <PrintedText figure={figure} /> }),
+    column('rate', { header: `k at ${view.temperatureK} K`, headerText: `k at ${view.temperatureK} K`, numeric: true, ...unit(view.kUnit), cell: ({ entry }) => <RateCell entry={entry} view={view} /> }),
+    column('energyType', { cell: ({ entry }) => energyTypeOf(entry) }),
+    column('scope', { cell: ({ entry }) => entry.scope ?? '' }),
+    column('method', { cell: ({ entry }) => <MethodCell entry={entry} /> }),
+    column('range', { header: 'valid range', unit: 'K', cell: ({ entry }) => <RangeCell entry={entry} /> }),
+    column('source', { cell: ({ entry }) => <SourceCell entry={entry} /> }),
+    column('conditions', { header: 'Coverage, promoter', cell: ({ entry: { conditions } }) => [conditions.coverage, conditions.promoter].filter(Boolean).join('; ') }),
+    column('accession', { className: 'whitespace-nowrap', cell: ({ entry }) => entry.accession }),
+  ];
+  // What the group says already needs no column of its own; the step stands first unless the surface names the row.
+  return columns.filter(({ id }) => !(grouping === 'step' && id === 'step') && !(grouping === 'surface' && id === 'surface') && !(grouping === 'source' && id === 'source'));
+}
+
+function energyTypeOf(entry: Entry): string {
+  const type = barrierOf(entry)?.energyType;
+  return type ? energyTypeWords[type] : '';
+}

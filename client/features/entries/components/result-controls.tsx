@@ -1,0 +1,90 @@
+import type { EntryFilter } from '#shared/contracts/entry-search.ts';
+import { useLocalStorage } from '#client/lib/local-storage.ts';
+import { Checkbox } from '#client/ui/choice.tsx';
+import { TextButton } from '#client/ui/button.tsx';
+import { Picker } from '#client/ui/picker.tsx';
+import { Popover } from '#client/ui/popover.tsx';
+import { exportAddress, type ExportFormat } from '../api.ts';
+import { columnNames, columnWords, fixedColumns, printHidden, readHidden, usual, type ColumnName } from '../columns.ts';
+import { groupings, type Grouping } from '../search-state.ts';
+
+const quiet = 'text-second hover:text-ink hover:underline underline-offset-4 aria-expanded:text-ink';
+
+const groupingWords: Readonly<Record<Grouping, string>> = { step: 'elementary step', surface: 'surface', source: 'source', none: 'nothing' };
+
+/** "Group by elementary step". */
+export function GroupChoice({ grouping, onChange }: { grouping: Grouping; onChange: (grouping: Grouping) => void }) {
+  return (
+    <Picker
+      label="Group by"
+      summary={<>Group by <b className="text-ink">{groupingWords[grouping]}</b></>}
+      summaryText={groupingWords[grouping]}
+      buttonClassName={quiet}
+      multiple={false}
+      options={groupings.map((value) => ({ value, label: groupingWords[value] }))}
+      chosen={[grouping]}
+      onChange={([next]) => next && onChange(next)}
+    />
+  );
+}
+
+/** Which columns are hidden, remembered on this device. */
+export function useHiddenColumns(): [ReadonlySet<ColumnName>, (hidden: ReadonlySet<ColumnName> | null) => void] {
+  const [stored, store] = useLocalStorage('sillstone.columns', usual);
+  return [readHidden(stored), (hidden) => store(hidden ? printHidden(hidden) : usual)];
+}
+
+/** The columns to be shown. */
+export function ColumnChoice({ hidden, onChange }: { hidden: ReadonlySet<ColumnName>; onChange: (hidden: ReadonlySet<ColumnName> | null) => void }) {
+  return (
+    <Popover label="Columns" buttonClassName={quiet} align="end" panelClassName="p-4">
+      {() => (
+        <fieldset>
+          <legend className="field-label pb-1">Columns shown</legend>
+          {columnNames.filter((name) => !fixedColumns.includes(name)).map((name) => (
+            <Checkbox
+              key={name}
+              label={columnWords[name]}
+              checked={!hidden.has(name)}
+              onChange={(event) => {
+                const next = new Set(hidden);
+                if (event.target.checked) next.delete(name);
+                else next.add(name);
+                onChange(next);
+              }}
+            />
+          ))}
+          <TextButton className="mt-2" onClick={() => onChange(null)}>The usual columns</TextButton>
+        </fieldset>
+      )}
+    </Popover>
+  );
+}
+
+const formats: readonly { format: ExportFormat; label: string; hint: string }[] = [
+  { format: 'zip', label: 'CSV and BibTeX, in a ZIP', hint: 'with the query, the versions and a checksum of each file' },
+  { format: 'csv', label: 'CSV', hint: 'one row per entry, as printed and converted' },
+  { format: 'bib', label: 'BibTeX', hint: 'every source cited, once' },
+];
+
+/** Files of everything the search finds. */
+export function ExportChoice({ filter, total, temperatureK }: { filter: EntryFilter; total: number; temperatureK: number }) {
+  return (
+    <Popover label="Export" buttonClassName={quiet} align="end" panelClassName="w-[22rem] p-4">
+      {(close) => (
+        <>
+          <p className="field-label">{`All ${total} entries found, with k at ${temperatureK} K`}</p>
+          <ul className="py-1">
+            {formats.map(({ format, label, hint }) => (
+              <li key={format} className="py-1.5">
+                <a href={exportAddress(format, temperatureK, filter)} download onClick={close}>{label}</a>
+                <span className="field-hint block">{hint}</span>
+              </li>
+            ))}
+          </ul>
+          <p className="field-hint">The values are literature reports, not design data.</p>
+        </>
+      )}
+    </Popover>
+  );
+}

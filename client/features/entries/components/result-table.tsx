@@ -1,0 +1,99 @@
+import { useMemo, type ReactNode } from 'react';
+import { Link, useNavigate } from 'react-router-dom';
+import type { Kind } from '#shared/domain/kinds.ts';
+import type { Entry } from '#shared/contracts/entries.ts';
+import type { SortKey } from '#shared/contracts/entry-search.ts';
+import { useInstrument } from '#client/lib/instrument.ts';
+import { Equation } from '#client/ui/equation.tsx';
+import { DataTable, type RowGroup } from '#client/ui/table.tsx';
+import { setChosen, useChosen } from '../chosen.ts';
+import { sortOf, tableSort, type ColumnName } from '../columns.ts';
+import { classWords } from '../entry-words.ts';
+import { groupSorts, type Grouping } from '../search-state.ts';
+import { entryRows, groupKey, rowView, type EntryRow, type RowView } from '../table-rows.ts';
+import { entryColumns } from './entry-columns.tsx';
+import { BarrierCell, MethodCell, PrintedText, RateCell, SourceCell, UncertaintyCell, ValueCell } from './row-cells.tsx';
+import { valueHeading } from './value-heading.tsx';
+
+interface ResultTableProps {
+  entries: readonly Entry[];
+  kinds: readonly Kind[] | undefined;
+  grouping: Grouping;
+  sort: SortKey;
+  hidden: ReadonlySet<ColumnName>;
+  activeId: string | null;
+  stale: boolean;
+  onActive: (accession: string | null) => void;
+  onSort: (sort: SortKey) => void;
+}
+
+/** The entries found, as a table (stanzas where the page is narrow). */
+export function ResultTable({ entries, kinds, grouping, sort, hidden, activeId, stale, onActive, onSort }: ResultTableProps) {
+  const { unit, temperatureK } = useInstrument();
+  const navigate = useNavigate();
+  const chosen = useChosen();
+  const rows = useMemo(() => entryRows(entries, grouping, kinds, unit), [entries, grouping, kinds, unit]);
+  const view = useMemo(() => rowView(rows, unit, temperatureK), [rows, unit, temperatureK]);
+  const columns = useMemo(() => entryColumns(view, grouping, valueHeading(rows, kinds)), [view, grouping, rows, kinds]);
+  const accessions = useMemo(() => new Set(chosen.keys()), [chosen]);
+  const group = useMemo(() => (grouping === 'none' ? undefined : ({ entry }: EntryRow) => heading(entry, grouping)), [grouping]);
+  return (
+    <DataTable
+      caption="Entries found"
+      columns={columns}
+      rows={rows}
+      rowId={rowId}
+      rowLabel={rowLabel}
+      hidden={hidden}
+      sort={sort === groupSorts[grouping] ? null : tableSort(sort)}
+      onSort={(next) => onSort((next && sortOf(next)) ?? groupSorts[grouping])}
+      chosen={accessions}
+      onChosen={(next) => setChosen(next, entries)}
+      group={group}
+      activeId={activeId}
+      onActive={onActive}
+      onOpen={({ entry }) => void navigate(`/entries/${entry.accession}`)}
+      stanza={(row) => <Stanza row={row} view={{ ...view, valueUnit: null, valueDecimals: 0, valuePower: false, kUnit: null }} grouping={grouping} />}
+      stale={stale}
+    />
+  );
+}
+
+const rowId = ({ entry }: EntryRow) => entry.accession;
+const rowLabel = ({ entry }: EntryRow) => `${entry.surface?.label ?? 'no surface'}, ${entry.source?.label ?? 'no source'}, ${entry.accession}`;
+
+/** The heading of a group of rows. */
+function heading(entry: Entry, grouping: Grouping): RowGroup {
+  const key = groupKey(entry, grouping);
+  const note = (words: string) => <span className="table-group-note">{words}</span>;
+  const label: ReactNode = grouping === 'step'
+    ? entry.step ? <><Equation equation={entry.step.equation} display />{' '}{note(classWords(entry.step.class))}</> : 'no elementary step'
+    : grouping === 'surface'
+      ? <>{entry.surface?.label ?? 'no surface'}</>
+      : entry.source ? <><Link to={`/sources/${entry.source.id}`}>{entry.source.label}</Link>{' '}{note(entry.source.title)}</> : 'no source';
+  return { key, label };
+}
+
+/** A row where the page is narrow: equation and surface, value with its glyph, as printed, source. */
+function Stanza({ row, view, grouping }: { row: EntryRow; view: RowView; grouping: Grouping }) {
+  const { entry, figure } = row;
+  return (
+    <>
+      <p className="stanza-head">
+        <Link to={`/entries/${entry.accession}`}>
+          {grouping !== 'step' && entry.step && <><Equation equation={entry.step.equation} />{' on '}</>}
+          {entry.surface?.label ?? 'no surface'}
+        </Link>
+      </p>
+      <div className="stanza-line">
+        <BarrierCell entry={entry} view={view} />
+        <span className="text-lead"><ValueCell figure={figure} view={view} /></span>
+        <span className="text-second"><UncertaintyCell figure={figure} /></span>
+      </div>
+      <p className="printed"><PrintedText figure={figure} /></p>
+      {entry.kAtT && <p className="stanza-quiet">k at {view.temperatureK} K: <RateCell entry={entry} view={view} /></p>}
+      <p className="stanza-quiet"><MethodCell entry={entry} /></p>
+      <p className="stanza-quiet"><SourceCell entry={entry} /></p>
+    </>
+  );
+}

@@ -1,0 +1,53 @@
+import { useEffect, useRef, useState } from 'react';
+import { InputField } from '#client/ui/field.tsx';
+
+const stillForMs = 300;
+
+/** Free text: the search follows once the typing rests. */
+export function SearchBox({ value, onChange }: { value: string; onChange: (text: string) => void }) {
+  const [typed, setTyped] = useState(value);
+  /** What was last handed on, to tell our own change of the address from one made elsewhere (Back, a cleared filter). */
+  const sent = useRef(value);
+  const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
+
+  useEffect(() => {
+    if (value === sent.current) return;
+    sent.current = value;
+    setTyped(value);
+  }, [value]);
+  useEffect(() => () => clearTimeout(timer.current), []);
+
+  function send(text: string) {
+    clearTimeout(timer.current);
+    if (text.trim() === sent.current) return;
+    sent.current = text.trim();
+    onChange(text.trim());
+  }
+
+  return (
+    <form
+      role="search"
+      onSubmit={(event) => {
+        event.preventDefault();
+        send(typed);
+      }}
+    >
+      <InputField
+        className="w-[25rem] max-w-full"
+        label="Also containing"
+        hideLabel
+        type="search"
+        autoComplete="off"
+        maxLength={400}
+        placeholder="also containing: step edge, potassium, author …"
+        value={typed}
+        onChange={(event) => {
+          const text = event.target.value;
+          setTyped(text);
+          clearTimeout(timer.current);
+          timer.current = setTimeout(() => send(text), stillForMs);
+        }}
+      />
+    </form>
+  );
+}

@@ -1,0 +1,65 @@
+import type { EntryFilter } from '#shared/contracts/entry-search.ts';
+import type { EnergyUnit } from '#shared/contracts/accounts.ts';
+import type { Vocabulary } from '#shared/contracts/vocabulary.ts';
+import { Button } from '#client/ui/button.tsx';
+import { EmptyState } from '#client/ui/states.tsx';
+import type { SearchPage } from '../api.ts';
+import { filterWords } from '../filter-words.ts';
+import { filtersInForce, type FilterName } from '../search-state.ts';
+
+interface ZeroResultsProps {
+  filter: EntryFilter;
+  emptiedBy: SearchPage['emptiedBy'];
+  withoutStatedRange: number | null;
+  unit: EnergyUnit;
+  vocabulary: Vocabulary | undefined;
+  onChange: (change: Partial<EntryFilter>) => void;
+  onClear: () => void;
+}
+
+/** Nothing is found: which filter emptied the list, and what would be found without it. */
+export function ZeroResults({ filter, emptiedBy, withoutStatedRange, unit, vocabulary, onChange, onClear }: ZeroResultsProps) {
+  const inForce = filtersInForce(filter);
+  if (inForce.length === 0) {
+    return <EmptyState title="The store holds no accepted entry yet"><p>Entries appear here once a reviewer has accepted them.</p></EmptyState>;
+  }
+  const known = [...(emptiedBy ?? [])].sort((a, b) => b.totalWithout - a.totalWithout);
+  const helps = known.filter(({ totalWithout }) => totalWithout > 0);
+  return (
+    <EmptyState title="No accepted entry answers this question" actions={<Button onClick={onClear}>Take all filters away</Button>}>
+      {helps.length > 0 ? (
+        <>
+          <p>Each of these filters empties the list together with the others:</p>
+          <ul className="pt-2 text-ink">
+            {helps.map(({ filter: name, totalWithout }) => {
+              const names = namesOf(name).filter((one) => inForce.includes(one));
+              const words = names.map((one) => filterWords(one, filter, unit, vocabulary));
+              const title = words[0]?.title ?? name;
+              return (
+                <li key={name} className="flex flex-wrap items-baseline gap-x-4 gap-y-1 border-b border-hairline py-2">
+                  <span className="min-w-0 flex-1 basis-72">{title}: <strong>{words.map(({ value }) => value).join(', ')}</strong></span>
+                  <Button small onClick={() => onChange(Object.fromEntries(names.map((one) => [one, undefined])))}>
+                    {`Take it away: ${totalWithout} ${totalWithout === 1 ? 'entry' : 'entries'}`}
+                  </Button>
+                </li>
+              );
+            })}
+          </ul>
+        </>
+      ) : <p>No single filter is to blame: taking any one of them away still finds nothing. Take several away, or all.</p>}
+      {withoutStatedRange !== null && withoutStatedRange > 0 && <p className="pt-3">{statedRangeWords(withoutStatedRange, filter.validAt)}</p>}
+    </EmptyState>
+  );
+}
+
+/** The filters that a name of the answer stands for: limits are taken away together. */
+function namesOf(name: string): FilterName[] {
+  if (name.startsWith('value')) return ['valueMin', 'valueMax'];
+  if (name.startsWith('year')) return ['yearFrom', 'yearTo'];
+  return [name as FilterName];
+}
+
+/** What the filter by valid range left out without knowing. */
+export function statedRangeWords(count: number, validAt: number | undefined): string {
+  return `${count} measured ${count === 1 ? 'entry is' : 'entries are'} left out because the source states no valid range${validAt === undefined ? '' : `, so that it is not known whether the value holds at ${validAt} K`}.`;
+}
