@@ -6,6 +6,7 @@ import { interruptChildren } from './processes.mjs';
 import { say } from './say.mjs';
 
 const repeatedWishMs = 5000;
+const lookMs = 500;
 /** @type {number | null} */
 let askedAt = null;
 /** @type {(() => void)[]} */
@@ -17,6 +18,16 @@ export class Stopped extends Error {}
 /** Begins to listen for the wish to stop. */
 export function listenForStop() {
   for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) process.on(signal, askToStop);
+  // npm killed or ended by a signal of its own leaves its child behind without a word: then nobody is there to stop us.
+  if (process.env.npm_lifecycle_event) {
+    const parent = process.ppid;
+    const watch = setInterval(() => {
+      if (process.ppid === parent) return;
+      clearInterval(watch);
+      askToStop();
+    }, lookMs);
+    watch.unref();
+  }
 }
 
 /** Whether a stop was asked for. */
