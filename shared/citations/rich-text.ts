@@ -5,7 +5,7 @@ export type RichTextRun = { text: string; marks: readonly RichTextMark[] };
 export type RichTextMark = 'i' | 'b' | 'sub' | 'sup';
 
 const tag = /<(\/?)(i|b|sub|sup|em|strong|jats:i|jats:b|jats:sub|jats:sup|jats:italic|jats:bold|italic|bold)\s*>/gi;
-const droppedTag = /<\/?(?:span|sc|scp|inf|p|jats:[a-z-]+|mml:[a-z]+|title)(?:\s[^<>]{0,200})?\/?>/gi;
+const droppedTag = /<\/?(?:span|sc|scp|inf|p|jats:(?!(?:i|b|sub|sup|italic|bold)\b)[a-z-]+|mml:[a-z]+|title)(?:\s[^<>]{0,200})?\/?>/gi;
 
 const markOf: Readonly<Record<string, RichTextMark>> = {
   i: 'i', em: 'i', italic: 'i', b: 'b', strong: 'b', bold: 'b', sub: 'sub', sup: 'sup',

@@ -93,7 +93,7 @@ function readOne(text: string): CslName | null {
     particle: words.slice(0, particles).join(' '),
     family: words.slice(particles).join(' '),
     suffix: pieces.length > 2 ? pieces[1] : undefined,
-    given: pieces.slice(pieces.length > 2 ? 2 : 1).join(', '),
+    given: pieces.slice(pieces.length > 2 ? 2 : 1).filter((piece) => piece !== '').join(', '),
   });
 }
 

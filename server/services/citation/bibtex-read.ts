@@ -67,7 +67,8 @@ function issuedOf(reader: EntryReader): unknown {
 }
 
 function entryToItem(entry: BibtexEntry, reader: EntryReader): Record<string, unknown> {
-  const type = cslTypeOfBibtex[entry.type] ?? 'document';
+  const subtype = reader.plain('entrysubtype');
+  const type = subtype === 'chapter' || subtype === 'entry-encyclopedia' ? subtype : cslTypeOfBibtex[entry.type] ?? 'document';
   const inBook = type === 'paper-conference' || type === 'chapter' || type === 'entry-encyclopedia';
   const subtitle = reader.rich('subtitle');
   const title = reader.rich('title');

@@ -8,15 +8,15 @@ export const cslTypeOfBibtex: Readonly<Record<string, string>> = {
 
 /** Entry type, and the fields the standard styles demand of it, for each CSL type we write (btxdoc and the biblatex manual, from memory). */
 export const bibtexTypeOfCsl: Readonly<Record<string, { type: string; needs: readonly string[] }>> = {
-  'article-journal': { type: 'article', needs: ['author', 'title', 'journal', 'year'] },
-  'article-magazine': { type: 'article', needs: ['author', 'title', 'journal', 'year'] },
-  'article-newspaper': { type: 'article', needs: ['author', 'title', 'journal', 'year'] },
-  'paper-conference': { type: 'inproceedings', needs: ['author', 'title', 'booktitle', 'year'] },
-  chapter: { type: 'incollection', needs: ['author', 'title', 'booktitle', 'publisher', 'year'] },
-  'entry-encyclopedia': { type: 'incollection', needs: ['author', 'title', 'booktitle', 'publisher', 'year'] },
-  book: { type: 'book', needs: ['author', 'title', 'publisher', 'year'] },
-  thesis: { type: 'phdthesis', needs: ['author', 'title', 'school', 'year'] },
-  report: { type: 'techreport', needs: ['author', 'title', 'institution', 'year'] },
+  'article-journal': { type: 'article', needs: ['title', 'journal', 'year'] },
+  'article-magazine': { type: 'article', needs: ['title', 'journal', 'year'] },
+  'article-newspaper': { type: 'article', needs: ['title', 'journal', 'year'] },
+  'paper-conference': { type: 'inproceedings', needs: ['title', 'booktitle', 'year'] },
+  chapter: { type: 'incollection', needs: ['title', 'booktitle', 'publisher', 'year'] },
+  'entry-encyclopedia': { type: 'incollection', needs: ['title', 'booktitle', 'publisher', 'year'] },
+  book: { type: 'book', needs: ['title', 'publisher', 'year'] },
+  thesis: { type: 'phdthesis', needs: ['title', 'school', 'year'] },
+  report: { type: 'techreport', needs: ['title', 'institution', 'year'] },
 };
 
 /** Stands in for a missing author in a file, since the standard styles refuse an article without one; read back as no author. */

@@ -52,11 +52,12 @@ class TexReader {
     if (character === '{') return this.closed('}', math, depth, script);
     if (character === '}') return '';
     if (character === '$') {
-      if (this.tex[this.at] === '$') this.at += 1;
+      const display = this.tex[this.at] === '$';
+      if (display) this.at += 1;
       // A dollar sign with no partner is a sum of money, not mathematics.
       if (!math && this.tex.indexOf('$', this.at) < 0) return '$';
       const inside = this.closed('$', true, depth, false);
-      if (this.tex[this.at] === '$' && this.tex[this.at - 2] === '$') this.at += 1;
+      if (display && this.tex[this.at] === '$') this.at += 1;
       return inside;
     }
     if (math && (character === '_' || character === '^')) {
@@ -128,7 +129,7 @@ class TexReader {
     const isWord = /^[a-zA-Z]/.test(name);
     // TeX swallows the space after a command word; in mathematics we keep one, since it reads better than none.
     if (isWord && !math) while (/[ \t\n]/.test(this.tex[this.at] ?? '')) this.at += 1;
-    if (name === '' ) return '';
+    if (name === '') return '';
     const accent = accentMarks.get(name);
     if (accent !== undefined && !(math && name === '=')) return this.accented(accent, math, depth);
     if (name === 'ce' || name === 'cee' || name === 'ch') {
@@ -157,7 +158,11 @@ class TexReader {
       return '';
     }
     const symbol = symbols.get(name);
-    if (symbol !== undefined) return symbol;
+    if (symbol !== undefined) {
+      // A Greek letter stands close to what follows; an arrow or a relation keeps its space.
+      if (math && /\p{L}/u.test(symbol)) while (/\s/.test(this.tex[this.at] ?? '')) this.at += 1;
+      return symbol;
+    }
     if (functionNames.has(name)) return name;
     if (silentCommands.has(name)) return '';
     if (spaceCommands.has(name)) return name === ',' || name === ';' || name === ':' || name === '>' ? (math ? '' : ' ') : ' ';

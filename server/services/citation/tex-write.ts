@@ -35,6 +35,8 @@ function isBalanced(text: string): boolean {
   return level === 0;
 }
 
+const loneBraces: Readonly<Record<string, string>> = { '{': '{\\textbraceleft}', '}': '{\\textbraceright}' };
+
 /** Greek words stay as they are; one or two Greek letters in a Latin text are symbols. */
 const greekRun = /[\p{Script=Greek}]+/gu;
 
@@ -56,8 +58,10 @@ function writePlain(text: string, greek: boolean): string {
   let from = 0;
   const add = (piece: string, symbol: boolean): void => {
     for (const one of piece) {
-      // Two hyphens or two quotes typed in a row would join into one sign.
-      out += ((one === '-' && out.endsWith('-')) || (one === "'" && out.endsWith("'")) ? '{}' : '') + (!balanced && one === '{' ? '{\\textbraceleft}' : !balanced && one === '}' ? '{\\textbraceright}' : character(one, symbol));
+      const tex = balanced || !(one in loneBraces) ? character(one, symbol) : loneBraces[one] ?? '';
+      // Hyphens, dashes and quotes that meet would join into another sign.
+      const joins = (tex.startsWith('-') && out.endsWith('-')) || (tex.startsWith("'") && out.endsWith("'"));
+      out += joins ? `{}${tex}` : tex;
     }
   };
   for (const run of composed.matchAll(greekRun)) {
