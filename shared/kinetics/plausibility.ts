@@ -150,3 +150,4 @@ export function checkKie(value: number, limits: { semiclassicalLimit?: number; h
 }
 
 export { outlierCheck } from './outlier.ts';
+export { recordChecks } from './record-checks.ts';

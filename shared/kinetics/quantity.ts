@@ -11,6 +11,7 @@ import { toSiteBasis } from './site-basis.ts';
 import { missingForStandard, type UncertaintyKind } from './uncertainty.ts';
 
 export { quantitySymbols };
+export type { QuantityContext, QuantitySymbol };
 
 /** A quantity as a contributor enters it: what is printed, and what the figures stand for. */
 export interface QuantityInput {

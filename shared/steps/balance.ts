@@ -1,0 +1,64 @@
+import { printEquation, printTerm } from './print-step.ts';
+import type { Term } from './species.ts';
+import { StepError, type Imbalance } from './step-error.ts';
+
+function totals(terms: readonly Term[]): Map<string, number> {
+  const sums = new Map<string, number>();
+  const add = (what: string, amount: number): void => {
+    sums.set(what, (sums.get(what) ?? 0) + amount);
+  };
+  for (const { coefficient, species } of terms) {
+    for (const [element, count] of Object.entries(species.composition)) add(element, coefficient * count);
+    for (const [isotope, count] of Object.entries(species.isotopes ?? {})) add(isotope, coefficient * count);
+    if (species.sites > 0) add('site', coefficient * species.sites);
+    if (species.charge) add('charge', coefficient * species.charge);
+  }
+  return sums;
+}
+
+function amount(value: number): string {
+  return String(Number(value.toPrecision(6)));
+}
+
+function sentence(what: string, left: number, right: number): string {
+  const more = Math.abs(right - left);
+  const side = right > left ? 'right' : 'left';
+  const name = what === 'site' ? (more === 1 ? 'site' : 'sites') : what === 'charge' ? 'of charge' : what;
+  return `${amount(more)} ${name} more on the ${side} (${amount(left)} left, ${amount(right)} right)`;
+}
+
+/** Free sites added at the end of a side. */
+function withSites(terms: readonly Term[], count: number): Term[] {
+  return [...terms, { coefficient: count, species: { formula: '*', spelling: '*', composition: {}, phase: 'free-site', sites: 1 } }];
+}
+
+/**
+ * Refuses an equation that is not balanced for elements, isotopes, sites and charge.
+ *
+ * Where only free sites are missing, the error holds the equation with them.
+ * @throws StepError `unbalanced`
+ */
+export function requireBalance(reactants: readonly Term[], products: readonly Term[]): void {
+  const left = totals(reactants);
+  const right = totals(products);
+  const imbalance: Imbalance[] = [];
+  const sentences: string[] = [];
+  for (const what of new Set([...left.keys(), ...right.keys()])) {
+    const l = left.get(what) ?? 0;
+    const r = right.get(what) ?? 0;
+    if (Math.abs(r - l) < 1e-6) continue;
+    imbalance.push({ what, by: Number((r - l).toPrecision(6)) });
+    sentences.push(sentence(what, l, r));
+  }
+  if (imbalance.length === 0) return;
+  const only = imbalance[0] as Imbalance;
+  let suggestion: string | undefined;
+  let addition = '';
+  if (imbalance.length === 1 && only.what === 'site') {
+    const fixedLeft = only.by > 0 ? withSites(reactants, only.by) : reactants;
+    const fixedRight = only.by < 0 ? withSites(products, -only.by) : products;
+    suggestion = printEquation(fixedLeft, fixedRight);
+    addition = `; add ${printTerm({ coefficient: Math.abs(only.by), species: withSites([], 1)[0]?.species as Term['species'] })} on the ${only.by > 0 ? 'left' : 'right'}`;
+  }
+  throw new StepError('unbalanced', `not balanced: ${sentences.join('; ')}${addition}`, { imbalance, ...(suggestion ? { suggestion } : {}) });
+}
