@@ -1,21 +1,14 @@
-import { calorie, e, N_A } from '#shared/kinetics/constants.ts';
 import type { EnergyUnit } from '#shared/contracts/accounts.ts';
-
-/** One of the reader's energy units in kJ/mol. */
-const kJPerMol: Readonly<Record<EnergyUnit, number>> = {
-  'kJ/mol': 1,
-  'kcal/mol': calorie,
-  'eV': (e * N_A) / 1000,
-};
+import { energyFromKJPerMol, energyToKJPerMol as toKJPerMol } from '#shared/kinetics/format.ts';
 
 /** An energy [kJ/mol] in the reader's unit. */
 export function energyIn(unit: EnergyUnit, valueKJPerMol: number): number {
-  return valueKJPerMol / kJPerMol[unit];
+  return energyFromKJPerMol(valueKJPerMol, unit);
 }
 
 /** An energy in the reader's unit as kJ/mol. */
 export function energyToKJPerMol(unit: EnergyUnit, value: number): number {
-  return value * kJPerMol[unit];
+  return toKJPerMol(value, unit);
 }
 
 /** A number ready to be set: digits with a true minus, and a power of ten where it is written with one. */

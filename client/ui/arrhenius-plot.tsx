@@ -4,6 +4,7 @@ import { fixed, plainNumber, setNumber } from '#client/lib/numbers.ts';
 import { useWidth } from '#client/lib/use-width.ts';
 import { PlotAxes } from './plot-axes.tsx';
 import { SeriesMark, seriesLook } from './series-look.tsx';
+import { UnitText, UnitTspans } from './unit-text.tsx';
 import { Value } from './value.tsx';
 
 /** One rate constant against temperature. */
@@ -59,7 +60,7 @@ export function ArrheniusPlot({ lines, temperatureK, unit, height = 270, activeI
   return (
     <figure ref={frame} className="m-0">
       <svg id={id} className="plot" width={width} height={height} role="img" aria-label={`${lines.length === 1 ? 'Rate constant' : `${lines.length} rate constants`} against temperature: log k in ${unit} over 1000 K/T; the values are in the table below.`}>
-        <PlotAxes x={x} y={y} left={pad.left} bottom={height - pad.bottom} right={width - pad.right} top={pad.top} xLabel="1000 K / T" yLabel={<>log<tspan dy="3" fontSize="0.78em">10</tspan><tspan dy="-3">{` k / (${unit})`}</tspan></>} />
+        <PlotAxes x={x} y={y} left={pad.left} bottom={height - pad.bottom} right={width - pad.right} top={pad.top} xLabel="1000 K / T" yLabel={<>log<tspan dy="3" fontSize="0.78em">10</tspan><tspan dy="-3"> k / (</tspan><UnitTspans unit={unit} />)</>} />
         <path d={`M${atX} ${pad.top - 6}V${height - pad.bottom}`} stroke="var(--color-ochre)" strokeWidth="1.500" strokeDasharray="2 3" />
         <text className="plot-doubt" x={atX > width * 0.6 ? atX - 7 : atX + 7} y={pad.top + 4} textAnchor={atX > width * 0.6 ? 'end' : 'start'}>{`${temperatureK} K${extrapolated ? ', extrapolated' : ''}`}</text>
         {sampled.map(({ one, samples, solid }, index) => {
@@ -125,7 +126,7 @@ function ArrheniusTable({ lines, temperatureK, unit }: { lines: readonly Arrheni
       <summary>The plot as a table</summary>
       <table className="data-table mt-2">
         <thead>
-          <tr><th scope="col">Entry</th><th scope="col" className="numeric">T<br />K</th><th scope="col" className="numeric">log k</th><th scope="col" className="numeric">k<br />{unit}</th></tr>
+          <tr><th scope="col">Entry</th><th scope="col" className="numeric">T<br />K</th><th scope="col" className="numeric">log k</th><th scope="col" className="numeric">k<br /><UnitText unit={unit} /></th></tr>
         </thead>
         <tbody>
           {rows.map(({ one, t }) => (
@@ -133,7 +134,7 @@ function ArrheniusTable({ lines, temperatureK, unit }: { lines: readonly Arrheni
               <th scope="row">{one.label}</th>
               <td className="numeric">{plainNumber(setNumber(t, { digits: 4 }))}{within(one, t) ? '' : ', extrapolated'}</td>
               <td className="numeric">{fixed(one.lnK(t) / Math.LN10, 2)}</td>
-              <td className="numeric"><Value value={Math.exp(one.lnK(t))} scientific significantDigits={3} /></td>
+              <td className="numeric"><Value value={Math.exp(one.lnK(t))} scientific digits={3} /></td>
             </tr>
           ))}
         </tbody>

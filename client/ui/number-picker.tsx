@@ -67,7 +67,7 @@ export function NumberPicker({ label, value, unit, unset, min, max, onChange, of
             }}
           >
             <InputField
-              label={`${label}, ${unit}`} inputMode="decimal" autoComplete="off" autoFocus error={error}
+              label={`${label}, ${unit}`} inputMode="decimal" autoComplete="off" data-autofocus error={error}
               value={typed} onChange={(event) => setTyped(event.target.value)}
             />
             <div className="flex flex-wrap gap-2">

@@ -124,7 +124,7 @@ function PickerList<Value extends string>(
           className="control picker-search"
           type="text"
           role="combobox"
-          autoFocus
+          data-autofocus
           autoComplete="off"
           spellCheck={false}
           aria-label={`Find in: ${label}`}
@@ -148,7 +148,7 @@ function PickerList<Value extends string>(
         aria-multiselectable={multiple || undefined}
         className="picker-list"
         tabIndex={search ? -1 : 0}
-        autoFocus={!search}
+        data-autofocus={search ? undefined : true}
         aria-activedescendant={search ? undefined : activeId}
         onKeyDown={search ? undefined : onKey}
       >

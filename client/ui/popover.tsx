@@ -59,6 +59,9 @@ export function useFloating(): Floating {
     const over = box.right - (room - margin);
     const shift = over > 0 ? -Math.min(over, box.left - margin) : box.left < margin ? margin - box.left : 0;
     element.style.translate = `${shift}px`;
+    // Only now, since focusing a panel that still hangs over the edge would scroll the page sideways.
+    element.querySelector<HTMLElement>('[data-autofocus]')?.focus({ preventScroll: true });
+    element.scrollIntoView({ block: 'nearest', inline: 'nearest' });
   }, [open]);
 
   return { open, show, hide, root, button, panel };

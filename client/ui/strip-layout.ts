@@ -19,7 +19,7 @@ export interface PlacedPoint extends StripPoint {
 
 /** More values than this are counted in a histogram: dots would cover one another. */
 export const mostDots = 400;
-export const lanes = 4;
+export const mostLanes = 4;
 const clear = 11;
 
 /** The axis over all values: from zero where none is negative, to a round number. */
@@ -32,7 +32,7 @@ export function stripScale(values: readonly number[], width: number, margin: num
 
 /** Puts each dot in the lowest lane where it covers no other; where all are taken, in the one that has the most room. */
 export function placePoints(points: readonly StripPoint[], x: (value: number) => number): PlacedPoint[] {
-  const ends: number[] = Array.from({ length: lanes }, () => Number.NEGATIVE_INFINITY);
+  const ends: number[] = Array.from({ length: mostLanes }, () => Number.NEGATIVE_INFINITY);
   return [...points].sort((a, b) => a.value - b.value).map((point) => {
     const at = x(point.value);
     const free = ends.findIndex((end) => at - end >= clear);

@@ -1,7 +1,7 @@
 import { useId, useMemo, useState, type KeyboardEvent, type PointerEvent } from 'react';
 import { useWidth } from '#client/lib/use-width.ts';
 import { StripRangeFields } from './strip-range.tsx';
-import { countInBins, lanes, mostDots, placePoints, stripScale, type Histogram, type PlacedPoint, type StripPoint } from './strip-layout.ts';
+import { countInBins, mostDots, mostLanes, placePoints, stripScale, type Histogram, type PlacedPoint, type StripPoint } from './strip-layout.ts';
 
 export interface StripRange {
   min: number | null;
@@ -26,8 +26,9 @@ interface StripProps {
 
 const margin = 12;
 const laneHeight = 11;
-const axisY = lanes * laneHeight + 10;
-const height = axisY + 22;
+
+/** Where the axis lies under so many lanes of dots. */
+const axisUnder = (lanes: number) => lanes * laneHeight + 10;
 
 /** All found values on one axis: filled when measured, open when computed, an arrow for a bound; a histogram above 400. */
 export function Strip({ points, histogram, unit, what, activeId = null, onActive, onOpen, chosen, range, onRange }: StripProps) {
@@ -39,6 +40,8 @@ export function Strip({ points, histogram, unit, what, activeId = null, onActive
   const dense = Boolean(histogram) || points.length > mostDots;
   const placed = useMemo(() => (dense ? [] : placePoints(points, scale)), [dense, points, scale]);
   const counted = useMemo(() => (dense ? histogram ?? countInBins(values, scale) : null), [dense, histogram, values, scale]);
+  const axisY = axisUnder(dense ? mostLanes : Math.max(1, ...placed.map((point) => point.lane + 1)));
+  const height = axisY + 22;
   const active = placed.find((point) => point.id === activeId);
   const count = histogram ? histogram.counts.reduce((sum, one) => sum + one, 0) : points.length;
 
@@ -96,8 +99,8 @@ export function Strip({ points, histogram, unit, what, activeId = null, onActive
           onPointerCancel={() => setDrag(null)}
         >
           {shownRange && <rect className="strip-range" x={shownRange.x0} y={0.5} width={Math.max(1, shownRange.x1 - shownRange.x0)} height={axisY} />}
-          <Axis ticks={scale.ticks(Math.max(3, Math.round(width / 130)))} x={scale} unit={unit} width={width} />
-          {counted && <Bars histogram={counted} x={scale} />}
+          <Axis ticks={scale.ticks(Math.max(3, Math.round(width / 130)))} x={scale} unit={unit} width={width} axisY={axisY} />
+          {counted && <Bars histogram={counted} x={scale} axisY={axisY} />}
           {placed.map((point) => (
             <g
               key={point.id}
@@ -109,7 +112,7 @@ export function Strip({ points, histogram, unit, what, activeId = null, onActive
               onPointerLeave={() => onActive?.(null)}
               onClick={() => onOpen?.(point.id)}
             >
-              <Dot point={point} marked={point.id === activeId} chosen={chosen?.has(point.id) ?? false} />
+              <Dot point={point} marked={point.id === activeId} chosen={chosen?.has(point.id) ?? false} axisY={axisY} />
             </g>
           ))}
         </svg>
@@ -128,7 +131,7 @@ function roundTo(value: number, ticks: readonly number[]): number {
   return Number((Math.round(value / step) * step).toPrecision(6));
 }
 
-function Axis({ ticks, x, unit, width }: { ticks: readonly number[]; x: (value: number) => number; unit: string; width: number }) {
+function Axis({ ticks, x, unit, width, axisY }: { ticks: readonly number[]; x: (value: number) => number; unit: string; width: number; axisY: number }) {
   return (
     <g className="plot" aria-hidden="true">
       <path className="plot-axis" d={`M0 ${axisY + 0.5}H${width}`} />
@@ -144,7 +147,7 @@ function Axis({ ticks, x, unit, width }: { ticks: readonly number[]; x: (value: 
   );
 }
 
-function Bars({ histogram, x }: { histogram: Histogram; x: (value: number) => number }) {
+function Bars({ histogram, x, axisY }: { histogram: Histogram; x: (value: number) => number; axisY: number }) {
   const most = Math.max(1, ...histogram.counts);
   const tall = axisY - 4;
   return histogram.counts.map((count, index) => {
@@ -155,7 +158,7 @@ function Bars({ histogram, x }: { histogram: Histogram; x: (value: number) => nu
   });
 }
 
-function Dot({ point, marked, chosen }: { point: PlacedPoint; marked: boolean; chosen: boolean }) {
+function Dot({ point, marked, chosen, axisY }: { point: PlacedPoint; marked: boolean; chosen: boolean; axisY: number }) {
   const { x, bound, computed } = point;
   const y = axisY - 8 - point.lane * laneHeight;
   const look = `strip-dot ${marked ? 'strip-marked' : ''}`;

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import type { Bound } from '#shared/domain/kinds.ts';
-import { decimalsOf, fixed, plainNumber, setNumber, type SetNumber } from '#client/lib/numbers.ts';
+import { decimalsOf, fixed, setNumber, type SetNumber } from '#client/lib/numbers.ts';
 import { Sign } from './signs.tsx';
 import { UnitText } from './unit-text.tsx';
 
@@ -16,6 +16,8 @@ export interface ValueProps {
   significantDigits?: number | null;
   /** Digits of the uncertainty that are shown. */
   uDigits?: number;
+  /** Exactly so many digits where there is no uncertainty, in the place of those printed and a guard digit. */
+  digits?: number;
   /** With a power of ten: always, never, or where the number is very large or small. */
   scientific?: boolean | 'auto';
   /** Large, for the head of an entry. */
@@ -29,71 +31,80 @@ export function NumberText({ number }: { number: SetNumber }) {
   return (
     <span className="number">
       {number.text}
-      {number.exponent !== null && (
-        <>
-          {'\u2009×\u200910'}
-          <span className="plain-spelling">^</span>
-          <sup>{String(number.exponent).replace('-', '\u2212')}</sup>
-        </>
-      )}
+      {number.exponent !== null && <PowerOfTen exponent={number.exponent} />}
     </span>
   );
 }
 
+function PowerOfTen({ exponent }: { exponent: number }) {
+  return <>{'\u2009×\u200910'}<span className="plain-spelling">^</span><sup>{String(exponent).replace('-', '\u2212')}</sup></>;
+}
+
+/** A value set for the page: its parts share one number of decimals and one power of ten. */
+interface Setting {
+  set: (number: number) => string;
+  exponent: number | null;
+}
+
 /** How the numbers of a value are set, one way for its value, limits and uncertainty. */
-function setterFor({ value, low, high, u, uScale = 'linear', uDigits, significantDigits, scientific = 'auto' }: ValueProps) {
+function settingOf({ value, low, high, u, uScale = 'linear', uDigits = 2, digits, significantDigits, scientific = 'auto' }: ValueProps): Setting {
   const central = value ?? high ?? low ?? 0;
-  const linearU = uScale === 'linear' ? u : null;
   const size = Math.abs(central);
-  const power = scientific === 'auto' ? size !== 0 && (size >= 1e5 || size < 1e-3) : scientific;
-  if (power) {
-    const exponent = size === 0 ? 0 : Math.floor(Math.log10(size));
-    const digits = linearU ? Math.max(1, exponent - Math.floor(Math.log10(linearU)) + (uDigits ?? 2)) : significantDigits ?? 3;
-    return { set: (number: number) => setNumber(number, { scientific: true, digits: Math.min(8, digits) }), exponent };
+  const linearU = uScale === 'linear' && u ? u : null;
+  const power = central !== 0 && (scientific === 'auto' ? size >= 1e5 || size < 1e-3 : scientific);
+  const precision = { u: linearU, uDigits, significantDigits: digits ?? significantDigits, guard: digits ? 0 : 1 };
+  if (!power) {
+    const decimals = decimalsOf(central, precision);
+    return { set: (number) => fixed(number, decimals), exponent: null };
   }
-  const decimals = decimalsOf(central, { u: linearU, uDigits, significantDigits });
-  return { set: (number: number) => setNumber(number, { scientific: false, decimals }), exponent: null };
+  const { exponent } = setNumber(central, { scientific: true, digits: digits ?? (significantDigits ?? 2) + 1 });
+  const shift = (number: number) => number / 10 ** (exponent ?? 0);
+  const decimals = decimalsOf(shift(central), { ...precision, u: linearU && shift(linearU) });
+  return { set: (number) => fixed(shift(number), decimals), exponent };
+}
+
+/** A factor by which a value may be off, from the standard uncertainty of its logarithm. */
+function factorText(u: number): string {
+  return setNumber(Math.exp(u), { digits: 2 }).text;
 }
 
 /** A value as text, for labels and copies: "186.2 ± 2.9 kJ/mol", "≥ 152 kJ/mol". */
 export function valueText(props: ValueProps): string {
   const { value, low, high, bound = '=', u, uScale = 'linear', unit = '' } = props;
-  const { set } = setterFor(props);
-  const tail = unit ? ` ${unit}` : '';
-  if (bound === 'range' && low != null && high != null) return `${plainNumber(set(low))} to ${plainNumber(set(high))}${tail}`;
+  const { set, exponent } = settingOf(props);
+  const power = exponent === null ? '' : ` × 10^${String(exponent).replace('-', '\u2212')}`;
+  const tail = `${power}${unit ? ` ${unit}` : ''}`;
+  if (bound === 'range' && low != null && high != null) return `${set(low)} to ${set(high)}${tail}`;
   const limit = value ?? high ?? low;
   if (limit == null) return 'not reported';
   const sign = bound === '=' || bound === 'range' ? '' : `${bound} `;
-  const spread = u == null ? '' : uScale === 'ln' ? ` ×/÷ ${setNumber(Math.exp(u), { digits: 2 }).text}` : ` ± ${plainNumber(set(u))}`;
-  return `${sign}${plainNumber(set(limit))}${spread}${tail}`;
+  if (u == null) return `${sign}${set(limit)}${tail}`;
+  if (uScale === 'ln') return `${sign}${set(limit)}${power} ×/÷ ${factorText(u)}${unit ? ` ${unit}` : ''}`;
+  const pair = `${set(limit)} ± ${set(u)}`;
+  return `${sign}${exponent === null ? pair : `(${pair})`}${tail}`;
 }
 
 /** A value with its bound, uncertainty and unit. */
 export function Value(props: ValueProps) {
   const { value, low, high, bound = '=', u, uScale = 'linear', unit, large = false, absent = 'not reported' } = props;
-  const { set, exponent } = setterFor(props);
-  const unitPart = unit ? <>{' '}<UnitText unit={unit} /></> : null;
   const limit = value ?? high ?? low;
   if (limit == null) return <span className="text-second">{absent}</span>;
-  const size = large ? 'value value-large' : 'value';
-  if (bound === 'range' && low != null && high != null) {
-    return (
-      <span className={size}>
-        <b className="value-figure"><NumberText number={set(low)} /></b> to <b className="value-figure"><NumberText number={set(high)} /></b>
-        <span className="value-rest">{unitPart}</span>
-      </span>
-    );
-  }
+  const { set, exponent } = settingOf(props);
+  const power = exponent === null ? null : <PowerOfTen exponent={exponent} />;
+  const range = bound === 'range' && low != null && high != null;
+  const pair = !range && u != null && uScale === 'linear';
   return (
-    <span className={size}>
+    <span className={large ? 'value value-large' : 'value'}>
       {bound !== '=' && bound !== 'range' && <><Sign of={bound} />{' '}</>}
-      <b className="value-figure"><NumberText number={set(limit)} /></b>
-      <span className="value-rest">
-        {u != null && (uScale === 'ln'
-          ? <>{' ×/÷\u2009'}{setNumber(Math.exp(u), { digits: 2 }).text}</>
-          : <>{' ±\u2009'}<NumberText number={exponent === null ? set(u) : setNumber(u, { scientific: true, digits: props.uDigits ?? 2 })} /></>)}
-        {unitPart}
-      </span>
+      {pair && power && '('}
+      {range
+        ? <><b className="value-figure">{set(low)}</b> to <b className="value-figure">{set(high)}</b></>
+        : <b className="value-figure">{set(limit)}</b>}
+      {pair && <span className="value-rest">{` ±\u2009${set(u)}`}</span>}
+      {pair && power && ')'}
+      {power && <b className="value-power">{power}</b>}
+      {!range && u != null && uScale === 'ln' && <span className="value-rest">{` ×/÷\u2009${factorText(u)}`}</span>}
+      {unit && <span className="value-rest">{' '}<UnitText unit={unit} /></span>}
     </span>
   );
 }
@@ -121,9 +132,7 @@ export function Aligned({ number, bound = '=', decimals = 0, power = false, stro
       </span>
       {(power || number.exponent !== null) && (
         <span className="aligned-power">
-          {number.exponent !== null && (
-            <>{'\u2009×\u200910'}<span className="plain-spelling">^</span><sup>{String(number.exponent).replace('-', '\u2212')}</sup></>
-          )}
+          {number.exponent !== null && <PowerOfTen exponent={number.exponent} />}
         </span>
       )}
     </span>

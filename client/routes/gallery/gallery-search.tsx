@@ -60,13 +60,13 @@ export function GallerySearch() {
   ];
   return (
     <section>
-      <p className="sentence">
+      <div className="sentence" role="group" aria-label="What is shown">
         Show <Picker label="Quantity" summary="activation energies" options={[{ value: 'e', label: 'activation energies', count: 312 }, { value: 'k', label: 'rate constants', count: 140 }]} chosen={['e']} onChange={() => undefined} multiple={false} />
         {' for '}<Picker label="Elementary step" summary="any step" options={[]} chosen={[]} onChange={() => undefined} />
         {' on '}<Picker label="Metal" summary={metal.length ? metal.join(', ') : 'any metal'} options={metals} chosen={metal} onChange={setMetal} clearLabel="Any metal" />
         {' by '}<Picker label="Method" summary={method.length ? method.join(', ') : 'any method'} options={[{ value: 'TPD', label: 'TPD' }, { value: 'DFT', label: 'DFT' }]} chosen={method} onChange={setMethod} clearLabel="Any method" />
         , valid at <NumberPicker label="Valid at" value={validAt} unit="K" unset="any temperature" min={1} max={5000} onChange={setValidAt} offer={{ value: temperatureK, label: `${temperatureK} K` }} />.
-      </p>
+      </div>
       <div className="flex flex-wrap items-center gap-3 py-5">
         <InputField className="w-full max-w-[380px]" label="Also containing" hideLabel placeholder="also containing: step edge, potassium, author …" />
         <span className="text-second">10 of 412 entries</span>
