@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { readBibtex } from '#server/services/citation/bibtex-read.ts';
 import { readVocabulary } from '#seeds/vocabulary/read-vocabulary.ts';
 import {
   readDemoEntries, readDemoNotices, readDemoPeople, readDemoSources, readLookupOnlySource, splitBibliography,
@@ -145,6 +146,16 @@ describe('people and sources', () => {
     for (const { key, doi, bibtex } of sources) {
       expect(doi, key).toMatch(/^10\.5555\/\S+$/);
       expect(bibtex, key).toContain('Invented for demonstration');
+    }
+  });
+
+  it('has a bibliography that reads without a problem: accents, chemistry, particles, a body as author, a thesis, odd DOIs', () => {
+    const { entries: citations, problems } = readBibtex(readDemoSources());
+    expect(problems).toEqual([]);
+    expect(citations).toHaveLength(60);
+    const shown = JSON.stringify(citations);
+    for (const feature of ['Sørlie', 'Dvořáčková', '"literal":"Harrowgate Institute for Imagined Interfaces"', '"suffix":"Jr."', 'N<sub>2</sub>', '"type":"thesis"', '<215::aid-aue7>3.0.co;2-k']) {
+      expect(shown.toLowerCase()).toContain(feature.toLowerCase());
     }
   });
 
