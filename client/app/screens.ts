@@ -18,4 +18,8 @@ export interface Screen {
 /** Every page of the application, one line each, in the order of the header. */
 export const screens: readonly Screen[] = [
   { path: '/search', load: () => import('#client/routes/search/search-page.tsx'), nav: { label: 'Search', group: 'read' }, instrument: true },
+  { path: '/contribute', load: () => import('#client/routes/contribute/page.tsx'), nav: { label: 'Contribute', group: 'write', needs: 'contributor' } },
+  { path: '/contribute/:accession', load: () => import('#client/routes/contribute/page.tsx') },
+  { path: '/contributions', load: () => import('#client/routes/contributions/page.tsx'), nav: { label: 'My submissions', group: 'write', needs: 'contributor' } },
+  { path: '/sign-in', load: () => import('#client/routes/sign-in/page.tsx') },
 ];
