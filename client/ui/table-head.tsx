@@ -12,14 +12,17 @@ export function TableHead<T>({ column, sort, onSort }: TableHeadProps<T>) {
   const sorted = sortable && sort?.key === column.sortKey ? (sort?.descending ? 'descending' : 'ascending') : undefined;
   const name = (
     <>
-      <span className="block">{column.header}</span>
+      {column.headerText
+        ? <><span className="sr-only">{column.headerText}</span><span className="block" aria-hidden="true">{column.header}</span></>
+        : <span className="block">{column.header}</span>}
+      {' '}
       {column.unit && <span className="table-unit">{column.unit}</span>}
     </>
   );
   return (
-    <th scope="col" className={`${column.numeric ? 'numeric' : ''} ${column.className ?? ''}`} aria-sort={sorted} aria-label={sortable ? undefined : column.headerText}>
+    <th scope="col" className={`${column.numeric ? 'numeric' : ''} ${column.className ?? ''}`} aria-sort={sorted}>
       {sortable ? (
-        <button type="button" className="sort-button" onClick={onSort} aria-label={column.headerText && `${column.headerText}, sort`}>
+        <button type="button" className="sort-button" onClick={onSort}>
           <span>{name}</span>
           <SortSign sorted={sorted} />
         </button>

@@ -1,5 +1,5 @@
 import { useWindowVirtualizer } from '@tanstack/react-virtual';
-import { useLayoutEffect, useRef, useState, type KeyboardEvent } from 'react';
+import { useCallback, useLayoutEffect, useRef, useState, type KeyboardEvent } from 'react';
 import { Checkbox } from './choice.tsx';
 import type { DataColumn, DataRow, RowGroup } from './table-model.ts';
 
@@ -53,6 +53,11 @@ function RowsInSight<T extends object>(props: BodyProps<T>) {
     scrollMargin: top,
     getItemKey: (index) => keyOf(lines[index] as TableLine<T>),
   });
+  const { measureElement } = virtual;
+  // A row without height is not laid out (a hidden page): measuring it would have all rows drawn.
+  const measure = useCallback((element: HTMLTableRowElement | null) => {
+    if (element && element.getBoundingClientRect().height > 0) measureElement(element);
+  }, [measureElement]);
   const items = virtual.getVirtualItems();
   const before = (items[0]?.start ?? top) - top;
   const after = virtual.getTotalSize() - ((items.at(-1)?.end ?? top) - top);
@@ -62,7 +67,7 @@ function RowsInSight<T extends object>(props: BodyProps<T>) {
       {before > 0 && <tr aria-hidden="true"><td className="table-space" colSpan={span} style={{ height: before }} /></tr>}
       {items.map((item) => {
         const line = lines[item.index];
-        return line && <Line key={item.key} line={line} index={item.index} measure={virtual.measureElement} {...props} />;
+        return line && <Line key={item.key} line={line} index={item.index} measure={measure} {...props} />;
       })}
       {after > 0 && <tr aria-hidden="true"><td className="table-space" colSpan={span} style={{ height: after }} /></tr>}
     </tbody>

@@ -62,15 +62,15 @@ export function DataTable<T extends object>(props: DataTableProps<T>) {
     return <StanzaList {...props} columns={visible} lines={lines} chosen={chosen} onToggle={(row) => row.toggleSelected()} />;
   }
 
-  /** Moves the focus from row to row; rows not drawn yet are scrolled to first. */
+  /** Moves the focus from row to row; the rows next to those in sight are drawn already. */
   function focusRow(index: number) {
     const ids = modelRows.map((row) => row.id);
     const id = ids[Math.max(0, Math.min(ids.length - 1, index))];
     if (id === undefined) return;
     setActive(id);
-    const find = () => table.current?.querySelector<HTMLElement>(`tr[data-row="${CSS.escape(id)}"]`);
-    find()?.focus();
-    find()?.scrollIntoView({ block: 'nearest' });
+    const element = [...(table.current?.querySelectorAll<HTMLElement>('tr[data-row]') ?? [])].find((row) => row.dataset.row === id);
+    element?.focus();
+    element?.scrollIntoView({ block: 'nearest' });
   }
 
   function onRowKey(event: KeyboardEvent, row: DataRow<T>) {

@@ -1,7 +1,7 @@
 import { spawn } from 'node:child_process';
 import { chromium } from 'playwright-core';
 import type { TestProject } from 'vitest/node';
-import { findBrowser } from '#server/bootstrap/browser.mjs';
+import { findBrowser } from '#server/bootstrap/test-programs.mjs';
 import { buildWhatIsStale } from '#server/bootstrap/build.mjs';
 import { createEmptyDatabase, databaseUrl } from './test-server.ts';
 
@@ -47,7 +47,7 @@ export default async function prepare(project: TestProject): Promise<() => Promi
   await createEmptyDatabase(adminUrl, template);
   await runCommand('migrate', adminUrl, template);
   await runCommand('seed', adminUrl, template);
-  const executablePath = process.env.TEST_BROWSER ?? findBrowser();
+  const executablePath = findBrowser();
   if (!executablePath) throw new Error('The browser tests need Chromium; npm test installs it.');
   const browser = await chromium.launchServer({ executablePath, host: '127.0.0.1', args: ['--no-sandbox', '--disable-dev-shm-usage', '--disable-gpu'] });
   project.provide('browserEndpoint', browser.wsEndpoint());
