@@ -120,7 +120,7 @@ function dateOf(value: unknown): CslDate | undefined {
 /**
  * Reads a date as bibliographies print it: a year, an ISO 8601 date, or words, which are kept as words.
  *
- * @example dateFromWords('1994-06') // { 'date-parts': [[1994, 6]] }
+ * @example dateFromWords('1994-06')['date-parts'][0][1] === 6
  */
 export function dateFromWords(words: string): CslDate | undefined {
   const line = words.trim();

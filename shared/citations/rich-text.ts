@@ -17,7 +17,7 @@ const markOf: Readonly<Record<string, RichTextMark>> = {
  * A tag that is never closed ends with the title, and a closing tag that was never opened is dropped. Nothing in the
  * result is markup: it is safe to show each run as text.
  *
- * @example richText('CH<sub>4</sub>') // [{ text: 'CH', marks: [] }, { text: '4', marks: ['sub'] }]
+ * @example richText('CH<sub>4</sub>')[1].marks[0] === 'sub'
  */
 export function richText(text: string): RichTextRun[] {
   const runs: RichTextRun[] = [];

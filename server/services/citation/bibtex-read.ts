@@ -1,7 +1,7 @@
 import { dateFromWords, readCsl, type Csl } from '#shared/citations/csl.ts';
 import { plainText } from '#shared/citations/rich-text.ts';
 import { readBibtexNames } from './bibtex-names.ts';
-import { scanBibtex, type BibtexEntry, type ReadingProblem } from './bibtex-scan.ts';
+import { bibtexBounds, scanBibtex, type BibtexEntry, type ReadingProblem } from './bibtex-scan.ts';
 import { anonymous, cslTypeOfBibtex } from './bibtex-types.ts';
 import { readTex } from './tex-read.ts';
 
@@ -116,6 +116,10 @@ export function readBibtex(text: string): BibliographyReading {
   const byKey = new Map(scan.entries.map((entry) => [entry.key.toLowerCase(), entry]));
   const entries: Csl[] = [];
   for (const entry of scan.entries) {
+    if (problems.length > bibtexBounds.problems) {
+      problems.push({ line: entry.line, message: `There are more than ${bibtexBounds.problems} problems. The text from here on was not read.` });
+      break;
+    }
     const crossref = entry.fields.get('crossref')?.trim().toLowerCase();
     const reader = new EntryReader(entry, crossref === undefined ? null : byKey.get(crossref) ?? null);
     const reading = readCsl(entryToItem(entry, reader));

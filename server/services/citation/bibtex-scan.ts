@@ -8,7 +8,7 @@ export type BibtexEntry = { line: number; type: string; key: string; fields: Rea
 export type BibtexScan = { entries: BibtexEntry[]; problems: ReadingProblem[] };
 
 /** Bounds on a file, so that no paste can hold the server up; beyond them a problem says so. */
-export const bibtexBounds = { text: 4_000_000, entry: 100_000, entries: 20_000, field: 20_000, fields: 200, problems: 200, depth: 200 } as const;
+export const bibtexBounds = { text: 2_000_000, entry: 100_000, entries: 5_000, field: 20_000, fields: 200, problems: 200, depth: 200 } as const;
 
 const months: readonly (readonly [string, string])[] = ['jan', 'feb', 'mar', 'apr', 'may', 'jun', 'jul', 'aug', 'sep', 'oct', 'nov', 'dec']
   .map((month, index) => [month, String(index + 1)] as const);
@@ -176,9 +176,6 @@ class LineCounter {
 export function scanBibtex(text: string): BibtexScan {
   const entries: BibtexEntry[] = [];
   const problems: ReadingProblem[] = [];
-  const problem = (line: number, message: string): void => {
-    if (problems.length < bibtexBounds.problems) problems.push({ line, message });
-  };
   if (text.length > bibtexBounds.text) {
     return { entries, problems: [{ line: 1, message: `The text is longer than ${bibtexBounds.text} characters. Split it.` }] };
   }
@@ -188,10 +185,14 @@ export function scanBibtex(text: string): BibtexScan {
     const lines = new LineCounter(piece.text, piece.line);
     for (let start = inlineStart.exec(piece.text); start !== null; start = inlineStart.exec(piece.text)) {
       const type = (start[1] ?? '').toLowerCase();
+      if (problems.length >= bibtexBounds.problems) {
+        problems.push({ line: piece.line, message: `There are more than ${bibtexBounds.problems} problems. The text from here on was not read.` });
+        return { entries, problems };
+      }
       const line = lines.at(start.index);
       if (type === 'comment') continue;
       if (entries.length >= bibtexBounds.entries) {
-        problem(line, `The text holds more than ${bibtexBounds.entries} entries. Split it.`);
+        problems.push({ line, message: `The text holds more than ${bibtexBounds.entries} entries. Split it.` });
         return { entries, problems };
       }
       const scanner = new EntryScanner(piece.text.slice(0, start.index + bibtexBounds.entry), start.index + start[0].length, strings);
@@ -210,7 +211,7 @@ export function scanBibtex(text: string): BibtexScan {
       } catch (error) {
         if (!(error instanceof EntryError)) throw error;
         const name = key === '' ? 'The entry' : `Entry "${key.slice(0, 60)}"`;
-        problem(lines.at(error.at), `${name} from line ${line} was passed over. ${error.message}.`);
+        problems.push({ line: lines.at(error.at), message: `${name} from line ${line} was passed over. ${error.message}.` });
         // What follows a break up to the next entry at the start of a line can't be told apart from its fields.
         break;
       }

@@ -15,12 +15,6 @@ function pagesOf(csl: Csl, isArticle: boolean): string | undefined {
   return text === undefined ? undefined : writeTexName(text.replace(/(?<=[\p{L}\d])\s*[-–—]+\s*(?=[\p{L}\d])/gu, '–'));
 }
 
-function yearText(csl: Csl): string | undefined {
-  const year = yearOf(csl);
-  if (year !== null) return String(year).padStart(4, '0');
-  return undefined;
-}
-
 /** Where a work of no standard kind appeared, in one line, since biber allows it no volume and no pages. */
 function howPublished(csl: Csl): string | undefined {
   const place = csl['container-title'] ?? csl.publisher ?? csl.note;

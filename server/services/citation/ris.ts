@@ -5,7 +5,7 @@ import { plainText } from '#shared/citations/rich-text.ts';
 import type { ReadingProblem } from './bibtex-scan.ts';
 
 /** Bounds on an RIS text; beyond them a problem says so. */
-export const risBounds = { text: 4_000_000, records: 20_000, problems: 200, value: 5000, valuesPerRecord: 3000 } as const;
+export const risBounds = { text: 2_000_000, records: 5_000, problems: 200, value: 5000, valuesPerRecord: 3000 } as const;
 
 /** Types by the "TY" codes of the RIS format (reference manager export format, from memory). */
 const cslTypeOfRis: Readonly<Record<string, string>> = {
@@ -73,7 +73,7 @@ export function readRis(text: string): { entries: Csl[]; problems: ReadingProble
   const entries: Csl[] = [];
   const problems: ReadingProblem[] = [];
   const problem = (line: number, message: string): void => {
-    if (problems.length < risBounds.problems) problems.push({ line, message });
+    problems.push({ line, message });
   };
   if (text.length > risBounds.text) return { entries, problems: [{ line: 1, message: `The text is longer than ${risBounds.text} characters. Split it.` }] };
   let record: RisRecord | null = null;
@@ -91,6 +91,10 @@ export function readRis(text: string): { entries: Csl[]; problems: ReadingProble
     const line = index + 1;
     const match = /^([A-Z][A-Z0-9]) {0,3}- ?(.*)$/.exec(lineText);
     const tag = match?.[1] ?? '';
+    if (problems.length >= risBounds.problems) {
+      problems.push({ line, message: `There are more than ${risBounds.problems} problems. The text from here on was not read.` });
+      return { entries, problems };
+    }
     const value = (match?.[2] ?? lineText).trim().slice(0, risBounds.value);
     if (tag === 'TY') {
       finish(false, line);

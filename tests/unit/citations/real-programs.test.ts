@@ -50,7 +50,7 @@ async function bibtex(name: string, text: string, style: string): Promise<{ log:
 
 async function biber(name: string, text: string): Promise<string[]> {
   await writeFile(path.join(folder, `${name}.bib`), text);
-  const { stdout } = await run('biber', ['--tool', '--validate-datamodel', '--output-encoding=UTF-8', '--output-fieldcase=lower', `${name}.bib`], { cwd: folder, env: { ...process.env, PAR_GLOBAL_TMPDIR: folder } });
+  const { stdout } = await run('biber', ['--tool', '--validate-datamodel', '--output-encoding=UTF-8', '--output-fieldcase=lower', `${name}.bib`], { cwd: folder });
   return stdout.split('\n').filter((line) => /WARN|ERROR/.test(line));
 }
 
@@ -82,8 +82,8 @@ describe('what we write, read by the real programs without a warning', () => {
     ]);
   }, 60_000);
 
-  test('three hundred generated citations, in both programs', async () => {
-    const text = bibliography(fc.sample(csls, { numRuns: 300, seed: 20_240_101 }));
+  test('a hundred and fifty generated citations, in both programs', async () => {
+    const text = bibliography(fc.sample(csls, { numRuns: 150, seed: 20_240_101 }));
     const { log } = await bibtex('many', text, 'plain');
     expect(log.split('\n').filter((line) => /warning|error/i.test(line))).toEqual([]);
     expect(await biber('many', text)).toEqual([]);
