@@ -10,11 +10,7 @@ function convert(input: EntryInput, step: ElementaryStep): ConvertedQuantity[] {
   const { rateOf, conditions = {} } = input;
   const consumed = typeof rateOf === 'object' ? rateOf.consumptionOf : null;
   const coefficient = step.reactants.filter(({ species }) => species.formula === consumed).reduce((sum, term) => sum + term.coefficient, 0);
-  return (input.quantities ?? []).map((quantity) => convertQuantity({
-    ...quantity,
-    // The entry holds the power of the column heading (10^3 k: 1e3), by which what is printed is divided.
-    multiplier: quantity.multiplier === undefined ? null : 1 / quantity.multiplier,
-  }, {
+  return (input.quantities ?? []).map((quantity) => convertQuantity(quantity, {
     gasOrder: step.gasOrder, surfaceOrder: step.surfaceOrder, kineticOrders: input.kineticOrders,
     rateOf: consumed === null ? (rateOf as 'event' | 'unknown' | undefined) : { consumption: consumed, coefficient },
     temperatureK: conditions.temperatureK, siteDensityPerM2: conditions.siteDensityPerM2, siteDensitySource: conditions.siteDensitySource,

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { readDemoEntries } from '#seeds/demo/read-demo.ts';
+import { assessEntry } from '#shared/assessment/assess-entry.ts';
 import { describeSurface } from '#shared/domain/surface.ts';
 import { readStep } from '#shared/steps/parse-step.ts';
 import { readAllEntries } from './demo-energies.ts';
@@ -13,6 +14,15 @@ describe('the demonstration values', () => {
     const unbalanced = readDemoEntries().find(({ script }) => script.mark === 'unbalanced');
     expect(unbalanced?.script.outcome).toBe('draft');
     expect(() => readStep(unbalanced?.input.step?.equation ?? '')).toThrow(/balance/);
+  });
+
+  it('lack nothing a submission needs unless they are drafts, and raise no check but the kind of an uncertainty left unknown', () => {
+    for (const { row, input, script } of entries) {
+      const { faults, checks } = assessEntry(input);
+      expect(faults.length > 0, `${row}: ${faults.map(({ message }) => message).join(' ')}`).toBe(script.outcome === 'draft');
+      const raised = checks.map(({ code }) => code).filter((code) => code !== 'uncertainty-unknown');
+      expect(raised, row).toEqual(script.mark === 'quoted' ? ['quoted-elsewhere'] : []);
+    }
   });
 
   it('cover fourteen elementary steps and the overall reaction, over most step classes', () => {
