@@ -7,7 +7,6 @@
 import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { ensureBrowser } from './browser.mjs';
 import { buildWhatIsStale } from './build.mjs';
 import { runChecks } from './check.mjs';
 import { checkout, inCheckout } from './checkout.mjs';
@@ -16,6 +15,7 @@ import { ensurePackages } from './packages.mjs';
 import { run } from './processes.mjs';
 import { SetupError, say } from './say.mjs';
 import { checkStop, isStopping, listenForStop } from './stopping.mjs';
+import { ensureTestPrograms } from './test-programs.mjs';
 import { startThrowawayPostgres } from './throwaway-postgres.mjs';
 
 const filters = process.argv.slice(2);
@@ -39,7 +39,7 @@ async function runEverything() {
   checkNodeVersion();
   await ensurePackages();
   checkStop();
-  const browser = await ensureBrowser();
+  await ensureTestPrograms();
   checkStop();
   const postgres = await startThrowawayPostgres();
   try {
@@ -48,7 +48,7 @@ async function runEverything() {
     checkStop();
     await countBuild();
     checkStop();
-    add(await runVitest({ TEST_DATABASE_ADMIN_URL: postgres.adminUrl, TEST_BROWSER: browser }));
+    add(await runVitest({ TEST_DATABASE_ADMIN_URL: postgres.adminUrl }));
   } finally {
     await postgres.stop();
   }

@@ -62,13 +62,6 @@ it('has the fixed folders at the top and nothing else', () => {
   expect([...folders].filter((folder) => !allowed.has(folder))).toEqual([]);
 });
 
-it('gives every feature the same name on both sides, in its contract and in its tests', () => {
-  const names = (matching: RegExp, part: number): Set<string> => new Set(projectFiles(matching).map((file) => file.split('/')[part]?.replace(/\.ts$/, '') ?? ''));
-  const contracts = names(/^shared\/contracts\/[^/]+\.ts$/, 2);
-  const server = [...names(/^server\/features\/[^/]+\//, 2)];
-  expect(server.filter((name) => !contracts.has(name))).toEqual([]);
-});
-
 it('keeps the role names of the server: routes, service, repository, policy, present', () => {
   const odd = projectFiles(/^server\/features\//).filter((file) => !/^server\/features\/([a-z-]+)\/(\1|[a-z-]+)(\.(routes|service|repository|policy|present))?\.ts$/.test(file));
   expect(odd).toEqual([]);
