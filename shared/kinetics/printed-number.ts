@@ -76,13 +76,11 @@ export function readDecimal(scanner: Scanner, signed = true): Decimal | null {
   return { text: text.endsWith('.') ? text.slice(0, -1) : text, decimals: fraction?.length ?? 0, significantDigits: countSignificant(`${integer}.${fraction ?? ''}`) };
 }
 
-const exponentBody = /\^?\s?(?:\{\s?([+-]?\d+)\s?\}|\(\s?([+-]?\d+)\s?\)|([+-]?\d+))/y;
+const exponentBody = /\s?(?:\{\s?([+-]?\d+)\s?\}|\(\s?([+-]?\d+)\s?\)|([+-]?\d+))/y;
 
 /** Reads the exponent after `10`: `^13`, `**13`, `^{13}`, `^(-3)`. */
 function readExponent(scanner: Scanner): number | null {
-  const stars = scanner.take(/\*\*/y);
-  if (!stars && !scanner.peek(/ ?\^/y)) return null;
-  scanner.skipSpace();
+  if (!scanner.take(/\*\*| ?\^/y)) return null;
   const match = scanner.take(exponentBody);
   if (!match) throw scanner.fail('an exponent such as 13 or -3');
   return Number(match[1] ?? match[2] ?? match[3]);

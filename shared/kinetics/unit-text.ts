@@ -12,6 +12,7 @@ const raised: Record<string, string> = { '⁰': '0', '¹': '1', '²': '2', '³':
 function tidy(text: string): string {
   return text
     .replace(/<sup>(.*?)<\/sup>/gi, '^{$1}')
+    .replace(/\^\{\s?([+\u2212-]?[\d.]+)\s?\}/g, '^$1')
     .replace(/\\(?:mathrm|text|rm)\s?\{([^{}]*)\}/g, '$1')
     .replace(/\\[,;:! ]|\\cdot|\\times|[$~]/g, ' ')
     .replace(/[⁰¹²³⁴⁵⁶⁷⁸⁹⁻⁺]+/g, (run) => `^${[...run].map((character) => raised[character]).join('')}`)
@@ -24,7 +25,8 @@ function tidy(text: string): string {
     .replace(/\*/g, ' ')
     .replace(/\(\s?per (?:surface |active |adsorption )?site\s?\)/gi, ' site-1')
     .replace(/\bper (?:surface |active |adsorption )?site\b/gi, ' site-1')
-    .replace(/(?<=\S )per\b|^per\b/gi, '/')
+    .replace(/(?<=\S )per\b/gi, '/')
+    .replace(/^\s*per\b/i, '1/')
     .replace(/\bmm Hg\b/g, 'mmHg')
     .replace(/\bmolec\.(?=\W|$)/g, 'molec')
     .replace(/\be\.\s?u\.?(?![A-Za-z])/gi, 'eu')
