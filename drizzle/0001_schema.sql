@@ -61,6 +61,7 @@ CREATE TABLE "converted_quantities" (
 	"unit" text collate "C" NOT NULL,
 	"site_value" double precision,
 	"site_unit" text collate "C",
+	"site_exponent_change" double precision,
 	"missing" jsonb NOT NULL,
 	"derivation" jsonb NOT NULL,
 	CONSTRAINT "converted_quantities_key" UNIQUE("conversion_id","quantity_id")
@@ -376,7 +377,7 @@ ALTER TABLE "elementary_steps" ADD CONSTRAINT "elementary_steps_merged_into_elem
 ALTER TABLE "surfaces" ADD CONSTRAINT "surfaces_merged_into_surfaces_id_fk" FOREIGN KEY ("merged_into") REFERENCES "public"."surfaces"("id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 CREATE INDEX "sessions_expire_idx" ON "sessions" USING btree ("expire");--> statement-breakpoint
 CREATE INDEX "conversions_revision_idx" ON "conversions" USING btree ("revision_id","created_at");--> statement-breakpoint
-CREATE UNIQUE INDEX "revisions_one_open_per_entry" ON "revisions" USING btree ("entry_id") WHERE "revisions"."state" in ('draft', 'submitted', 'under-review', 'returned');--> statement-breakpoint
+CREATE UNIQUE INDEX "revisions_one_open_per_entry" ON "revisions" USING btree ("entry_id") WHERE "revisions"."state" in ('draft', 'submitted', 'under-review');--> statement-breakpoint
 CREATE UNIQUE INDEX "revisions_one_accepted_per_entry" ON "revisions" USING btree ("entry_id") WHERE "revisions"."state" = 'accepted';--> statement-breakpoint
 CREATE INDEX "revisions_author_idx" ON "revisions" USING btree ("author_id","changed_at");--> statement-breakpoint
 CREATE INDEX "revisions_source_idx" ON "revisions" USING btree ("source_id");--> statement-breakpoint

@@ -13,7 +13,6 @@ const schema = z.object({
   SILLSTONE_DEMO: flag.default(false),
   SILLSTONE_DEMO_FORCE: flag.default(false),
   SILLSTONE_CLIENT_DIR: z.string().default('dist/client'),
-  SILLSTONE_RUN_AS: z.string().regex(/^\d+:\d+$/).optional(),
   SESSION_SECRET: z.string().min(32, 'SESSION_SECRET must have at least 32 characters'),
   DOI_RESOLVER_URL: optionalUrl,
   PUBLIC_URL: optionalUrl,
@@ -29,8 +28,6 @@ export interface Environment {
   databaseReadUrl: string | undefined;
   demonstration: boolean;
   clientDir: string;
-  /** User and group to drop to once the port is open; only when started by root. */
-  runAs: { uid: number; gid: number } | undefined;
   sessionSecret: string;
   doiResolverUrl: string | undefined;
   publicUrl: string | undefined;
@@ -57,7 +54,6 @@ export function readEnvironment(source: NodeJS.ProcessEnv = process.env): Enviro
   if (env.DATABASE_OWNER_URL && new URL(env.DATABASE_OWNER_URL).username === new URL(env.DATABASE_URL).username) {
     throw new Error('DATABASE_URL and DATABASE_OWNER_URL name the same role: the application must not run as the owner of the tables.');
   }
-  const [uid, gid] = env.SILLSTONE_RUN_AS?.split(':').map(Number) ?? [];
   return {
     development: env.NODE_ENV === 'development',
     port: env.PORT,
@@ -67,7 +63,6 @@ export function readEnvironment(source: NodeJS.ProcessEnv = process.env): Enviro
     databaseReadUrl: env.DATABASE_READ_URL,
     demonstration: env.SILLSTONE_DEMO,
     clientDir: env.SILLSTONE_CLIENT_DIR,
-    runAs: uid !== undefined && gid !== undefined ? { uid, gid } : undefined,
     sessionSecret: env.SESSION_SECRET,
     doiResolverUrl: env.DOI_RESOLVER_URL,
     publicUrl: env.PUBLIC_URL,

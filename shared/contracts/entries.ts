@@ -84,7 +84,7 @@ export const check = z.object({ code: z.string(), severity: z.enum(checkSeveriti
 export type Check = z.infer<typeof check>;
 
 /** What the viewer may do with an entry; the client shows by this only. */
-export const entryActions = ['edit', 'submit', 'withdraw', 'revise', 'claim', 'decide', 'export'] as const;
+export const entryActions = ['edit', 'submit', 'withdraw', 'revise', 'claim', 'decide', 'retract', 'export'] as const;
 export type EntryAction = (typeof entryActions)[number];
 
 /** A fault in a draft: where in the input, and what to do. */
@@ -126,6 +126,8 @@ export const entry = z.object({
   conditions: conditions,
   validRange: z.object({ min: z.number().nullable(), max: z.number().nullable() }).nullable(),
   note: z.string().nullable(),
+  /** Public words on why a retracted version was retracted. */
+  notice: z.string().nullable(),
   checks: z.array(check),
   kAtT: kAtT.nullable(),
   /** Constants and core versions of the conversion shown. */
@@ -213,6 +215,11 @@ export const reviseEntry = endpoint({
   method: 'POST', path: '/entries/:accession/revise', access: 'contributor',
   summary: 'Open a new draft revision of an accepted or returned entry, copied from the last', params: accessionParam,
   body: z.object({ reason: z.string().trim().max(1000).optional() }), response: entryForEditing,
+});
+
+export const retractEntry = endpoint({
+  method: 'POST', path: '/entries/:accession/retract', access: 'reviewer', summary: 'Retract an accepted entry, with a public reason', params: accessionParam,
+  body: z.object({ reason: z.string().trim().min(1).max(1000) }), response: z.object({ accession: z.string(), state: z.enum(states) }),
 });
 
 /** One of my own submissions and where it stands. */

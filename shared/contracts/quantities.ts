@@ -17,7 +17,7 @@ export const quantityInput = z.object({
   energyType: z.enum(energyTypes).optional(),
   asPrinted: z.string().max(120),
   unitAsPrinted: z.string().max(80).default(''),
-  /** Header scaling: the column is headed "multiplier × quantity", so that the value is what is printed divided by it. */
+  /** Scaling of the column heading: the value is the printed figure times this, so a column headed `A/10^13` has 1e13 and one headed `10^3 k` has 1e-3. */
   multiplier: z.number().positive().optional(),
   uncertaintyKind: z.enum(uncertaintyKinds).optional(),
   coverageFactor: z.number().positive().max(10).optional(),
@@ -41,6 +41,8 @@ export const quantity = z.object({
   unit: z.string(),
   siteValue: z.number().nullish(),
   siteUnit: z.string().nullish(),
+  /** What is added to the temperature exponent when `siteValue` of a pre-exponential factor is used. */
+  siteExponentChange: z.number().nullish(),
   /** What is not known that the next level of conversion would need. */
   missing: z.array(z.string()).nullish(),
   reportedUncertainty: z.number().nullable(),

@@ -32,8 +32,8 @@ export const transitions: Readonly<Record<State, Partial<Record<RevisionAction, 
 /** States that everybody may read: they were public once and stay so, with their notice. */
 export const everAcceptedStates = ['accepted', 'superseded', 'retracted'] as const satisfies readonly State[];
 
-/** States in which an entry already has a revision on its way, so that no second one may be opened. */
-export const openStates = ['draft', 'submitted', 'under-review', 'returned'] as const satisfies readonly State[];
+/** States in which an entry has a revision on its way, so that no second one may be opened. A returned one is answered by the next revision. */
+export const openStates = ['draft', 'submitted', 'under-review'] as const satisfies readonly State[];
 
 /** The state that `action` leads to from `state`, or null when it is not allowed. */
 export function nextState(state: State, action: RevisionAction): State | null {

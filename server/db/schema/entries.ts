@@ -123,6 +123,7 @@ export const convertedQuantities = pgTable('converted_quantities', {
   unit: code('unit').notNull(),
   siteValue: real('site_value'),
   siteUnit: code('site_unit'),
+  siteExponentChange: real('site_exponent_change'),
   missing: jsonb('missing').$type<string[]>().notNull(),
   derivation: jsonb('derivation').$type<{ operation: string; from: string; to: string; constant?: string; assumption?: string; reference: string }[]>().notNull(),
 }, (t) => [unique('converted_quantities_key').on(t.conversionId, t.quantityId)]);
