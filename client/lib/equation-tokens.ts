@@ -1,3 +1,6 @@
+import { StepError } from '#shared/steps/step-error.ts';
+import { speakStep, stepTokens, type StepToken } from '#shared/steps/step-format.ts';
+
 /** A piece of an equation as it is set. */
 export interface EquationToken {
   kind: 'text' | 'count' | 'index' | 'isotope' | 'star' | 'site' | 'charge' | 'plus' | 'arrow' | 'equilibrium' | 'phase';
@@ -58,31 +61,31 @@ export function equationTokens(equation: string): EquationToken[] {
   return tokens;
 }
 
-const spoken: Partial<Record<EquationToken['kind'], string>> = { plus: 'plus', arrow: 'gives', equilibrium: 'in equilibrium with' };
+const kindOf: Readonly<Record<Exclude<StepToken['kind'], 'sup'>, EquationToken['kind']>> = {
+  'text': 'text', 'sub': 'index', 'site': 'star', 'site-type': 'site', 'coefficient': 'count', 'plus': 'plus', 'arrow': 'arrow',
+};
 
-/** An equation as it is read aloud: "N adsorbed plus N adsorbed gives N 2 plus 2 free sites". */
-export function speakEquation(tokens: readonly EquationToken[]): string {
-  const words: string[] = [];
-  let speciesStart = true;
-  let count = '';
-  for (const token of tokens) {
-    const joint = spoken[token.kind];
-    if (joint) {
-      words.push(joint);
-      speciesStart = true;
-      count = '';
-    } else if (token.kind === 'star' && speciesStart) {
-      words.push(count && count !== '1' ? 'free sites' : 'a free site');
-      speciesStart = false;
-    } else if (token.kind === 'star') {
-      words.push(token.text.length > 1 ? `adsorbed on ${token.text.length} sites` : 'adsorbed');
-    } else if (token.kind === 'count') {
-      words.push(token.text);
-      count = token.text;
-    } else {
-      words.push(token.kind === 'site' ? `at ${token.text.slice(1)}` : token.kind === 'phase' ? (token.text === '(g)' ? 'gas' : 'adsorbed') : token.text);
-      speciesStart = false;
-    }
+function fromStepToken({ kind, text }: StepToken): EquationToken {
+  if (kind === 'sup') return /^\d+$/.test(text) ? { kind: 'isotope', text } : { kind: 'charge', text: `^${text}` };
+  return { kind: kindOf[kind], text: kind === 'site-type' ? `_${text}` : text };
+}
+
+/** Only the symbol right after an isotope's number belongs to it: the letters that follow are cut off. */
+function afterIsotope(token: EquationToken, index: number, all: readonly EquationToken[]): EquationToken[] {
+  const [, symbol, rest] = /^([A-Z][a-z]?)(.+)$/.exec(token.text) ?? [];
+  if (all[index - 1]?.kind !== 'isotope' || !symbol || !rest) return [token];
+  return [{ kind: 'text', text: symbol }, { kind: 'text', text: rest }];
+}
+
+/** An equation cut into pieces, and in words for those who listen; one that is no equation yet is heard as it is typed. */
+export function readEquation(equation: string): { tokens: EquationToken[]; spoken: string } {
+  try {
+    const spoken = speakStep(equation);
+    // The reader of equations keeps one arrow; an equilibrium and a phase that were printed are set as printed.
+    const plain = /<->|<=>|[⇌↔]|\([a-z]+\)/.test(equation);
+    return { tokens: plain ? equationTokens(equation) : stepTokens(equation).map(fromStepToken).flatMap(afterIsotope), spoken };
+  } catch (error) {
+    if (error instanceof StepError) return { tokens: equationTokens(equation), spoken: equation };
+    throw error;
   }
-  return words.join(' ');
 }

@@ -1,5 +1,5 @@
 import { memo, type ReactNode } from 'react';
-import { equationTokens, speakEquation, type EquationToken } from '#client/lib/equation-tokens.ts';
+import { readEquation, type EquationToken } from '#client/lib/equation-tokens.ts';
 import { Sign } from './signs.tsx';
 
 interface EquationProps {
@@ -26,9 +26,9 @@ function setToken(token: EquationToken): ReactNode {
 
 /** An equation set with true indices and quiet raised asterisks; read aloud in words, copied in plain spelling. */
 export const Equation = memo(function Equation({ equation, display = false }: EquationProps) {
-  const tokens = equationTokens(equation);
+  const { tokens, spoken } = readEquation(equation);
   return (
-    <span className={display ? 'equation equation-display' : 'equation'} role="img" aria-label={speakEquation(tokens)}>
+    <span className={display ? 'equation equation-display' : 'equation'} role="img" aria-label={spoken}>
       {tokens.map((token, index) => {
         const before = tokens[index - 1];
         // A hair of room after a count of species, so that "2 N*" is not read as "2N".

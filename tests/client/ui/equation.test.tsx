@@ -3,12 +3,12 @@ import { describe, expect, it } from 'vitest';
 import { Equation } from '#client/ui/equation.tsx';
 
 const cases: [plain: string, spoken: string][] = [
-  ['N* + N* -> N2 + 2*', 'N adsorbed plus N adsorbed gives N 2 plus 2 free sites'],
-  ['NH3* + * -> NH2* + H*', 'N H 3 adsorbed plus a free site gives N H 2 adsorbed plus H adsorbed'],
-  ['N2 + 2* <-> 2N*', 'N 2 plus 2 free sites in equilibrium with 2 N adsorbed'],
-  ['CO(g) + O*_edge -> CO2 + *', 'C O gas plus O adsorbed at edge gives C O 2 plus a free site'],
-  ['[13C]O* + * -> C* + O*', '13 C O adsorbed plus a free site gives C adsorbed plus O adsorbed'],
-  ['C2H4** -> C2H4 + 2*', 'C 2 H 4 adsorbed on 2 sites gives C 2 H 4 plus 2 free sites'],
+  ['N* + N* -> N2 + 2*', 'N adsorbed and N adsorbed to N2 gas and two free sites'],
+  ['NH3* + * -> NH2* + H*', 'N H3 adsorbed and a free site to N H2 adsorbed and H adsorbed'],
+  ['N2 + 2* <-> 2N*', 'N2 gas and two free sites to two N adsorbed'],
+  ['CO(g) + O*_edge -> CO2 + *_edge', 'C O gas and O adsorbed at edge to C O2 gas and a free edge site'],
+  ['[13C]O* + * -> [13C]* + O*', '13 C O adsorbed and a free site to 13 C adsorbed and O adsorbed'],
+  ['C2H4** -> C2H4 + 2*', 'C2 H4 adsorbed on two sites to C2 H4 gas and two free sites'],
 ];
 
 /** What a copy of the element holds: its text, runs of space as one, as a browser copies it. */
@@ -35,7 +35,9 @@ describe('equation', () => {
     expect(container.querySelectorAll('svg')).toHaveLength(1);
   });
 
-  it.each(['', 'N2 + ', '??', 'N* + N* ->', '→→', '++'])('sets what is still being typed as far as it goes: %s', (typed) => {
-    expect(() => render(<Equation equation={typed} />)).not.toThrow();
+  it.each(['', 'N2 +', '??', 'N* + N* ->', '->->', '++', 'Xy* -> Q'])('sets what is still being typed as far as it goes, and says it as typed: %s', (typed) => {
+    const { container } = render(<Equation equation={typed} />);
+    expect(copied(container.firstElementChild).replace(/\s/g, '')).toBe(typed.replace(/\s/g, ''));
+    expect(container.firstElementChild?.getAttribute('aria-label')).toBe(typed);
   });
 });
