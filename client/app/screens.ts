@@ -18,8 +18,12 @@ export interface Screen {
 /** Every page of the application, one line each, in the order of the header. */
 export const screens: readonly Screen[] = [
   { path: '/search', load: () => import('#client/routes/search/search-page.tsx'), nav: { label: 'Search', group: 'read' }, instrument: true },
+  { path: '/entries/:accession', load: () => import('#client/routes/entry/entry-page.tsx'), instrument: true },
+  { path: '/entries/:accession/v/:version', load: () => import('#client/routes/entry/entry-page.tsx'), instrument: true },
   { path: '/contribute', load: () => import('#client/routes/contribute/page.tsx'), nav: { label: 'Contribute', group: 'write', needs: 'contributor' } },
   { path: '/contribute/:accession', load: () => import('#client/routes/contribute/page.tsx') },
   { path: '/contributions', load: () => import('#client/routes/contributions/page.tsx'), nav: { label: 'My submissions', group: 'write', needs: 'contributor' } },
+  { path: '/review', load: () => import('#client/routes/review/queue-page.tsx'), nav: { label: 'Review', group: 'write', needs: 'reviewer', count: 'reviewsWaiting' } },
+  { path: '/review/:submission', load: () => import('#client/routes/review/submission-page.tsx') },
   { path: '/sign-in', load: () => import('#client/routes/sign-in/page.tsx') },
 ];

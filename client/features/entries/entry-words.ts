@@ -13,7 +13,8 @@ export function methodTags(entry: Entry): string[] {
 /** How the value was found, short: "TPD", "DFT, PBE". */
 export function methodText(entry: Entry): string {
   const { technique, class: methodClass } = entry.method;
-  return [technique ?? methodClass, entry.conditions.functional].filter(Boolean).join(', ') || 'not reported';
+  const { functional } = entry.conditions;
+  return [technique ?? methodClass, functional && !technique?.includes(functional) ? functional : null].filter(Boolean).join(', ') || 'not reported';
 }
 
 /** The class of an elementary step in words. */

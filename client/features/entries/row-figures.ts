@@ -61,12 +61,26 @@ export interface RowFigure {
   decimals: number;
 }
 
+/**
+ * The half-width as reported, in the unit of the value: an uncertainty of unknown kind still tells how many digits deserve to be shown.
+ * The printed central value gives the factor between the two.
+ */
+function reportedInUnit({ value }: ShownQuantity, { asPrinted: text, reportedUncertainty, uncertaintyScale }: Quantity): number | null {
+  const central = Number.parseFloat(text.replace('\u2212', '-'));
+  if (value === null || reportedUncertainty === null || uncertaintyScale !== 'linear' || !Number.isFinite(central) || central === 0) return null;
+  return Math.abs(reportedUncertainty * (value / central));
+}
+
+/** Digits that a dense table shows of a value without uncertainty; trailing zeros of a print ("111600 J/mol") are no digits to be trusted. */
+const mostDigits = 4;
+
 /** Sets the value of a row as a dense table does: to one digit of its uncertainty, else as printed. */
 export function rowFigure(quantity: Quantity, unit: EnergyUnit): RowFigure {
   const figure = shown(quantity, unit);
   const central = figure.value ?? figure.high ?? figure.low ?? 0;
-  const linearU = quantity.uncertaintyScale === 'linear' ? figure.u : null;
-  const decimals = decimalsOf(central, { u: linearU, uDigits: 1, significantDigits: quantity.significantDigits, guard: figure.guard });
+  const linearU = quantity.uncertaintyScale === 'linear' ? figure.u ?? reportedInUnit(figure, quantity) : null;
+  const printedDigits = Math.min(mostDigits, (quantity.significantDigits ?? mostDigits) + figure.guard);
+  const decimals = decimalsOf(central, { u: linearU, uDigits: 1, significantDigits: printedDigits, guard: 0 });
   const digits = Math.max(1, quantity.significantDigits ?? 3);
   const set = (value: number | null) => (value === null ? null : setNumber(value, { decimals, digits }));
   const limit = figure.value ?? (quantity.bound === 'range' ? null : figure.high ?? figure.low);
@@ -79,10 +93,10 @@ export function commonUnit(figures: readonly (RowFigure | null)[]): string | nul
   return units.size === 1 ? [...units][0] ?? null : null;
 }
 
-/** The value exactly as the source prints it, with the heading's factor where there was one. */
+/** The value exactly as the source prints it, with the factor that the heading of its column gives. */
 export function asPrinted({ asPrinted: text, unitAsPrinted, multiplier }: Quantity): string {
   const printed = unitAsPrinted && !text.includes(unitAsPrinted) ? `${text} ${unitAsPrinted}` : text;
-  return multiplier == null || multiplier === 1 ? printed : `${printed} (column headed × ${multiplier})`;
+  return multiplier == null || multiplier === 1 ? printed : `${printed} (× ${multiplier.toExponential().replace('e+', 'e')} by its heading)`;
 }
 
 /** What is said in the place of a standard uncertainty that is not known. */

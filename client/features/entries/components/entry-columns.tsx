@@ -9,6 +9,7 @@ import { columnSort, columnWords, type ColumnName } from '../columns.ts';
 import type { Grouping } from '../search-state.ts';
 import { barrierOf } from '../row-figures.ts';
 import type { EntryRow, RowView } from '../table-rows.ts';
+import { SurfaceLabel } from './surface-label.tsx';
 import { BarrierCell, MethodCell, PrintedText, RangeCell, RateCell, SourceCell, UncertaintyCell, ValueCell } from './row-cells.tsx';
 
 interface Heading {
@@ -27,16 +28,16 @@ export function entryColumns(view: RowView, grouping: Grouping, value: Heading):
     : { cell: ({ entry }) => words(entry) });
   const columns = [
     column('step', named('step', (entry) => (entry.step ? <Equation equation={entry.step.equation} /> : 'not given yet'))),
-    column('surface', named('surface', (entry) => entry.surface?.label ?? 'not given yet')),
+    column('surface', named('surface', (entry) => (entry.surface ? <SurfaceLabel label={entry.surface.label} /> : 'not given yet'))),
     column('barrier', { header: '', headerText: columnWords.barrier, cell: ({ entry }) => <BarrierCell entry={entry} view={view} /> }),
     column('value', { header: value.node, headerText: value.text, numeric: true, ...unit(view.valueUnit), cell: ({ figure }) => <ValueCell figure={figure} view={view} /> }),
-    column('uncertainty', { header: <>standard<br />uncertainty</>, headerText: columnWords.uncertainty, className: 'text-second', cell: ({ figure }) => <UncertaintyCell figure={figure} /> }),
-    column('printed', { header: 'as printed', printed: true, cell: ({ figure }) => <PrintedText figure={figure} /> }),
+    column('uncertainty', { header: <>standard<br />uncertainty</>, headerText: columnWords.uncertainty, className: 'text-second whitespace-nowrap', cell: ({ figure }) => <UncertaintyCell figure={figure} /> }),
+    column('printed', { header: 'as printed', printed: true, className: 'wide:whitespace-nowrap', cell: ({ figure }) => <PrintedText figure={figure} /> }),
     column('rate', { header: `k at ${view.temperatureK} K`, headerText: `k at ${view.temperatureK} K`, numeric: true, ...unit(view.kUnit), cell: ({ entry }) => <RateCell entry={entry} view={view} /> }),
     column('energyType', { cell: ({ entry }) => energyTypeOf(entry) }),
     column('scope', { cell: ({ entry }) => entry.scope ?? '' }),
     column('method', { cell: ({ entry }) => <MethodCell entry={entry} /> }),
-    column('range', { header: 'valid range', unit: 'K', cell: ({ entry }) => <RangeCell entry={entry} /> }),
+    column('range', { header: 'valid range', unit: 'K', className: 'whitespace-nowrap', cell: ({ entry }) => <RangeCell entry={entry} /> }),
     column('source', { cell: ({ entry }) => <SourceCell entry={entry} /> }),
     column('conditions', { header: 'Coverage, promoter', cell: ({ entry: { conditions } }) => [conditions.coverage, conditions.promoter].filter(Boolean).join('; ') }),
     column('accession', { className: 'whitespace-nowrap', cell: ({ entry }) => entry.accession }),

@@ -84,7 +84,7 @@ export function QuerySentence({ filter, counts, vocabulary, onChange }: QuerySen
   ];
 
   return (
-    <div className="sentence" role="group" aria-label={spokenSentence(filter, vocabulary, counts)} ref={root}>
+    <div className="sentence max-w-[76rem]" role="group" aria-label={spokenSentence(filter, vocabulary, counts)} ref={root}>
       {fixedParts.kind.before} {list(fixedParts.kind, changeKind)} {fixedParts.step.before} {list(fixedParts.step)}{' '}
       {fixedParts.metal.before} {list(fixedParts.metal)} {fixedParts.method.before} {list(fixedParts.method)}, valid at{' '}
       <NumberPicker
@@ -99,7 +99,7 @@ export function QuerySentence({ filter, counts, vocabulary, onChange }: QuerySen
           label="Add to the question"
           summary="and …"
           summaryText="a further filter"
-          buttonClassName="sentence-button sentence-more"
+          buttonClassName="sentence-button sentence-unset text-[0.75em]"
           multiple={false}
           search={false}
           options={more}

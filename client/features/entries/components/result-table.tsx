@@ -13,6 +13,7 @@ import { groupSorts, type Grouping } from '../search-state.ts';
 import { entryRows, groupKey, rowView, type EntryRow, type RowView } from '../table-rows.ts';
 import { entryColumns } from './entry-columns.tsx';
 import { BarrierCell, MethodCell, PrintedText, RateCell, SourceCell, UncertaintyCell, ValueCell } from './row-cells.tsx';
+import { SurfaceLabel } from './surface-label.tsx';
 import { valueHeading } from './value-heading.tsx';
 
 interface ResultTableProps {
@@ -69,7 +70,7 @@ function heading(entry: Entry, grouping: Grouping): RowGroup {
   const label: ReactNode = grouping === 'step'
     ? entry.step ? <><Equation equation={entry.step.equation} display />{' '}{note(classWords(entry.step.class))}</> : 'no elementary step'
     : grouping === 'surface'
-      ? <>{entry.surface?.label ?? 'no surface'}</>
+      ? <SurfaceLabel label={entry.surface?.label ?? 'no surface'} />
       : entry.source ? <><Link to={`/sources/${entry.source.id}`}>{entry.source.label}</Link>{' '}{note(entry.source.title)}</> : 'no source';
   return { key, label };
 }
@@ -82,7 +83,7 @@ function Stanza({ row, view, grouping }: { row: EntryRow; view: RowView; groupin
       <p className="stanza-head">
         <Link to={`/entries/${entry.accession}`}>
           {grouping !== 'step' && entry.step && <><Equation equation={entry.step.equation} />{' on '}</>}
-          {entry.surface?.label ?? 'no surface'}
+          {entry.surface ? <SurfaceLabel label={entry.surface.label} /> : 'no surface'}
         </Link>
       </p>
       <div className="stanza-line">

@@ -27,13 +27,13 @@ export function SearchBox({ value, onChange }: { value: string; onChange: (text:
   return (
     <form
       role="search"
+      className="w-[25rem] max-w-full"
       onSubmit={(event) => {
         event.preventDefault();
         send(typed);
       }}
     >
       <InputField
-        className="w-[25rem] max-w-full"
         label="Also containing"
         hideLabel
         type="search"

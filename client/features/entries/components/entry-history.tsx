@@ -1,0 +1,37 @@
+import { Link } from 'react-router-dom';
+import { stateWords } from '#shared/domain/states.ts';
+import type { EntryDetail } from '#shared/contracts/entries.ts';
+import { formatDate } from '#client/lib/dates.ts';
+
+/** What happened to the entry, newest first, and its public versions. */
+export function EntryHistory({ entry }: { entry: EntryDetail }) {
+  const { history, versions, accession, version } = entry;
+  const lines = [...history].sort((a, b) => b.at.localeCompare(a.at));
+  return (
+    <section>
+      <h2 className="pb-2">History</h2>
+      <ol>
+        {lines.map((line, index) => (
+          <li key={index} className="grid grid-cols-[6.5rem_minmax(0,1fr)] gap-x-4 py-1">
+            <time className="text-second" dateTime={line.at}>{formatDate(line.at)}</time>
+            <span>{line.what.includes(line.by) ? line.what : `${line.what}; by ${line.by}`}</span>
+          </li>
+        ))}
+      </ol>
+      {versions.length > 1 && (
+        <p className="pt-2 text-second">
+          Versions:{' '}
+          {versions.map((one, index) => (
+            <span key={one.version}>
+              {index > 0 && ', '}
+              {one.version === version
+                ? <b className="text-ink">{`${one.version}, shown`}</b>
+                : <Link to={one.state === 'accepted' ? `/entries/${accession}` : `/entries/${accession}/v/${one.version}`}>{one.version}</Link>}
+              {` (${stateWords[one.state]})`}
+            </span>
+          ))}
+        </p>
+      )}
+    </section>
+  );
+}
