@@ -54,7 +54,7 @@ async function load(): Promise<CitationFormatter> {
 }
 
 /**
- * Loads the style engine once, on first use (about 0.3 s and 40 MB), and checks that style and locale are there.
+ * Loads the style engine once, on first use (0.3 to 1 s and 40 to 80 MB), and checks that style and locale are there.
  *
  * Call it after the server listens to find a broken installation early; it throws when the style is missing.
  */

@@ -3,6 +3,7 @@ import type { AddressInfo } from 'node:net';
 import fc from 'fast-check';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { startFakeDoiServer, type FakeDoiServer, type misbehaviours } from '#server/services/doi/fake-doi-server.ts';
+import { demonstrationDoiService } from '#server/services/doi/demonstration-doi.ts';
 import { isLoopbackHost, isPublicAddress } from '#server/services/doi/public-address.ts';
 import { createDoiClient, cslMediaType } from '#server/services/doi/resolver-client.ts';
 import type { HostAddress, Transport } from '#server/services/doi/transport.ts';
@@ -86,6 +87,30 @@ describe('the client against the fake over HTTP', () => {
     expect(await response.text()).toContain('invented');
     expect((await fetch(`${fake.url}/10.5555/x`, { method: 'POST' })).status).toBe(405);
     expect((await fetch(`${fake.url}/favicon.ico`)).status).toBe(404);
+  });
+});
+
+describe('the demonstration\'s DOI service', () => {
+  test('starts its stand-in with the first look-up, answers from the records, and stops', async () => {
+    let reads = 0;
+    const service = demonstrationDoiService(() => {
+      reads += 1;
+      return Promise.resolve([{ type: 'book', title: 'An invented book', DOI: '10.5555/book' }]);
+    });
+    expect(reads).toBe(0);
+    expect((await service.lookup('10.5555/BOOK')).kind).toBe('found');
+    expect((await service.lookup('10.5555/none')).kind).toBe('not-found');
+    expect(reads).toBe(1);
+    await service.close();
+  });
+
+  test('records that can not be read make it unavailable, and it tries again', async () => {
+    let broken = true;
+    const service = demonstrationDoiService(() => (broken ? Promise.reject(new Error('unreadable')) : Promise.resolve([])));
+    expect(await service.lookup('10.5555/x')).toMatchObject({ kind: 'unavailable', code: 'network' });
+    broken = false;
+    expect((await service.lookup('10.5555/x')).kind).toBe('not-found');
+    await service.close();
   });
 });
 

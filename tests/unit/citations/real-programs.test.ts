@@ -5,6 +5,7 @@ import path from 'node:path';
 import { promisify } from 'node:util';
 import fc from 'fast-check';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { readBibtex } from '#server/services/citation/bibtex-read.ts';
 import { writeBibtex } from '#server/services/citation/bibtex-write.ts';
 import { yearOf } from '#shared/citations/citation-text.ts';
 import type { Csl } from '#shared/citations/csl.ts';
@@ -71,6 +72,15 @@ describe('what we write, read by the real programs without a warning', () => {
 
   test('biber validates the data model', async () => {
     expect(await biber('cases', bibliography(everyCase.filter((csl) => yearOf(csl) !== null)))).toEqual([]);
+  }, 120_000);
+
+  test("the demonstration's bibliography is read whole, and what we write of it passes both programs", async () => {
+    const { entries, problems } = readBibtex(await readFile(new URL('../../../seeds/demo/sources.bib', import.meta.url), 'utf8'));
+    expect(problems).toEqual([]);
+    expect(entries.length).toBeGreaterThanOrEqual(60);
+    const text = bibliography(entries);
+    expect((await bibtex('demo', text, 'plain')).log.split('\n').filter((line) => /warning|error/i.test(line))).toEqual([]);
+    expect(await biber('demo', text)).toEqual([]);
   }, 120_000);
 
   test('biber remarks on a lettered volume and on a work without a year, and on nothing else', async () => {
