@@ -7,6 +7,7 @@ import { InstrumentControl } from '#client/ui/instrument-control.tsx';
 import { LiveRegion } from '#client/ui/live-region.tsx';
 import { Mark } from '#client/ui/mark.tsx';
 import { Popover } from '#client/ui/popover.tsx';
+import { SessionGuard } from '#client/routes/sign-in/session-guard.tsx';
 import { AccountLines, AccountMenu } from './account-menu.tsx';
 import { useInstrumentInAddress } from './instrument-address.ts';
 import { NavLinks, useNavigation } from './navigation.tsx';
@@ -34,6 +35,7 @@ export function Shell({ children }: { children?: ReactNode }) {
       <SiteFooter version={me?.version} />
       {narrow && <div className="instrument-dock"><Instrument /></div>}
       <LiveRegion />
+      <SessionGuard />
       <ScrollRestoration getKey={({ pathname, key }) => (pathname === '/search' ? pathname : key)} />
     </>
   );

@@ -3,6 +3,7 @@ import type { Endpoint } from '#shared/contracts/endpoint.ts';
 import { getCsrf } from '#shared/contracts/accounts.ts';
 import { problem } from '#shared/contracts/problem.ts';
 import { ApiError } from './api-error.ts';
+import { askToSignIn, noteSignedOut } from './sign-in-again.ts';
 
 const base = '/api/v1';
 
@@ -46,7 +47,13 @@ export async function callForAnswer<P extends z.ZodType, Q extends z.ZodType, B 
     forgetToken();
     response = await send(endpoint, url, parts);
   }
+  if (response.status === 401 && !endpoint.path.startsWith('/auth/')) {
+    const refused = await problemOf(response);
+    if (refused.code !== 'sign-in-required' || !(await askToSignIn())) throw refused;
+    response = await send(endpoint, url, parts);
+  }
   if (!response.ok) throw await problemOf(response);
+  if (endpoint.path.startsWith('/auth/sign-')) noteSignedOut(endpoint.path === '/auth/sign-out');
   // A sign-in or sign-out starts another session, to which the old token does not belong.
   if (endpoint.path.startsWith('/auth/sign-')) forgetToken();
   return { data: await dataOf(endpoint, response), etag: response.headers.get('ETag') };

@@ -20,3 +20,15 @@ export function askToSignIn(): Promise<boolean> {
   });
   return pending;
 }
+
+let signedOut = false;
+
+/** Notes that somebody left their account by their own choice, or signed in again. */
+export function noteSignedOut(byChoice: boolean): void {
+  signedOut = byChoice;
+}
+
+/** Whether the account was left by choice: then its pages close; after an ended session they stay open behind the dialog. */
+export function wasSignedOut(): boolean {
+  return signedOut;
+}

@@ -1,9 +1,10 @@
 import { useQuery } from '@tanstack/react-query';
-import type { ReactNode } from 'react';
+import { useState, type ReactNode } from 'react';
 import { useLocation } from 'react-router-dom';
 import type { Me } from '#shared/contracts/accounts.ts';
 import { hasRole, strongestRole, type Role } from '#shared/domain/roles.ts';
 import { sessionOptions } from '#client/app/session.ts';
+import { wasSignedOut } from '#client/lib/sign-in-again.ts';
 import { LinkButton } from '#client/ui/button.tsx';
 import { PageHead } from '#client/ui/page-head.tsx';
 import { ErrorState, LoadingState, StatePanel } from '#client/ui/states.tsx';
@@ -18,7 +19,12 @@ interface RequireRoleProps {
 export function RequireRole({ role, title, children }: RequireRoleProps) {
   const { data: me, error, refetch } = useQuery(sessionOptions);
   const { pathname, search } = useLocation();
-  if (me?.user && hasRole(me.user.roles, role)) return children(me.user);
+  const [kept, setKept] = useState<Me['user']>(null);
+  const user = me?.user && hasRole(me.user.roles, role) ? me.user : null;
+  if (user && user.id !== kept?.id) setKept(user);
+  if (user) return children(user);
+  // A session that ended by itself closes no form: what is typed stays, and the next save asks to sign in again.
+  if (me && !me.user && kept && !wasSignedOut()) return children(kept);
   return (
     <>
       <PageHead title={title} />

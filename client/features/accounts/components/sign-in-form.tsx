@@ -12,10 +12,12 @@ import { DemoAccounts } from './demo-accounts.tsx';
 interface SignInFormProps {
   onSignedIn: (me: Me) => void;
   demonstration: boolean;
+  /** In one column, as a dialog needs it. */
+  stacked?: boolean;
 }
 
 /** E-mail and password; what is wrong is said in place, and nothing typed is lost. */
-export function SignInForm({ onSignedIn, demonstration }: SignInFormProps) {
+export function SignInForm({ onSignedIn, demonstration, stacked = false }: SignInFormProps) {
   const { credentials, set, faults, check } = useCredentials();
   const signIn = useSignIn(onSignedIn);
   const email = useRef<HTMLInputElement>(null);
@@ -31,7 +33,7 @@ export function SignInForm({ onSignedIn, demonstration }: SignInFormProps) {
   }
 
   return (
-    <div className="grid gap-8 mid:grid-cols-2">
+    <div className={stacked ? 'grid gap-6' : 'grid gap-8 mid:grid-cols-2'}>
       <form className="flex max-w-[26rem] flex-col gap-4" noValidate onSubmit={submit} aria-label="Sign in">
         {signIn.isError && (
           <Notice kind="refusal" live title={refusalTitle(signIn.error)}>{refusalText(signIn.error)}</Notice>
