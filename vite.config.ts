@@ -10,6 +10,8 @@ export default defineConfig({
     emptyOutDir: true,
     manifest: true,
     modulePreload: { polyfill: false },
+    // A font inside the style sheet would need data: in the content security policy.
+    assetsInlineLimit: 0,
   },
   server: { strictPort: true },
 });
