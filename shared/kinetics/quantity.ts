@@ -99,19 +99,19 @@ export function convertQuantity(input: QuantityInput, context: QuantityContext):
 
   const derivation: DerivationLine[] = [printedLine(input.asPrinted, unitName === '1' ? null : (input.unitAsPrinted?.trim() || null), readingText(printed, unitName))];
   const central = printed.value ?? (printed.low as number);
-  const factor = multiplier * unitPower;
+  const scaled = (number: number): number => timesDecimal(timesDecimal(number, multiplier), unitPower);
   if (multiplier !== 1) derivation.push(multiplierLine(central, multiplier, unitName, 'Multiplier of the column heading'));
-  if (unitPower !== 1) derivation.push(multiplierLine(central * multiplier, unitPower, unitName, 'Power of ten printed with the unit'));
+  if (unitPower !== 1) derivation.push(multiplierLine(timesDecimal(central, multiplier), unitPower, unitName, 'Power of ten printed with the unit'));
   const conversion = conversionFor(input.symbol, unitName, context);
-  derivation.push(...conversion.lines(central * factor));
+  derivation.push(...conversion.lines(scaled(central)));
 
-  const inPrinted = (value: number | null): number | null => (value === null ? null : factor === 1 ? value : requireFinite('asPrinted', value * factor));
+  const inPrinted = (value: number | null): number | null => (value === null ? null : requireFinite('asPrinted', scaled(value)));
   const convert = (value: number | null): number | null => (value === null ? null : requireFinite('asPrinted', conversion.scale(value)));
   const value = inPrinted(printed.value);
   const linear = printed.uncertaintyScale === 'linear';
   const u = linear ? inPrinted(printed.standardUncertainty) : printed.standardUncertainty;
   const missing: string[] = [];
-  const site = conversion.site?.(conversion.scale(value ?? central * factor));
+  const site = conversion.site?.(conversion.scale(value ?? scaled(central)));
   if (site) {
     missing.push(...site.missing);
     derivation.push(...site.lines);
@@ -151,8 +151,16 @@ function readingText(printed: PrintedValue, unit: string): string {
   return `${printed.bound === '=' ? '' : `${printed.bound} `}${quantityText(printed.value as number, unit)}`;
 }
 
+/** Multiplies by a factor; a power of ten moves the decimal point and rounds nothing. */
+function timesDecimal(value: number, factor: number): number {
+  const [mantissa, power] = factor.toExponential().split('e');
+  if (mantissa !== '1') return value * factor;
+  const [digits, exponent] = value.toExponential().split('e');
+  return Number(`${digits}e${Number(exponent) + Number(power)}`);
+}
+
 function multiplierLine(value: number, multiplier: number, unit: string, operation: string): DerivationLine {
-  return operationLine(operation, { value, unit }, { value: value * multiplier, unit }, references.printed, {
+  return operationLine(operation, { value, unit }, { value: timesDecimal(value, multiplier), unit }, references.printed, {
     assumption: `the printed figure times ${quantityText(multiplier)} is the value`,
   });
 }
