@@ -59,7 +59,7 @@ export default tseslint.config(
   },
   {
     files: ['**/*.mjs', '*.js'],
-    languageOptions: { globals: Object.fromEntries(['process', 'console', 'URL', 'setTimeout', 'clearTimeout', 'fetch', 'AbortSignal'].map((name) => [name, 'readonly'])) },
+    languageOptions: { globals: Object.fromEntries(['process', 'console', 'URL', 'setTimeout', 'clearTimeout', 'setInterval', 'clearInterval', 'fetch', 'AbortSignal'].map((name) => [name, 'readonly'])) },
   },
   {
     // These read the environment: the one reader, what runs before it, and what prepares the tests.

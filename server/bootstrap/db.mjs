@@ -9,6 +9,7 @@ import { checkNodeVersion } from './node-version.mjs';
 import { ensurePackages } from './packages.mjs';
 import { stopCluster } from './postgres-cluster.mjs';
 import { ensurePostgresPrograms } from './postgres-programs.mjs';
+import { forgetPreparation } from './preparation.mjs';
 import { run } from './processes.mjs';
 import { SetupError, main, say } from './say.mjs';
 import { childEnvironment } from './server-process.mjs';
@@ -88,6 +89,7 @@ async function ownerCommand(name, args) {
   await buildWhatIsStale();
   return withDatabase(async ({ settings, database }) => {
     const programs = database?.cluster.programs ?? (await ensurePostgresPrograms());
+    if (database && name === 'db-restore') forgetPreparation(database.cluster.directory);
     const { code } = await run(process.execPath, ['--enable-source-maps', inCheckout('dist', 'server', `${name}.js`), programs, ...args], {
       cwd: checkout,
       env: childEnvironment({ SESSION_SECRET: 'not used by this command, but asked for', ...settings }),

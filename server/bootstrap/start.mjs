@@ -12,10 +12,11 @@ import { chosenEnvironment } from './environment.mjs';
 import { ensurePackages } from './packages.mjs';
 import { isPortFree } from './ports.mjs';
 import { stopCluster } from './postgres-cluster.mjs';
+import { prepareDatabase } from './preparation.mjs';
 import { endProcess } from './processes.mjs';
 import { prepareRunningFolder } from './running-copy.mjs';
 import { SetupError, main, say } from './say.mjs';
-import { childEnvironment, runCommand, startServer } from './server-process.mjs';
+import { childEnvironment, startServer } from './server-process.mjs';
 import { Stopped, checkStop, isStopping, listenForStop, stopAsked } from './stopping.mjs';
 
 const serverStopMs = 6000;
@@ -49,8 +50,7 @@ async function start(undo) {
   const place = await prepareRunningFolder();
   const withOwner = childEnvironment(settings);
   if (settings.DATABASE_OWNER_URL) {
-    await runCommand(place, 'migrate', withOwner);
-    await runCommand(place, 'seed', withOwner);
+    await prepareDatabase(place, withOwner, database?.cluster.directory ?? null);
   } else {
     say('DATABASE_OWNER_URL is not set, so the database is taken as it is: not migrated, nothing loaded.');
   }
