@@ -1,14 +1,17 @@
 import type { EnergyUnit } from '#shared/contracts/accounts.ts';
-import { energyFromKJPerMol, energyToKJPerMol as toKJPerMol } from '#shared/kinetics/format.ts';
+import { calorie, e, N_A } from '#shared/kinetics/constants.ts';
+
+/** The reader's units in kJ/mol. The units registry knows them too, but with all others: too much for the first page. */
+const kJPerMol: Readonly<Record<EnergyUnit, number>> = { 'kJ/mol': 1, 'kcal/mol': calorie, 'eV': (e * N_A) / 1000 };
 
 /** An energy [kJ/mol] in the reader's unit. */
 export function energyIn(unit: EnergyUnit, valueKJPerMol: number): number {
-  return energyFromKJPerMol(valueKJPerMol, unit);
+  return valueKJPerMol / kJPerMol[unit];
 }
 
 /** An energy in the reader's unit as kJ/mol. */
 export function energyToKJPerMol(unit: EnergyUnit, value: number): number {
-  return toKJPerMol(value, unit);
+  return value * kJPerMol[unit];
 }
 
 /** A number ready to be set: digits with a true minus, and a power of ten where it is written with one. */

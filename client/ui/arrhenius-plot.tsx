@@ -1,7 +1,7 @@
-import { scaleLinear } from 'd3-scale';
 import { area, line } from 'd3-shape';
 import { fixed, plainNumber, setNumber } from '#client/lib/numbers.ts';
 import { useWidth } from '#client/lib/use-width.ts';
+import { linearScale } from './linear-scale.ts';
 import { PlotAxes } from './plot-axes.tsx';
 import { SeriesMark, seriesLook } from './series-look.tsx';
 import { UnitText, UnitTspans } from './unit-text.tsx';
@@ -50,8 +50,8 @@ export function ArrheniusPlot({ lines, temperatureK, unit, height = 270, activeI
 
   const sampled = lines.map((one) => ({ one, ...sampleLine(one, xFrom, xTo) }));
   const all = sampled.flatMap(({ samples }) => samples.flatMap((sample) => [sample.low, sample.high]));
-  const x = scaleLinear().domain([xFrom, xTo]).range([pad.left, width - pad.right]);
-  const y = scaleLinear().domain([Math.min(...all), Math.max(...all)]).nice().range([height - pad.bottom, pad.top]);
+  const x = linearScale({ domain: [xFrom, xTo], range: [pad.left, width - pad.right] });
+  const y = linearScale({ domain: [Math.min(...all), Math.max(...all)], range: [height - pad.bottom, pad.top], nice: 8 });
   const path = line<Sample>().x((sample) => x(sample.x)).y((sample) => y(sample.y));
   const band = area<Sample>().x((sample) => x(sample.x)).y0((sample) => y(sample.low)).y1((sample) => y(sample.high));
   const atX = x(1000 / temperatureK);

@@ -1,5 +1,5 @@
-import Fuse from 'fuse.js';
-import { useId, useMemo, useRef, useState, type KeyboardEvent, type ReactNode } from 'react';
+import { useId, useRef, useState, type KeyboardEvent, type ReactNode } from 'react';
+import { useOptionSearch } from './option-search.ts';
 import { useFloating } from './popover.tsx';
 
 export interface PickerOption<Value extends string = string> {
@@ -80,8 +80,7 @@ function PickerList<Value extends string>(
 ) {
   const [typed, setTyped] = useState('');
   const list = useRef<HTMLUListElement>(null);
-  const fuse = useMemo(() => new Fuse(options, { keys: ['label', 'also', 'value'], threshold: 0.35, ignoreLocation: true }), [options]);
-  const found = typed.trim() ? fuse.search(typed.trim()).map((result) => result.item) : options;
+  const found = useOptionSearch(options, typed.trim());
   const shown = found.slice(0, mostShown);
   const [active, setActive] = useState(() => Math.max(0, options.findIndex((option) => chosen.includes(option.value))));
   const at = Math.min(active, shown.length - 1);

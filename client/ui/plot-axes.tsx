@@ -1,9 +1,9 @@
-import type { ScaleLinear } from 'd3-scale';
 import type { ReactNode } from 'react';
+import type { LinearScale } from './linear-scale.ts';
 
 interface PlotAxesProps {
-  x: ScaleLinear<number, number>;
-  y: ScaleLinear<number, number>;
+  x: LinearScale;
+  y: LinearScale;
   left: number;
   right: number;
   top: number;
@@ -14,25 +14,21 @@ interface PlotAxesProps {
   yTicks?: number;
 }
 
-const minus = (text: string) => text.replace('-', '\u2212');
-
 /** The two axes of a plot: a rule at the left and at the foot, few ticks, the unit with the name. */
 export function PlotAxes({ x, y, left, right, top, bottom, xLabel, yLabel, xTicks = 5, yTicks = 5 }: PlotAxesProps) {
-  const xFormat = x.tickFormat(xTicks);
-  const yFormat = y.tickFormat(yTicks);
   return (
     <g aria-hidden="true">
       <path className="plot-axis" d={`M${left + 0.5} ${top - 8}V${bottom + 0.5}H${right}`} />
       {x.ticks(xTicks).map((tick) => (
         <g key={tick}>
           <path className="plot-axis" d={`M${x(tick)} ${bottom}v5`} />
-          <text x={x(tick)} y={bottom + 18} textAnchor="middle">{minus(xFormat(tick))}</text>
+          <text x={x(tick)} y={bottom + 18} textAnchor="middle">{x.tickText(tick, xTicks)}</text>
         </g>
       ))}
       {y.ticks(yTicks).map((tick) => (
         <g key={tick}>
           <path className="plot-axis" d={`M${left} ${y(tick)}h-5`} />
-          <text x={left - 9} y={y(tick) + 4} textAnchor="end">{minus(yFormat(tick))}</text>
+          <text x={left - 9} y={y(tick) + 4} textAnchor="end">{y.tickText(tick, yTicks)}</text>
         </g>
       ))}
       <text x={(left + right) / 2} y={bottom + 35} textAnchor="middle">{xLabel}</text>

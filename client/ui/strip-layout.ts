@@ -1,6 +1,6 @@
 import { bin, extent } from 'd3-array';
-import { scaleLinear, type ScaleLinear } from 'd3-scale';
 import type { Bound } from '#shared/domain/kinds.ts';
+import { linearScale, type LinearScale } from './linear-scale.ts';
 
 /** One found value on the strip. */
 export interface StripPoint {
@@ -23,11 +23,11 @@ export const mostLanes = 4;
 const clear = 11;
 
 /** The axis over all values: from zero where none is negative, to a round number. */
-export function stripScale(values: readonly number[], width: number, margin: number): ScaleLinear<number, number> {
+export function stripScale(values: readonly number[], width: number, margin: number): LinearScale {
   const [least = 0, most = 1] = extent(values);
   const from = Math.min(0, least);
   const to = most > from ? most : from + 1;
-  return scaleLinear().domain([from, to]).nice(8).range([margin, width - margin]);
+  return linearScale({ domain: [from, to], range: [margin, width - margin], nice: 8 });
 }
 
 /** Puts each dot in the lowest lane where it covers no other; where all are taken, in the one that has the most room. */
@@ -48,8 +48,8 @@ export interface Histogram {
 }
 
 /** Counts values in bins of round width. */
-export function countInBins(values: readonly number[], scale: ScaleLinear<number, number>): Histogram {
-  const [from = 0, to = 1] = scale.domain();
+export function countInBins(values: readonly number[], scale: LinearScale): Histogram {
+  const [from, to] = scale.domain;
   const bins = bin().domain([from, to]).thresholds(scale.ticks(40))(values as number[]);
   return { edges: [...bins.map((one) => one.x0 ?? from), to], counts: bins.map((one) => one.length) };
 }

@@ -1,5 +1,4 @@
-import { useWindowVirtualizer } from '@tanstack/react-virtual';
-import { useCallback, useLayoutEffect, useRef, useState, type KeyboardEvent } from 'react';
+import { lazy, Suspense, type KeyboardEvent, type ReactElement } from 'react';
 import { Checkbox } from './choice.tsx';
 import type { DataColumn, DataRow, RowGroup } from './table-model.ts';
 
@@ -21,57 +20,31 @@ interface TableRowsProps<T extends object> {
 /** From here on only the rows in sight are drawn. */
 const manyLines = 150;
 
+/** Loaded only for a table that has so many. `lazy` forgets the type of the rows; it is said again here. */
+const RowsInSight = lazy(async () => ({ default: (await import('./table-rows-in-sight.tsx')).RowsInSight })) as unknown as
+  <T extends object>(props: BodyProps<T>) => ReactElement;
+
 /** The body of a table: all rows when they are few, those in sight when they are many. */
 export function TableRows<T extends object>(props: TableRowsProps<T>) {
   const { lines, activeId } = props;
   const known = activeId !== null && lines.some((line) => line.row?.id === activeId);
   const all = { ...props, tabbableId: known ? activeId : lines.find((line) => line.row)?.row?.id ?? null };
-  if (lines.length > manyLines) return <RowsInSight {...all} />;
-  return <tbody>{lines.map((line) => <Line key={keyOf(line)} line={line} {...all} />)}</tbody>;
+  if (lines.length <= manyLines) return <AllRows {...all} />;
+  return <Suspense fallback={<AllRows {...all} lines={lines.slice(0, manyLines)} />}><RowsInSight {...all} /></Suspense>;
 }
 
 /** With the one row that the tabulator stops at: from there the arrows move on. */
-interface BodyProps<T extends object> extends TableRowsProps<T> {
+export interface BodyProps<T extends object> extends TableRowsProps<T> {
   tabbableId: string | null;
 }
 
-function keyOf<T extends object>(line: TableLine<T>): string {
-  return line.heading ? `group ${line.heading.key}` : line.row.id;
+function AllRows<T extends object>(props: BodyProps<T>) {
+  return <tbody>{props.lines.map((line) => <Line key={keyOf(line)} line={line} {...props} />)}</tbody>;
 }
 
-function RowsInSight<T extends object>(props: BodyProps<T>) {
-  const { lines, columns, choosable } = props;
-  const body = useRef<HTMLTableSectionElement>(null);
-  const [top, setTop] = useState(0);
-  useLayoutEffect(() => {
-    if (body.current) setTop(body.current.getBoundingClientRect().top + window.scrollY);
-  }, []);
-  const virtual = useWindowVirtualizer<HTMLTableRowElement>({
-    count: lines.length,
-    estimateSize: (index) => (lines[index]?.heading ? 50 : 47),
-    overscan: 20,
-    scrollMargin: top,
-    getItemKey: (index) => keyOf(lines[index] as TableLine<T>),
-  });
-  const { measureElement } = virtual;
-  // A row without height is not laid out (a hidden page): measuring it would have all rows drawn.
-  const measure = useCallback((element: HTMLTableRowElement | null) => {
-    if (element && element.getBoundingClientRect().height > 0) measureElement(element);
-  }, [measureElement]);
-  const items = virtual.getVirtualItems();
-  const before = (items[0]?.start ?? top) - top;
-  const after = virtual.getTotalSize() - ((items.at(-1)?.end ?? top) - top);
-  const span = columns.length + (choosable ? 1 : 0);
-  return (
-    <tbody ref={body}>
-      {before > 0 && <tr aria-hidden="true"><td className="table-space" colSpan={span} style={{ height: before }} /></tr>}
-      {items.map((item) => {
-        const line = lines[item.index];
-        return line && <Line key={item.key} line={line} index={item.index} measure={measure} {...props} />;
-      })}
-      {after > 0 && <tr aria-hidden="true"><td className="table-space" colSpan={span} style={{ height: after }} /></tr>}
-    </tbody>
-  );
+/** The key of a line among the others. */
+export function keyOf<T extends object>(line: TableLine<T>): string {
+  return line.heading ? `group ${line.heading.key}` : line.row.id;
 }
 
 interface LineProps<T extends object> extends BodyProps<T> {
@@ -80,7 +53,8 @@ interface LineProps<T extends object> extends BodyProps<T> {
   measure?: (element: HTMLTableRowElement | null) => void;
 }
 
-function Line<T extends object>({ line, index, measure, columns, choosable, chosen, rowLabel, activeId, tabbableId, onActive, onRowKey, onOpen }: LineProps<T>) {
+/** One line: the heading of a group, or a row. */
+export function Line<T extends object>({ line, index, measure, columns, choosable, chosen, rowLabel, activeId, tabbableId, onActive, onRowKey, onOpen }: LineProps<T>) {
   if (line.heading) {
     return (
       <tr className="table-group" ref={measure} data-index={index}>
