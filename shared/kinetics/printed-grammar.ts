@@ -16,6 +16,8 @@ export interface CoreValue {
   scale: 'linear' | 'ln';
   significantDigits: number;
   hasUncertainty: boolean;
+  /** Unit inside the name of a logarithm, as in log(A/s-1). */
+  unitInName: string | null;
 }
 
 interface Spread {
@@ -31,7 +33,7 @@ const noSpread: Spread = { reported: null, minus: null, plus: null, percent: fal
 function core(part: Partial<CoreValue>): CoreValue {
   return {
     value: null, low: null, high: null, reported: null, minus: null, plus: null, kind: 'none', coverageFactor: null, level: null,
-    scale: 'linear', significantDigits: 1, hasUncertainty: false, ...part,
+    scale: 'linear', significantDigits: 1, hasUncertainty: false, unitInName: null, ...part,
   };
 }
 
@@ -201,7 +203,10 @@ function makeRange(scanner: Scanner, low: number, high: number, significantDigit
 /** Reads the number part: a logarithm, a range or an amount with its uncertainty. */
 export function readCoreValue(scanner: Scanner): CoreValue {
   const log = scanner.take(logName);
-  if (log) return readStatedKind(scanner, readLogarithm(scanner, /^ln/i.test(log[1] as string) ? 'e' : 'ten'));
+  if (log) {
+    const unitInName = /\/ ?(.+?) ?\)? ?[=≈] ?$/.exec(log[0])?.[1] ?? null;
+    return { ...readStatedKind(scanner, readLogarithm(scanner, /^ln/i.test(log[1] as string) ? 'e' : 'ten')), unitInName };
+  }
   // A dash of text width before the first digit is a minus sign.
   if (scanner.peek(/\u2013 ?[\d.]/y)) return negative(scanner);
   const between = scanner.take(/(?:between|from) +/iy);

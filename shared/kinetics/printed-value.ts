@@ -88,7 +88,7 @@ export function readPrintedValue(text: string, unit?: string | null): PrintedVal
   }
   scanner.skipSpace();
   const unitStart = scanner.at;
-  const found = readUnitText(scanner, unit ?? null);
+  const found = readUnitText(scanner, unit?.trim() ? unit : core.unitInName && findUnit(core.unitInName) ? core.unitInName : null);
   return assemble(core, bound, found, scanner, unitStart);
 }
 

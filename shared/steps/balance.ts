@@ -27,8 +27,10 @@ function sentence(what: string, left: number, right: number): string {
   return `${amount(more)} ${name} more on the ${side} (${amount(left)} left, ${amount(right)} right)`;
 }
 
-/** Free sites added at the end of a side. */
+/** Free sites added to those of a side, or at its end. */
 function withSites(terms: readonly Term[], count: number): Term[] {
+  const at = terms.findIndex(({ species }) => species.phase === 'free-site' && species.siteType === undefined);
+  if (at >= 0) return terms.map((term, i) => (i === at ? { ...term, coefficient: Number((term.coefficient + count).toPrecision(12)) } : term));
   return [...terms, { coefficient: count, species: { formula: '*', spelling: '*', composition: {}, phase: 'free-site', sites: 1 } }];
 }
 

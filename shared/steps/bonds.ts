@@ -21,8 +21,8 @@ function chain(formula: string): Group[] {
       else waiting += count;
     } else {
       for (let i = 0; i < Math.min(count, 40); i += 1) groups.push({ element, hydrogens: 0 });
-      const first = groups[0] as Group;
-      first.hydrogens += waiting;
+      const first = groups[0];
+      if (first) first.hydrogens += waiting;
       waiting = 0;
     }
   }

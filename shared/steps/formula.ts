@@ -123,12 +123,13 @@ function atom(element: string, mass: number | null): string {
   return `[${mass}${element}]`;
 }
 
+/** Joins hydrogens that stand side by side: ND2H is NH3 without its isotopes. */
 function merge(pieces: readonly Piece[], labelled: boolean): Piece[] {
   const result: Piece[] = [];
   for (const piece of pieces) {
     const mass = labelled ? piece.mass : null;
     const last = result.at(-1);
-    if (piece.element !== null && last && last.element === piece.element && last.mass === mass) last.count += piece.count;
+    if (piece.element === 'H' && last?.element === 'H' && last.mass === mass) last.count += piece.count;
     else result.push({ ...piece, mass, inner: merge(piece.inner, labelled) });
   }
   return result;
@@ -170,6 +171,23 @@ function oneSpelling(typed: string, composition: Record<string, number>): string
   return typed;
 }
 
+/**
+ * The labelled spelling in the order of the plain formula, or null where an element stands in more than one place.
+ *
+ * `D2N`, `ND2` and `NDD` become one; the common isotope is written first.
+ */
+function labelledSpelling(formula: string, isotopes: Record<string, number>): string | null {
+  const runs = [...formula.matchAll(/([A-Z][a-z]?)(\d*)/g)].map((match) => ({ element: match[1] as string, count: match[2] ? Number(match[2]) : 1 }));
+  if (/[()-]/.test(formula) || new Set(runs.map(({ element }) => element)).size !== runs.length) return null;
+  return runs
+    .map(({ element, count }) => {
+      const labels = Object.entries(isotopes).filter(([name]) => name.replace(/^\d+/, '') === element).sort();
+      const plain = count - labels.reduce((sum, [, labelled]) => sum + labelled, 0);
+      return [...(plain > 0 ? [single(element, plain)] : []), ...labels.map(([name, labelled]) => single(atom(element, Number.parseInt(name, 10)), labelled))].join('');
+    })
+    .join('');
+}
+
 const prefixPattern = /^(?:cis|trans|iso|sec|tert|anti|syn|n|i|t)-/;
 
 /**
@@ -191,5 +209,5 @@ export function readFormula(text: string): Formula | FormulaFault {
   const typed = print(merge(pieces, false));
   const formula = prefix + oneSpelling(typed, composition);
   const labelled = Object.keys(isotopes).length > 0;
-  return { formula, spelling: labelled ? prefix + print(merge(pieces, true)) : formula, composition, isotopes };
+  return { formula, spelling: labelled ? (labelledSpelling(formula, isotopes) ?? prefix + print(merge(pieces, true))) : formula, composition, isotopes };
 }

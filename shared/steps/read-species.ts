@@ -7,7 +7,7 @@ const siteWords = 'fcc|hcp|top|atop|ontop|bridge|br|hollow|fourfold|4f|3f|long|s
 const coefficientPattern = /^(\d+(?:\.\d+)?)(?:\s?\/\s?(\d+))?\s*(?=\D|$)/;
 
 function fail(slice: Slice, expected: string, offset = 0): StepError {
-  return new StepError('unreadable', `cannot read ${JSON.stringify(slice.text)}: expected ${expected}`, { position: slice.position + offset });
+  return new StepError('unreadable', `cannot read ${JSON.stringify(slice.text)}: expected ${expected}`, { position: slice.positions[Math.min(Math.max(0, offset), slice.text.length)] });
 }
 
 function freeSite(siteType: string | undefined): Species {

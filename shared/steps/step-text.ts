@@ -1,9 +1,10 @@
 import { StepError } from './step-error.ts';
 
-/** A piece of the typed text with where it starts. */
+/** A piece of the typed text with where it stands. */
 export interface Slice {
   text: string;
-  position: number;
+  /** Position in the typed text of each character, and of what follows the last. */
+  positions: number[];
 }
 
 /** The two sides of an equation, split into terms. */
@@ -120,9 +121,9 @@ function splitSide(mapped: Mapped, start: number, end: number): Slice[] {
   const close = (to: number): void => {
     const raw = mapped.text.slice(from, to);
     const text = raw.trim();
-    const position = mapped.positions[from + raw.length - raw.trimStart().length] as number;
-    if (text === '') throw new StepError('empty-side', 'a species is missing here', { position });
-    slices.push({ text, position });
+    const begin = from + raw.length - raw.trimStart().length;
+    if (text === '') throw new StepError('empty-side', 'a species is missing here', { position: mapped.positions[begin] });
+    slices.push({ text, positions: mapped.positions.slice(begin, begin + text.length + 1) });
   };
   for (let i = start; i < end; i += 1) {
     const character = mapped.text[i];
