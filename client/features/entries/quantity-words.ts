@@ -16,8 +16,13 @@ export function uncertaintyText(quantity: Quantity): string {
   const reported = asymmetric ? `+${reportedPlus}/\u2212${reportedMinus} reported` : reportedUncertainty !== null ? `± ${reportedUncertainty} reported` : null;
   if (reported === null) return bound === '=' || bound === '≈' ? 'no uncertainty reported' : 'a limit, without uncertainty';
   if (uncertaintyKind === 'none' || uncertaintyKind === 'unknown') return `${reported}, kind unknown`;
-  const kind = `${reported} as ${uncertaintyKindWords[uncertaintyKind]}`;
-  return standardUncertainty === null ? `${kind}; no standard uncertainty follows from it` : `${kind}; ± here is one standard uncertainty`;
+  if (uncertaintyKind === 'standard' && standardUncertainty !== null) return '± is one standard uncertainty, as reported';
+  const kind = `${reported} as ${withArticle(uncertaintyKindWords[uncertaintyKind])}`;
+  return standardUncertainty === null ? `${kind}, from which no standard uncertainty follows` : `${kind}; ± is one standard uncertainty`;
+}
+
+function withArticle(words: string): string {
+  return `${/^[aeiou]/.test(words) ? 'an' : 'a'} ${words}`;
 }
 
 /** What a bound says of the value, in words; null for a plain value. */

@@ -67,11 +67,8 @@ function EntryPage({ accession, version }: { accession: string; version: number 
       </div>
       <div className="grid gap-x-10 gap-y-9 pt-10 wide:grid-cols-2">
         <RelatedEntries title="The same elementary step and surface" entries={entry.sameStepAndSurface} unit={unit} none="No other accepted entry for this elementary step on this surface." />
-        <RelatedEntries title="The reverse" entries={entry.reverse} unit={unit} none="No accepted entry for the reverse on this surface." />
+        <RelatedEntries title="The reverse elementary step" entries={entry.reverse} unit={unit} none="No accepted entry for the reverse on this surface." />
       </div>
-      <p className="pt-8 text-fine text-second">
-        The values are literature reports, not design data. Relief, runaway and reactor safety work follows local codes and is done by licensed or otherwise competent people.
-      </p>
     </article>
   );
 }

@@ -45,7 +45,10 @@ export function Component() {
       <h1 className="sr-only" tabIndex={-1}>Search</h1>
       <QuerySentence filter={filter} counts={counts} vocabulary={vocabulary} onChange={changeFilter} />
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2 pt-4 pb-5">
-        <SearchBox value={filter.q ?? ''} onChange={(q) => changeFilter({ q: q || undefined }, true)} />
+        <SearchBox
+          label="Also containing" placeholder="also containing: step edge, potassium, author …" maxLength={400}
+          value={filter.q ?? ''} onChange={(q) => changeFilter({ q: q || undefined }, true)}
+        />
         {page && <p className="text-second">{`${page.total} of ${page.all} entries · filters live in the address bar`}</p>}
         {(stale || (search.isFetching && !search.isFetchingNextPage && page)) && <p className="text-second" role="status">Searching</p>}
       </div>

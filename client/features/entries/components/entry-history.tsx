@@ -14,7 +14,7 @@ export function EntryHistory({ entry }: { entry: EntryDetail }) {
         {lines.map((line, index) => (
           <li key={index} className="grid grid-cols-[6.5rem_minmax(0,1fr)] gap-x-4 py-1">
             <time className="text-second" dateTime={line.at}>{formatDate(line.at)}</time>
-            <span>{line.what.includes(line.by) ? line.what : `${line.what}; by ${line.by}`}</span>
+            <span>{withName(line.what, line.by)}</span>
           </li>
         ))}
       </ol>
@@ -34,4 +34,11 @@ export function EntryHistory({ entry }: { entry: EntryDetail }) {
       )}
     </section>
   );
+}
+
+/** "Version 2 accepted by I. Okonjo-Vale: uncertainty read as two standard deviations". */
+function withName(what: string, by: string): string {
+  if (what.includes(by)) return what;
+  const [deed = '', ...words] = what.split(': ');
+  return [`${deed} by ${by}`, ...words].join(': ');
 }

@@ -1,14 +1,15 @@
 import type { EnergyUnit } from '#shared/contracts/accounts.ts';
 import type { Entry } from '#shared/contracts/entries.ts';
-import type { Quantity } from '#shared/contracts/quantities.ts';
+import type { DerivationLine, Quantity } from '#shared/contracts/quantities.ts';
 import { provenanceWords } from '#shared/domain/kinds.ts';
+import { R } from '#shared/kinetics/constants.ts';
 import { Derivation } from '#client/ui/derivation.tsx';
 import { PrintedConverted } from '#client/ui/printed-converted.tsx';
 import { QuantityValue, quantityWords } from '#client/ui/quantity-value.tsx';
 import { Sign } from '#client/ui/signs.tsx';
 import { Value } from '#client/ui/value.tsx';
 import { boundText, orderedQuantities, uncertaintyText } from '../quantity-words.ts';
-import { asPrinted } from '../row-figures.ts';
+import { asPrinted, shown } from '../row-figures.ts';
 
 /** As printed and converted: the primary quantity large, the others in a line each. */
 export function EntryQuantities({ entry, unit }: { entry: Entry; unit: EnergyUnit }) {
@@ -47,7 +48,7 @@ function Converted({ quantity, unit, large = false }: { quantity: Quantity; unit
   const { siteValue, siteUnit, missing, significantDigits } = quantity;
   return (
     <>
-      <QuantityValue quantity={quantity} energyUnit={unit} large={large} />
+      <QuantityValue quantity={asMeant(quantity, unit)} energyUnit={unit} large={large} />
       {siteValue != null && siteUnit && siteUnit !== quantity.unit && (
         <span className="block text-second">per site: <Value value={siteValue} unit={siteUnit} significantDigits={significantDigits} /></span>
       )}
@@ -56,9 +57,34 @@ function Converted({ quantity, unit, large = false }: { quantity: Quantity; unit
   );
 }
 
+/** A value shown in the unit it is printed in has no digit to guard: "137 kJ/mol" stays 137. */
+function asMeant(quantity: Quantity, unit: EnergyUnit): Quantity {
+  const { significantDigits } = quantity;
+  return significantDigits !== null && shown(quantity, unit).guard === 0 && quantity.unit === 'kJ/mol' ? { ...quantity, significantDigits: Math.max(1, significantDigits - 1) } : quantity;
+}
+
 function meaningOf(entry: Entry, quantity: Quantity): string {
   const parts = [quantityWords(quantity), entry.provenance ? provenanceWords[entry.provenance] : null, entry.scope, boundText(quantity)];
   return `${parts.filter(Boolean).join(', ')}; ${uncertaintyText(quantity)}`;
+}
+
+/** Long figures cut to eight digits, enough to follow the way; exports have them in full. */
+function readable(lines: readonly DerivationLine[]): DerivationLine[] {
+  const cut = (text: string) => text.replace(/\d+\.\d+(?:e[+-]?\d+)?/g, (figure) => (figure.replace(/e.*$|\D/g, '').length > 9 ? String(Number(Number(figure).toPrecision(8))).replace('e+', 'e') : figure));
+  return lines.map((line) => ({ ...line, from: cut(line.from), to: cut(line.to) }));
+}
+
+/** How k at the temperature of interest follows from the converted parameters. */
+function rateLines({ quantities, validRange }: Entry, { value, unit, temperatureK, extrapolated }: NonNullable<Entry['kAtT']>): DerivationLine[] {
+  const modified = quantities.some(({ symbol }) => symbol === 'exponent');
+  return [{
+    operation: modified ? 'k = A (T/T0)^n exp(\u2212E/RT)' : 'k = A exp(\u2212E/RT)',
+    from: '',
+    to: `${value.toExponential(3).replace('e+', 'e')} ${unit}`,
+    constant: `R = ${R} J mol-1 K-1`,
+    reference: 'IUPAC glossary of terms used in chemical kinetics',
+    ...(extrapolated ? { assumption: validRange ? `the parameters hold at ${temperatureK} K, outside the valid range` : `the parameters hold at ${temperatureK} K; the source states no valid range` } : {}),
+  }];
 }
 
 /** The way from as printed to converted, for every quantity. */
@@ -70,9 +96,15 @@ export function EntryDerivations({ entry }: { entry: Entry }) {
       {quantities.map((quantity, index) => (
         <div key={index} className={index > 0 ? 'pt-4' : ''}>
           {quantities.length > 1 && <h3 className="pb-1 text-second">{quantityWords(quantity).replace(/^./, (first) => first.toUpperCase())}</h3>}
-          <Derivation lines={quantity.derivation} />
+          <Derivation lines={readable(quantity.derivation)} />
         </div>
       ))}
+      {entry.kAtT && (
+        <div className="pt-4">
+          <h3 className="pb-1 text-second">{`Rate constant at ${entry.kAtT.temperatureK} K`}</h3>
+          <Derivation lines={rateLines(entry, entry.kAtT)} />
+        </div>
+      )}
       {entry.conversion && (
         <p className="pt-2 text-fine text-second">{`Converted with core ${entry.conversion.coreVersion}, constants ${entry.conversion.constantsVersion}.`}</p>
       )}

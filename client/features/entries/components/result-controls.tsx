@@ -1,3 +1,4 @@
+import { useMemo } from 'react';
 import type { EntryFilter } from '#shared/contracts/entry-search.ts';
 import { useLocalStorage } from '#client/lib/local-storage.ts';
 import { Checkbox } from '#client/ui/choice.tsx';
@@ -31,7 +32,8 @@ export function GroupChoice({ grouping, onChange }: { grouping: Grouping; onChan
 /** Which columns are hidden, remembered on this device. */
 export function useHiddenColumns(): [ReadonlySet<ColumnName>, (hidden: ReadonlySet<ColumnName> | null) => void] {
   const [stored, store] = useLocalStorage('sillstone.columns', usual);
-  return [readHidden(stored), (hidden) => store(hidden ? printHidden(hidden) : usual)];
+  const hiddenNow = useMemo(() => readHidden(stored), [stored]);
+  return [hiddenNow, (hidden) => store(hidden ? printHidden(hidden) : usual)];
 }
 
 /** The columns to be shown. */

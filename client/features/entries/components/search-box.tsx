@@ -3,8 +3,16 @@ import { InputField } from '#client/ui/field.tsx';
 
 const stillForMs = 300;
 
+interface SearchBoxProps {
+  label: string;
+  placeholder: string;
+  maxLength: number;
+  value: string;
+  onChange: (text: string) => void;
+}
+
 /** Free text: the search follows once the typing rests. */
-export function SearchBox({ value, onChange }: { value: string; onChange: (text: string) => void }) {
+export function SearchBox({ label, placeholder, maxLength, value, onChange }: SearchBoxProps) {
   const [typed, setTyped] = useState(value);
   /** What was last handed on, to tell our own change of the address from one made elsewhere (Back, a cleared filter). */
   const sent = useRef(value);
@@ -34,12 +42,12 @@ export function SearchBox({ value, onChange }: { value: string; onChange: (text:
       }}
     >
       <InputField
-        label="Also containing"
+        label={label}
         hideLabel
         type="search"
         autoComplete="off"
-        maxLength={400}
-        placeholder="also containing: step edge, potassium, author …"
+        maxLength={maxLength}
+        placeholder={placeholder}
         value={typed}
         onChange={(event) => {
           const text = event.target.value;
