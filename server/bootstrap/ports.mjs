@@ -1,5 +1,5 @@
 /** Which ports of this machine are free. */
-import { createServer } from 'node:net';
+import { connect, createServer } from 'node:net';
 import { SetupError } from './say.mjs';
 
 /**
@@ -27,4 +27,21 @@ export async function freePort(first, host = '127.0.0.1') {
     if (await isPortFree(port, host)) return port;
   }
   throw new SetupError(`No free port between ${first} and ${first + 199}.`);
+}
+
+/**
+ * Whether somebody takes connections on that port.
+ * @param {number} port
+ * @param {string} host
+ * @returns {Promise<boolean>}
+ */
+export function answers(port, host = '127.0.0.1') {
+  return new Promise((resolve) => {
+    const probe = connect({ port, host, timeout: 2000 });
+    const settle = (/** @type {boolean} */ result) => {
+      probe.destroy();
+      resolve(result);
+    };
+    probe.once('connect', () => settle(true)).once('error', () => settle(false)).once('timeout', () => settle(false));
+  });
 }

@@ -7,7 +7,7 @@ import { appendFileSync, chmodSync, chownSync, existsSync, mkdirSync, readFileSy
 import { totalmem } from 'node:os';
 import { dirname, join } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
-import { freePort, isPortFree } from './ports.mjs';
+import { answers, freePort, isPortFree } from './ports.mjs';
 import { isAlive, run, runOrFail, workingFolder } from './processes.mjs';
 import { SetupError, say } from './say.mjs';
 
@@ -105,7 +105,8 @@ export async function findRunning(cluster) {
       rmSync(pidFile, { force: true });
       return null;
     }
-    if (postmaster.status === 'ready') return { ...cluster, port: postmaster.port, adopted: true };
+    // What the file says may be the last word of a server that is being killed: it must answer, too.
+    if (postmaster.status === 'ready' && (await answers(postmaster.port))) return { ...cluster, port: postmaster.port, adopted: true };
     await wait(100);
   }
   throw new SetupError(`A database server is running on ${cluster.directory} but does not answer. Its log is ${join(cluster.directory, 'server.log')}.`);

@@ -16,6 +16,7 @@ import { run } from './processes.mjs';
 import { SetupError, say } from './say.mjs';
 import { checkStop, isStopping, listenForStop } from './stopping.mjs';
 import { ensureTestPrograms } from './test-programs.mjs';
+import { countReport } from './test-report.mjs';
 import { startThrowawayPostgres } from './throwaway-postgres.mjs';
 
 const filters = process.argv.slice(2);
@@ -80,24 +81,6 @@ async function runVitest(extra) {
   } finally {
     rmSync(folder, { recursive: true, force: true });
   }
-}
-
-/**
- * Tests that passed and failed. A file that could not be loaded, a test that was skipped, and a failure outside every
- * test count as failed: none of them is a success.
- * @param {{ testResults: { status: string, name: string, assertionResults: { status: string }[] }[] }} report
- * @param {number} exitCode
- */
-function countReport(report, exitCode) {
-  const result = { passed: 0, failed: 0 };
-  for (const file of report.testResults) {
-    const passed = file.assertionResults.filter(({ status }) => status === 'passed').length;
-    const failed = file.assertionResults.length - passed;
-    result.passed += passed;
-    result.failed += failed > 0 ? failed : file.status === 'passed' && passed > 0 ? 0 : 1;
-  }
-  if (exitCode !== 0 && result.failed === 0) result.failed = 1;
-  return result;
 }
 
 /** @param {{ passed: number, failed: number }} more */
