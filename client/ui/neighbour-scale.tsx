@@ -21,8 +21,19 @@ interface NeighbourScaleProps {
   most?: number;
 }
 
-const rowHeight = 38;
+const rowHeight = 34;
 const margin = 12;
+
+/** Width of a character of the plot's text [px], taken rather too wide than too narrow. */
+const characterPx = 6.3;
+
+/** A label over its dot, kept inside the drawing; one that is too long for it loses its end. */
+export function placeLabel(label: string, at: number, width: number): { text: string; x: number } {
+  const fits = Math.max(8, Math.floor((width - 4) / characterPx));
+  const text = label.length > fits ? `${label.slice(0, fits - 1).trimEnd()}…` : label;
+  const wide = text.length * characterPx;
+  return { text, x: Math.max(2, Math.min(at - wide / 2, width - 2 - wide)) };
+}
 
 /** Accepted values for the same step, one under another on one scale, and the one looked at in rust below them. */
 export function NeighbourScale({ neighbours, own, energyUnit, most = 10 }: NeighbourScaleProps) {
@@ -49,17 +60,12 @@ export function NeighbourScale({ neighbours, own, energyUnit, most = 10 }: Neigh
           const at = x(values[index] ?? 0);
           const y = index * rowHeight;
           const name = row.own ? row.label : `${row.label}${row.sameSurface ? '' : ', other surface'}`;
-          const anchor = at < width * 0.4 ? 'start' : at > width * 0.7 ? 'end' : 'middle';
+          const place = placeLabel(name, at, width);
           return (
             <g key={row.accession || 'own'} aria-hidden="true">
-              <text
-                x={anchor === 'start' ? Math.max(2, at - 8) : anchor === 'end' ? Math.min(width - 2, at + 8) : at} y={y + 12} textAnchor={anchor}
-                style={row.own ? { fill: 'var(--color-rust)' } : undefined}
-              >
-                {name}
-              </text>
+              <text x={place.x} y={y + 12} style={row.own ? { fill: 'var(--color-rust)' } : undefined}>{place.text}</text>
               <circle
-                cx={at} cy={y + 25} r={row.own ? 6 : 5}
+                cx={at} cy={y + 23} r={row.own ? 6 : 5}
                 style={{
                   fill: row.own ? 'var(--color-rust)' : row.computed ? 'var(--color-paper)' : 'var(--color-lichen)',
                   stroke: row.own ? 'var(--color-rust)' : 'var(--color-lichen)', strokeWidth: 1.8,
@@ -81,7 +87,7 @@ export function NeighbourScale({ neighbours, own, energyUnit, most = 10 }: Neigh
           </g>
         ))}
       </svg>
-      <p className="pt-1 text-fine text-second">Filled is measured, open is computed{neighbours.length > shown.length && `; ${shown.length} of ${neighbours.length} are drawn`}.</p>
+      <p className="pt-1 text-fine text-second">{!own && 'Energies for the same elementary step; this value is of another kind. '}Filled is measured, open is computed{neighbours.length > shown.length && `; ${shown.length} of ${neighbours.length} are drawn`}.</p>
       <details className="plot-table">
         <summary>The same as a table</summary>
         <table className="mt-2 w-full">

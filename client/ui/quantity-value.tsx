@@ -15,7 +15,7 @@ export function shownQuantity(quantity: Quantity, energyUnit: EnergyUnit): Value
   const inUnit = (number: number | null) => (number === null || unit !== 'kJ/mol' ? number : energyIn(energyUnit, number));
   return {
     value: inUnit(value), low: inUnit(low), high: inUnit(high), bound, uScale, significantDigits,
-    u: uScale === 'ln' ? u : inUnit(u), unit: unit === 'kJ/mol' ? energyUnit : unit,
+    u: uScale === 'ln' ? u : inUnit(u), unit: unit === 'kJ/mol' ? energyUnit : unit === '1' ? '' : unit,
   };
 }
 

@@ -55,19 +55,19 @@ export function LiveResult({ preview, error, faults, empty }: LiveResultProps) {
         </section>
       )}
 
-      {preview?.step && (
-        <section aria-labelledby="live-neighbours">
-          <h2 id="live-neighbours" className="pb-3">Among its neighbours</h2>
-          <NeighbourScale neighbours={preview.neighbours} own={ownOf(converted, unit)} energyUnit={unit} />
-        </section>
-      )}
-
       {!empty && (
         <section aria-labelledby="live-faults">
           <h2 id="live-faults" className="pb-2">{faults.length === 0 ? 'Ready to submit' : 'What still stands in the way'}</h2>
           {faults.length === 0
             ? <p className="text-second">{preview ? 'Nothing is missing. The checks above do not block it; the reviewer sees them too.' : 'Waiting for the checks.'}</p>
             : <FaultsList faults={faults} />}
+        </section>
+      )}
+
+      {preview?.step && (
+        <section aria-labelledby="live-neighbours">
+          <h2 id="live-neighbours" className="pb-3">Among its neighbours</h2>
+          <NeighbourScale neighbours={preview.neighbours} own={ownOf(converted, unit)} energyUnit={unit} most={8} />
         </section>
       )}
     </div>

@@ -68,7 +68,7 @@ export function QuantityRow({ index, converted, onRemove }: QuantityRowProps) {
       <div className="flex flex-wrap items-baseline gap-x-5 gap-y-2">
         <p className="min-w-0 flex-1" aria-live="polite">
           {converted && <><Sign of="->" />{' '}<QuantityValue quantity={converted} energyUnit={energyUnit} /></>}
-          {converted?.siteValue != null && <span className="text-second">{`; ${converted.siteValue.toPrecision(3)} ${converted.siteUnit ?? ''} per site`}</span>}
+          {converted?.siteValue != null && converted.siteUnit !== converted.unit && <span className="text-second">{`; ${converted.siteValue.toPrecision(3)} ${converted.siteUnit ?? ''} per site`}</span>}
         </p>
         {!headed && !row.multiplier && <TextButton className="text-fine" onClick={() => setHeaded(true)}>The column heading has a multiplier</TextButton>}
         {onRemove && <Button look="quiet" small onClick={onRemove} aria-label={`Remove quantity ${index + 1}, ${name}`}>Remove</Button>}

@@ -1,5 +1,4 @@
 import { useInfiniteQuery } from '@tanstack/react-query';
-import { Link } from 'react-router-dom';
 import type { QueueItem } from '#shared/contracts/reviews.ts';
 import { stateWords } from '#shared/domain/states.ts';
 import { formatAge, formatDateTime } from '#client/lib/dates.ts';
@@ -40,9 +39,9 @@ export function QueueList({ state }: { state: QueueState }) {
 function QueueRow({ item }: { item: QueueItem }) {
   const waits = item.state === 'submitted' || item.state === 'under-review';
   return (
-    <li className="grid gap-x-8 gap-y-1 border-b border-hairline py-3 mid:grid-cols-[minmax(0,1.5fr)_minmax(0,1.2fr)_minmax(0,1fr)]">
+    <li className="grid gap-x-8 gap-y-1 border-b border-hairline py-3 mid:grid-cols-[minmax(0,1.5fr)_minmax(0,1.2fr)_minmax(0,1.1fr)_auto]">
       <div className="min-w-0">
-        <p className="text-lead"><Link className="text-ink" to={`/review/${item.submission}`}><Equation display equation={item.equation} /><span className="sr-only">, review</span></Link></p>
+        <p className="text-lead"><Equation display equation={item.equation} /></p>
         <p>{item.surface} <samp className="ml-3">{[item.asPrinted, item.unitAsPrinted].filter(Boolean).join(' ')}</samp></p>
       </div>
       <div className="min-w-0">
@@ -58,6 +57,11 @@ function QueueRow({ item }: { item: QueueItem }) {
         {item.claim && (
           <p className="text-fine text-second">{item.claim.mine ? 'claimed by you' : `claimed by ${item.claim.by}`} until {formatDateTime(item.claim.until)}</p>
         )}
+      </div>
+      <div className="pt-1 mid:pt-0">
+        <LinkButton small to={`/review/${item.submission}`} aria-label={`${waits && !item.own ? 'Review' : 'Open'} ${item.accession}, ${item.asPrinted} ${item.unitAsPrinted} on ${item.surface}`}>
+          {waits && !item.own ? 'Review' : 'Open'}
+        </LinkButton>
       </div>
     </li>
   );
