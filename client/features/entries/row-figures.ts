@@ -71,15 +71,22 @@ function reportedInUnit({ value }: ShownQuantity, { asPrinted: text, reportedUnc
   return Math.abs(reportedUncertainty * (value / central));
 }
 
-/** Digits that a dense table shows of a value without uncertainty; trailing zeros of a print ("111600 J/mol") are no digits to be trusted. */
+/** Digits that a dense table shows at most of a value without uncertainty. */
 const mostDigits = 4;
+
+/** Digits of a print that can be trusted: the zeros at the end of a whole number ("7100 J/mol") may be there for its size alone. */
+function trustedDigits({ asPrinted: text, significantDigits }: Quantity): number {
+  if (significantDigits === null) return mostDigits;
+  const zeros = /^[^.,]*[1-9](0+)$/.exec(text.trim())?.[1]?.length ?? 0;
+  return Math.max(1, significantDigits - zeros);
+}
 
 /** Sets the value of a row as a dense table does: to one digit of its uncertainty, else as printed. */
 export function rowFigure(quantity: Quantity, unit: EnergyUnit): RowFigure {
   const figure = shown(quantity, unit);
   const central = figure.value ?? figure.high ?? figure.low ?? 0;
   const linearU = quantity.uncertaintyScale === 'linear' ? figure.u ?? reportedInUnit(figure, quantity) : null;
-  const printedDigits = Math.min(mostDigits, (quantity.significantDigits ?? mostDigits) + figure.guard);
+  const printedDigits = Math.min(mostDigits, trustedDigits(quantity) + figure.guard);
   const decimals = decimalsOf(central, { u: linearU, uDigits: 1, significantDigits: printedDigits, guard: 0 });
   const digits = Math.max(1, quantity.significantDigits ?? 3);
   const set = (value: number | null) => (value === null ? null : setNumber(value, { decimals, digits }));

@@ -40,7 +40,7 @@ export function Component() {
               { name: 'Published in', value: source.container },
               { name: 'Year', value: source.year },
               { name: 'DOI', value: source.doi && <a href={`https://doi.org/${encodeURI(source.doi)}`} rel="noreferrer">{source.doi}</a> },
-              { name: 'Record', value: source.confirmed ? 'confirmed by the DOI service, or typed where there is no DOI' : 'not confirmed by the DOI service yet' },
+              { name: 'Record', value: !source.doi ? 'typed: it has no DOI' : source.confirmed ? 'confirmed by the DOI service' : 'not confirmed by the DOI service yet' },
             ]}
           />
         </section>

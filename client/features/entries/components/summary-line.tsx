@@ -39,7 +39,7 @@ export function energyWords({ energy, alike }: SearchSummary, unit: EnergyUnit):
   const say = (value: number) => fixed(energyIn(unit, value), decimals);
   const range = energy.low === energy.high ? `${say(energy.low)} ${unit}` : `${say(energy.low)} to ${say(energy.high)} ${unit}`;
   if (energy.count === 1) return `one energy, ${range}`;
-  if (!alike) return `energies ${range}; no median, since types of energy or scope are mixed`;
+  if (!alike) return `energies ${range}; no median, since elementary steps, types of energy or scopes are mixed`;
   return `median ${say(energy.median)} ${unit}, ${say(energy.low)} to ${say(energy.high)}`;
 }
 

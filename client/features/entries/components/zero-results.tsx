@@ -30,14 +30,14 @@ export function ZeroResults({ filter, emptiedBy, withoutStatedRange, unit, vocab
       {helps.length > 0 ? (
         <>
           <p>Each of these filters empties the list together with the others:</p>
-          <ul className="pt-2 text-ink">
+          <ul className="w-[60ch] max-w-full pt-2 text-ink">
             {helps.map(({ filter: name, totalWithout }) => {
               const names = namesOf(name).filter((one) => inForce.includes(one));
               const words = names.map((one) => filterWords(one, filter, unit, vocabulary));
               const title = words[0]?.title ?? name;
               return (
                 <li key={name} className="flex flex-wrap items-baseline gap-x-4 gap-y-1 border-b border-hairline py-2">
-                  <span className="min-w-0 flex-1 basis-72">{title}: <strong>{words.map(({ value }) => value).join(', ')}</strong></span>
+                  <span className="min-w-0 flex-1 basis-60">{title}: <strong>{words.map(({ value }) => value).join(', ')}</strong></span>
                   <Button small onClick={() => onChange(Object.fromEntries(names.map((one) => [one, undefined])))}>
                     {`Take it away: ${totalWithout} ${totalWithout === 1 ? 'entry' : 'entries'}`}
                   </Button>
