@@ -1,4 +1,5 @@
 import { createBrowserRouter, Navigate, type RouteObject } from 'react-router-dom';
+import { LoadingState } from '#client/ui/states.tsx';
 import { NotFoundPage } from './not-found.tsx';
 import { RouteError } from './route-error.tsx';
 import { screens } from './screens.ts';
@@ -11,6 +12,7 @@ export function makeRoutes(): RouteObject[] {
     errorElement: <Shell><RouteError /></Shell>,
     children: [{
       errorElement: <RouteError />,
+      hydrateFallbackElement: <LoadingState what="the page" />,
       children: [
         { index: true, element: <Navigate to="/search" replace /> },
         ...screens.map((screen): RouteObject => ({

@@ -1,5 +1,5 @@
 import { useEffect, useRef, type ReactNode } from 'react';
-import { Link, Outlet, ScrollRestoration, useLocation } from 'react-router-dom';
+import { Link, Outlet, ScrollRestoration, useLocation, useNavigation as useRouterNavigation } from 'react-router-dom';
 import { announce } from '#client/lib/announce.ts';
 import { useInstrument } from '#client/lib/instrument.ts';
 import { useMediaQuery, useNarrow } from '#client/lib/use-media-query.ts';
@@ -24,16 +24,17 @@ export function Shell({ children }: { children?: ReactNode }) {
   useFocusOnArrival();
   return (
     <>
+      <OnTheWay />
       <a className="skip-link" href="#content">Skip to the content</a>
       <Header narrow={narrow} />
       {me?.demonstration && (
-        <div className="demo-banner" role="note">
+        <aside className="demo-banner" aria-label="Demonstration">
           <p className="page">Demonstration data: every entry, author and journal here is invented. Not for use.</p>
-        </div>
+        </aside>
       )}
       <main id="content" tabIndex={-1} className="page">{children ?? <Outlet />}</main>
       <SiteFooter version={me?.version} />
-      {narrow && <div className="instrument-dock"><Instrument /></div>}
+      {narrow && <aside className="instrument-dock" aria-label="Instrument"><Instrument /></aside>}
       <LiveRegion />
       <SessionGuard />
       <ScrollRestoration getKey={({ pathname, key }) => (pathname === '/search' ? pathname : key)} />
@@ -70,6 +71,12 @@ function Header({ narrow }: { narrow: boolean }) {
       </div>
     </header>
   );
+}
+
+/** A line at the head while the next page is fetched; it waits a moment, so that quick pages do not flicker. */
+function OnTheWay() {
+  const { state } = useRouterNavigation();
+  return state === 'loading' ? <div className="on-the-way" aria-hidden="true" /> : null;
 }
 
 function Instrument() {

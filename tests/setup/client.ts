@@ -1,5 +1,8 @@
-import { cleanup } from '@testing-library/react';
+import { cleanup, configure } from '@testing-library/react';
 import { afterEach, beforeEach, vi } from 'vitest';
+
+// A shared machine may be slow: waiting longer costs nothing where the thing waited for comes.
+configure({ asyncUtilTimeout: 8000 });
 
 /**
  * Browser parts that jsdom lacks and the pages use; each does the least that the markup needs.
