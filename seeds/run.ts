@@ -80,7 +80,8 @@ export async function loadDemonstration(base: Context, say: (line: string) => vo
   };
 
   const accessions = new Map<string, string>();
-  const submissions = new Map<string, string>();
+  /** By row: the submission and the tag of the revision handed in. */
+  const submissions = new Map<string, { id: string; tag: string }>();
   const steps: Step[] = readDemoEntries(demonstrationFolder).flatMap((entry) => script(entry));
   steps.sort((a, b) => a.at.getTime() - b.at.getTime());
 
@@ -91,6 +92,11 @@ export async function loadDemonstration(base: Context, say: (line: string) => vo
       const accession = accessions.get(name);
       if (!accession) throw new Error(`entries.csv, row ${row}: row ${name} comes later`);
       return accession;
+    };
+    const submissionOf = (name: string) => {
+      const submission = submissions.get(name);
+      if (!submission) throw new Error(`entries.csv, row ${row}: nothing was handed in for it`);
+      return submission;
     };
     const list: Step[] = [];
     const submittedAt = told.submittedAt ? new Date(told.submittedAt) : latest;
@@ -104,15 +110,13 @@ export async function loadDemonstration(base: Context, say: (line: string) => vo
         if (told.revises) draft = await services.entries.patch(contributor, draft.accession, { quantities: null, conditions: null, validRange: null, ...input }, `${draft.revision}.${draft.lock}`);
         if (told.outcome === 'draft') return;
         const submitted = await services.entries.submit(contributor, draft.accession, null);
-        if (submitted.submission) submissions.set(row, submitted.submission);
+        if (submitted.submission) submissions.set(row, { id: submitted.submission, tag: `${submitted.revision}.${submitted.lock}` });
       },
     });
     const decidedAt = told.decidedAt ? new Date(told.decidedAt) : latest;
     const decide = (decision: 'accept' | 'return' | 'reject') => async () => {
-      const id = submissions.get(row) ?? '';
-      const reviewer = person(told.reviewer);
-      const { seen } = await services.reviews.get(reviewer, id);
-      await services.reviews.decide(reviewer, id, {
+      const { id, tag: seen } = submissionOf(row);
+      await services.reviews.decide(person(told.reviewer), id, {
         decision, seen, reason: decision === 'accept' ? undefined : (told.reason as DecisionReason | undefined) ?? 'other', comment: told.comment ?? '',
         checklist: Object.fromEntries(checklistPoints.map((point) => [point, 'yes' as const])),
       });
@@ -123,7 +127,7 @@ export async function loadDemonstration(base: Context, say: (line: string) => vo
       case 'rejected': list.push({ at: decidedAt, run: decide('reject') }); break;
       case 'withdrawn': list.push({ at: decidedAt, run: async () => { await services.entries.withdraw(contributor, accessionOf(row)); } }); break;
       // A claim lasts three days, so it is taken when the demonstration is loaded.
-      case 'under-review': list.push({ at: latest, run: async () => { await services.reviews.claim(person(told.reviewer), submissions.get(row) ?? ''); } }); break;
+      case 'under-review': list.push({ at: latest, run: async () => { await services.reviews.claim(person(told.reviewer), submissionOf(row).id); } }); break;
       default: break;
     }
     if (told.outcome === 'retracted') {

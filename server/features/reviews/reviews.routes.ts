@@ -15,6 +15,9 @@ export function reviewsRoutes(reviews: ReviewsService): Router {
     res.status(201);
     return comment;
   });
-  route(router, contract.decideReview, ({ actor, params, body }) => reviews.decide(actor, params.submission, body));
+  route(router, contract.decideReview, async ({ actor, params, body }) => {
+    await reviews.decide(actor, params.submission, body);
+    return reviews.get(actor, params.submission);
+  });
   return router;
 }

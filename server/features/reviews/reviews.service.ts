@@ -188,10 +188,10 @@ export function createReviewsService({ db, clock }: Context, records: EntryRecor
     },
 
     /** Accepts, returns or rejects. The same decision by the same person again is a retry and changes nothing. */
-    async decide(who: Actor, id: string, body: z.infer<typeof decisionBody>): Promise<ReviewView> {
+    async decide(who: Actor, id: string, body: z.infer<typeof decisionBody>): Promise<void> {
       const actor = requireRole(who, 'reviewer');
       const before = await find(id);
-      if (before.decision && before.decision.decidedBy === actor.userId && before.decision.decision === body.decision) return view(actor, id);
+      if (before.decision && before.decision.decidedBy === actor.userId && before.decision.decision === body.decision) return;
       requireOthers(before, actor);
       const errors: { path: string; message: string }[] = [];
       if (body.decision === 'accept') {
@@ -219,7 +219,6 @@ export function createReviewsService({ db, clock }: Context, records: EntryRecor
           at: now, actorId: actor.userId, action: `submission.${body.decision}`, subjectType: 'submission', subjectId: id, payload: { revision: record.revision.id, reason: body.reason ?? null },
         }]);
       });
-      return view(actor, id);
     },
 
     /** Puts submissions whose claim has run out back into the queue; one round of the job. */
