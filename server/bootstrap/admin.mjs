@@ -1,4 +1,4 @@
-/** `npm run admin -- create-user EMAIL "NAME" ROLE`: accounts, by hand, as the application's role. */
+/** `npm run admin -- …`: accounts, before anybody can sign in to make them. */
 import { buildWhatIsStale } from './build.mjs';
 import { checkout, inCheckout } from './checkout.mjs';
 import { checkNodeVersion } from './node-version.mjs';
@@ -13,9 +13,8 @@ await main(async () => {
   await ensurePackages();
   await buildWhatIsStale();
   return withDatabase(async ({ settings }) => {
-    const { DATABASE_OWNER_URL: _owner, ...env } = childEnvironment({ SESSION_SECRET: 'not used by this command, but asked for', ...settings });
-    const args = ['--enable-source-maps', inCheckout('dist', 'server', 'admin.js'), ...process.argv.slice(2)];
-    const { code } = await run(process.execPath, args, { cwd: checkout, env, show: true, finish: true });
+    const env = childEnvironment({ SESSION_SECRET: 'not used by this command, but asked for', ...settings });
+    const { code } = await run(process.execPath, ['--enable-source-maps', inCheckout('dist', 'server', 'admin.js'), ...process.argv.slice(2)], { cwd: checkout, env, show: true });
     return code;
   });
 });
