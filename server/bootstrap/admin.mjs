@@ -16,5 +16,5 @@ await main(async () => {
     const env = childEnvironment({ SESSION_SECRET: 'not used by this command, but asked for', ...settings });
     const { code } = await run(process.execPath, ['--enable-source-maps', inCheckout('dist', 'server', 'admin.js'), ...process.argv.slice(2)], { cwd: checkout, env, show: true });
     return code;
-  });
+  }, { asOwner: false });
 });
