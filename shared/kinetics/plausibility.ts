@@ -150,4 +150,3 @@ export function checkKie(value: number, limits: { semiclassicalLimit?: number; h
 }
 
 export { outlierCheck } from './outlier.ts';
-export { recordChecks } from './record-checks.ts';

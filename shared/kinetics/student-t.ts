@@ -60,7 +60,7 @@ function studentDensity(value: number, degreesOfFreedom: number): number {
  *
  * Safeguarded Newton steps on the exact tail. Source: JCGM 100:2008 (GUM), annex G and table G.2.
  * @throws KineticsError when level is not between 0 and 1 or the degrees of freedom are not above 0.
- * @example studentCoverageFactor(0.95, 10) // 2.2281388519649385
+ * @example studentCoverageFactor(0.95, 10) // 2.228138851986275
  */
 export function studentCoverageFactor(level: number, degreesOfFreedom?: number | null): number {
   const z = normalCoverageFactor(level);
