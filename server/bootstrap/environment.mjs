@@ -11,6 +11,7 @@ export function chosenEnvironment(database) {
     PORT: given.PORT || '4200',
     HOST: given.HOST || '127.0.0.1',
     SILLSTONE_DEMO: given.SILLSTONE_DEMO || '1',
+    ...(!database && given.DATABASE_OWNER_URL && { DATABASE_OWNER_URL: given.DATABASE_OWNER_URL }),
     ...(database && {
       DATABASE_URL: database.applicationUrl,
       DATABASE_OWNER_URL: database.ownerUrl,
