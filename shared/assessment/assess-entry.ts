@@ -4,8 +4,8 @@ import { describeSurface, SurfaceError, type Surface } from '../domain/surface.t
 import { KineticsError } from '../kinetics/kinetics-error.ts';
 import { convertQuantity, type ConvertedQuantity } from '../kinetics/quantity.ts';
 import type { QuantityContext } from '../kinetics/quantity-symbols.ts';
+import { recordChecks } from '../kinetics/record-checks.ts';
 import { readStep, StepError, type ElementaryStep } from '../steps/parse-step.ts';
-import { recordChecks } from './record-checks.ts';
 
 /** What an entry amounts to, from what was typed alone: no store is asked. */
 export interface Assessment {
@@ -18,6 +18,8 @@ export interface Assessment {
   /** What stands in the way of submitting, each with its place in the input. */
   faults: Fault[];
 }
+
+const sentence = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1) + (/[.?]$/.test(text) ? '' : '.');
 
 function assessStep(input: EntryInput, faults: Fault[]): ElementaryStep | null {
   const equation = input.step?.equation.trim();
@@ -131,9 +133,16 @@ export function assessEntry(input: EntryInput): Assessment {
   const surface = assessSurface(input, faults);
   const quantities = assessQuantities(input, step, faults);
   requireParts(input, faults);
-  const raised = recordChecks(input, step, quantities);
+  const raised = recordChecks({
+    quantities, scope: input.scope ?? null, stepClass: step?.class ?? null, gasOrder: step?.gasOrder, surfaceOrder: step?.surfaceOrder,
+    methodClass: input.method?.class ?? null, validRange: input.validRange ?? null, endStateReference: input.conditions?.endStateReference,
+    temperatureK: input.conditions?.temperatureK,
+  }).map((check) => ({ ...check, message: sentence(check.message) }));
   for (const { code, message, path } of raised.filter(({ severity }) => severity === 'blocking')) faults.push({ path, message, code });
   const checks: Check[] = raised.filter(({ severity }) => severity !== 'blocking').map(({ code, severity, message }) => ({ code, severity, message }));
+  if (step && input.step?.sitesAdded) {
+    checks.push({ code: 'free-sites-added', severity: 'note', message: 'The source leaves the free sites out; they were added so that the equation balances.' });
+  }
   if (input.provenance === 'quoted') checks.push({ code: 'quoted-elsewhere', severity: 'warning', message: 'The value is quoted from elsewhere. Enter the primary source if it can be had.' });
   return { step, surface, quantities, checks, faults };
 }

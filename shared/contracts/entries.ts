@@ -62,7 +62,11 @@ export const entryInput = z.object({
   kind: z.enum(kinds).optional(),
   scope: z.enum(scopes).optional(),
   provenance: z.enum(provenances).optional(),
-  step: z.object({ equation: z.string().max(500) }).optional(),
+  step: z.object({
+    equation: z.string().max(500),
+    /** The source leaves the free sites out and they were added to balance: an assumption, shown with the entry. */
+    sitesAdded: z.boolean().optional(),
+  }).optional(),
   surface: surfaceInput.optional(),
   source: sourceInput.optional(),
   locator: z.string().max(200).optional(),
