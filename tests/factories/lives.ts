@@ -40,16 +40,16 @@ export class Lives {
 
   async claimed(input: EntryInput = entryInputOf()): Promise<Life> {
     const life = await this.submitted(input);
-    const { seen } = await this.services.reviews.claim(this.reviewer, life.submission);
-    return { ...life, tag: seen };
+    await this.services.reviews.claim(this.reviewer, life.submission);
+    return { ...life, tag: (await this.services.reviews.get(this.reviewer, life.submission)).seen };
   }
 
   async decide(life: Life, decision: 'accept' | 'return' | 'reject'): Promise<Life> {
     const { seen } = await this.services.reviews.get(this.reviewer, life.submission);
-    const after = await this.services.reviews.decide(this.reviewer, life.submission, {
+    await this.services.reviews.decide(this.reviewer, life.submission, {
       decision, seen, comment: decision === 'accept' ? '' : 'Held against the paper.', reason: decision === 'accept' ? undefined : 'other', checklist: answers(),
     });
-    return { ...life, tag: after.seen };
+    return { ...life, tag: (await this.services.reviews.get(this.reviewer, life.submission)).seen };
   }
 
   async accepted(input: EntryInput = entryInputOf()): Promise<Life> {
