@@ -56,14 +56,16 @@ export function rowView(rows: readonly EntryRow[], unit: EnergyUnit, temperature
     const barrier = barrierOf(entry);
     return barrier ? (barrier.value ?? barrier.high ?? barrier.low ?? 0) + (barrier.uncertaintyScale === 'linear' ? barrier.standardUncertainty ?? 0 : 0) : 0;
   });
+  const unitOfAll = commonUnit(figures);
   const kUnits = new Set(rows.flatMap(({ entry }) => (entry.kAtT ? [entry.kAtT.unit] : [])));
   return {
     unit,
     temperatureK,
     tallestKJPerMol: Math.max(1, ...tall),
-    valueUnit: commonUnit(figures),
-    valueDecimals: Math.max(0, ...numbers.map((number) => (number?.exponent === null ? number.text.split('.')[1]?.length ?? 0 : 0))),
-    valuePower: numbers.some((number) => number !== null && number.exponent !== null),
+    valueUnit: unitOfAll,
+    // Values of different units have no decimal point in common.
+    valueDecimals: unitOfAll === null ? 0 : Math.max(0, ...numbers.map((number) => (number?.exponent === null ? number.text.split('.')[1]?.length ?? 0 : 0))),
+    valuePower: unitOfAll !== null && numbers.some((number) => number !== null && number.exponent !== null),
     kUnit: kUnits.size === 1 ? [...kUnits][0] ?? null : null,
   };
 }

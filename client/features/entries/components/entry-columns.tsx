@@ -27,12 +27,12 @@ export function entryColumns(view: RowView, grouping: Grouping, value: Heading):
     ? { rowHeader: true, cell: ({ entry }) => <Link to={`/entries/${entry.accession}`}>{words(entry)}</Link> }
     : { cell: ({ entry }) => words(entry) });
   const columns = [
-    column('step', named('step', (entry) => (entry.step ? <Equation equation={entry.step.equation} /> : 'not given yet'))),
+    column('step', { className: 'min-w-[10rem]', ...named('step', (entry) => (entry.step ? <Equation equation={entry.step.equation} /> : 'not given yet')) }),
     column('surface', named('surface', (entry) => (entry.surface ? <SurfaceLabel label={entry.surface.label} /> : 'not given yet'))),
     column('barrier', { header: '', headerText: columnWords.barrier, cell: ({ entry }) => <BarrierCell entry={entry} view={view} /> }),
     column('value', { header: value.node, headerText: value.text, numeric: true, ...unit(view.valueUnit), cell: ({ figure }) => <ValueCell figure={figure} view={view} /> }),
     column('uncertainty', { header: <>standard<br />uncertainty</>, headerText: columnWords.uncertainty, className: 'text-second whitespace-nowrap', cell: ({ figure }) => <UncertaintyCell figure={figure} /> }),
-    column('printed', { header: 'as printed', printed: true, className: 'wide:whitespace-nowrap', cell: ({ figure }) => <PrintedText figure={figure} /> }),
+    column('printed', { header: 'as printed', printed: true, className: 'whitespace-nowrap', cell: ({ figure }) => <PrintedText figure={figure} /> }),
     column('rate', { header: `k at ${view.temperatureK} K`, headerText: `k at ${view.temperatureK} K`, numeric: true, ...unit(view.kUnit), cell: ({ entry }) => <RateCell entry={entry} view={view} /> }),
     column('energyType', { cell: ({ entry }) => energyTypeOf(entry) }),
     column('scope', { cell: ({ entry }) => entry.scope ?? '' }),

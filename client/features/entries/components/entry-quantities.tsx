@@ -68,10 +68,15 @@ function meaningOf(entry: Entry, quantity: Quantity): string {
   return `${parts.filter(Boolean).join(', ')}; ${uncertaintyText(quantity)}`;
 }
 
-/** Long figures cut to eight digits, enough to follow the way; exports have them in full. */
+/** Figures longer than eight digits, cut to eight: enough to follow the way; exports have them in full. */
 function readable(lines: readonly DerivationLine[]): DerivationLine[] {
-  const cut = (text: string) => text.replace(/\d+\.\d+(?:e[+-]?\d+)?/g, (figure) => (figure.replace(/e.*$|\D/g, '').length > 9 ? String(Number(Number(figure).toPrecision(8))).replace('e+', 'e') : figure));
+  const cut = (text: string) => text.replace(/(?<![\w.])\d+(?:\.\d+)?(?:e[+-]?\d+)?/g, (figure) => (figure.replace(/e.*$|\D/g, '').length > 8 ? short(Number(figure)) : figure));
   return lines.map((line) => ({ ...line, from: cut(line.from), to: cut(line.to) }));
+}
+
+function short(value: number): string {
+  const eight = Number(value.toPrecision(8));
+  return eight >= 1e7 || eight < 1e-4 ? eight.toExponential().replace('e+', 'e') : String(eight);
 }
 
 /** How k at the temperature of interest follows from the converted parameters. */

@@ -30,10 +30,10 @@ export function ValueCell({ figure, view }: { figure: RowFigure | null; view: Ro
   const { shown: { quantity, unit }, number, low, high } = figure;
   const tail = view.valueUnit === null && unit ? <span className="text-second">{' '}<UnitText unit={unit} /></span> : null;
   if (quantity.bound === 'range' && low && high) {
-    return <><b className="font-semibold"><NumberText number={low} />–<NumberText number={high} /></b>{tail}</>;
+    return <span className="whitespace-nowrap"><b className="font-semibold"><NumberText number={low} />–<NumberText number={high} /></b>{tail}</span>;
   }
   if (!number) return <span className="text-second">{quantity.missing?.length ? 'not converted' : 'not reported'}</span>;
-  return <><Aligned number={number} bound={quantity.bound} decimals={view.valueDecimals} power={view.valuePower} strong />{tail}</>;
+  return <span className="whitespace-nowrap"><Aligned number={number} bound={quantity.bound} decimals={view.valueDecimals} power={view.valuePower} strong />{tail}</span>;
 }
 
 /** The standard uncertainty, or why there is none. */

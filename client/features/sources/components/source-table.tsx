@@ -9,9 +9,9 @@ import { SourceStatus } from './source-status.tsx';
 type SourceRow = ResponseOf<typeof listSources>['items'][number];
 
 const columns: readonly DataColumn<SourceRow>[] = [
-  { id: 'label', header: 'Source', sortKey: 'label', rowHeader: true, className: 'mid:whitespace-nowrap', cell: (row) => <Link to={`/sources/${row.id}`}>{row.label}</Link> },
+  { id: 'label', header: 'Source', sortKey: 'label', rowHeader: true, className: 'min-w-[12rem]', cell: (row) => <Link to={`/sources/${row.id}`}>{row.label}</Link> },
   { id: 'title', header: 'Title', cell: (row) => <>{row.title} <SourceStatus status={row.status} /></> },
-  { id: 'container', header: 'Published in', className: 'italic', cell: (row) => row.container ?? '' },
+  { id: 'container', header: 'Published in', cell: (row) => <i>{row.container}</i> },
   { id: 'year', header: 'Year', numeric: true, sortKey: 'year', firstDescending: true, cell: (row) => row.year ?? 'no year' },
   { id: 'entries', header: 'Accepted entries', numeric: true, sortKey: 'entries', firstDescending: true, cell: (row) => row.acceptedEntries },
 ];
