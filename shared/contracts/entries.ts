@@ -2,6 +2,7 @@ import * as z from 'zod';
 import {
   kinds, methodClasses, provenances, sampleTypes, scopes, siteTypes, structures,
 } from '../domain/kinds.ts';
+import { checkCodes } from '../domain/check-codes.ts';
 import { states } from '../domain/states.ts';
 import { endpoint } from './endpoint.ts';
 import { quantity, quantityInput } from './quantities.ts';
@@ -84,7 +85,7 @@ export const entryInput = z.object({
 export type EntryInput = z.infer<typeof entryInput>;
 
 export const checkSeverities = ['blocking', 'warning', 'note'] as const;
-export const check = z.object({ code: z.string(), severity: z.enum(checkSeverities), message: z.string() });
+export const check = z.object({ code: z.enum(checkCodes), severity: z.enum(checkSeverities), message: z.string() });
 export type Check = z.infer<typeof check>;
 
 /** What the viewer may do with an entry; the client shows by this only. */

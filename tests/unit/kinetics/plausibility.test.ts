@@ -2,8 +2,9 @@ import { describe, expect, it } from 'vitest';
 import { compareWithFamily, slipFactors } from '#shared/kinetics/outlier.ts';
 import {
   checkAgainstReactionEnergy, checkCodes, checkEnergy, checkKie, checkNotNegative, checkPreExponential, checkRateConstant, checkStickingCoefficient, checkTemperature,
-  checkUncertainty, checkValidRange, factorKindOf, outlierCheck, recordChecks,
+  checkUncertainty, checkValidRange, factorKindOf, outlierCheck,
 } from '#shared/kinetics/plausibility.ts';
+import { recordChecks } from '#shared/kinetics/record-checks.ts';
 import { convertQuantity, type QuantityInput } from '#shared/kinetics/quantity.ts';
 import type { RecordFacts } from '#shared/kinetics/record-checks.ts';
 
