@@ -22,6 +22,17 @@ export function formFaults(local: readonly LocalFault[], server: readonly Fault[
   return [...local, ...moved.filter((fault) => !unreadable.has(fault.path))];
 }
 
+/**
+ * Faults of the source. The preview stores nothing and so looks no source up; they come with the saved draft, and that
+ * there is none at all is seen here.
+ */
+export function sourceFaults(hasSource: boolean, preview: readonly Fault[], draft: readonly Fault[]): Fault[] {
+  const ofSource = ({ path }: Fault) => path.startsWith('source');
+  if (preview.some(ofSource)) return [];
+  if (!hasSource) return [{ path: 'source', message: 'Name the source: a DOI, a pasted BibTeX or RIS record, or a typed citation.' }];
+  return draft.filter(ofSource).slice(0, 1);
+}
+
 const names: readonly [RegExp, string][] = [
   [/^source/, 'Source'], [/^locator/, 'Where in the source'], [/^step/, 'Elementary step'], [/^surface/, 'Surface'], [/^kind/, 'Kind'],
   [/^scope/, 'Stands for'], [/^provenance/, 'How the source came by it'], [/^method\.technique/, 'Technique'], [/^method/, 'Method'],

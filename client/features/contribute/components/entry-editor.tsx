@@ -13,6 +13,7 @@ import { previewOptions } from '../api.ts';
 import type { HeldDraft } from '../draft-saver.ts';
 import { fieldId, FaultsContext, focusField } from '../entry-field.ts';
 import { emptyForm, formOf, type EntryForm } from '../entry-form.ts';
+import { sourceFaults } from '../faults.ts';
 import { readForm } from '../read-form.ts';
 import { useDraft, useKeeping } from '../use-draft.ts';
 import { useFieldFaults } from '../use-field-faults.ts';
@@ -59,7 +60,13 @@ export function EntryEditor({ start, userId, onCreated, onSubmitted }: EntryEdit
   const empty = Object.keys(settled).length === 0;
   const { data: previewed, error } = useQuery({ ...previewOptions(settled, temperatureK), enabled: !empty });
   const preview = empty ? undefined : previewed;
-  const { faults, at } = useFieldFaults(read, preview?.faults ?? [], tried, (path) => Boolean(get(touchedFields, path)));
+  const found = useMemo(() => {
+    const previewFaults = preview?.faults ?? [];
+    // The draft's word on its source counts once it has seen the source that is in the form.
+    const draftFaults = view.state.kind === 'unsaved' || view.state.kind === 'saving' ? [] : view.draft?.faults ?? [];
+    return [...sourceFaults(read.input.source !== undefined, previewFaults, draftFaults), ...previewFaults];
+  }, [preview, view.draft, view.state.kind, read.input.source]);
+  const { faults, at } = useFieldFaults(read, found, tried, (path) => Boolean(get(touchedFields, path)));
   const places = useMemo(() => values.quantities.map((_, row) => read.rows.indexOf(row)), [values.quantities, read.rows]);
   const handingIn = useHandingIn(saver, onSubmitted);
 

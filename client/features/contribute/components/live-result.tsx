@@ -25,6 +25,7 @@ interface LiveResultProps {
 export function LiveResult({ preview, error, faults, empty }: LiveResultProps) {
   const { unit, temperatureK } = useInstrument();
   const converted = preview?.quantities.filter((quantity) => quantity.asPrinted) ?? [];
+  const own = ownOf(converted, unit);
   return (
     <div className="flex flex-col gap-7">
       <section className="section-line" aria-labelledby="live-converted">
@@ -64,10 +65,10 @@ export function LiveResult({ preview, error, faults, empty }: LiveResultProps) {
         </section>
       )}
 
-      {preview?.step && (
+      {preview?.step && (own || preview.neighbours.length > 0) && (
         <section aria-labelledby="live-neighbours">
           <h2 id="live-neighbours" className="pb-3">Among its neighbours</h2>
-          <NeighbourScale neighbours={preview.neighbours} own={ownOf(converted, unit)} energyUnit={unit} most={8} />
+          <NeighbourScale neighbours={preview.neighbours} own={own} energyUnit={unit} most={8} />
         </section>
       )}
     </div>

@@ -64,7 +64,7 @@ function MyEntryRow({ entry, onAsk }: { entry: MyEntry; onAsk: (what: 'withdraw'
   const isDraft = may('edit');
   const title = entry.equation ? <Equation display equation={entry.equation} /> : <span className="text-second">no elementary step yet</span>;
   return (
-    <li className="grid gap-x-8 gap-y-2 border-b border-hairline py-4 mid:grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto]">
+    <li className="grid gap-x-8 gap-y-2 border-b border-hairline py-4 mid:grid-cols-[minmax(0,1fr)_minmax(0,1fr)_9.5rem]">
       <div className="min-w-0">
         <p className="text-lead">{title}</p>
         <p>
@@ -81,7 +81,7 @@ function MyEntryRow({ entry, onAsk }: { entry: MyEntry; onAsk: (what: 'withdraw'
           <blockquote className="mt-2 border-l-4 border-ochre pl-3 whitespace-pre-wrap" aria-label="The reviewer's last comment">{entry.lastComment}</blockquote>
         )}
       </div>
-      <div className="flex flex-wrap items-start gap-2 mid:max-w-48 mid:flex-col mid:items-stretch">
+      <div className="flex flex-wrap items-start gap-2 mid:flex-col mid:items-stretch">
         {isDraft && <LinkButton small to={`/contribute/${entry.accession}`}>Continue editing</LinkButton>}
         {may('revise') && <Button small onClick={() => onAsk('revise')}>{entry.state === 'returned' ? 'Answer' : 'Revise'}</Button>}
         {!isDraft && <Link className="button button-small" to={`/entries/${entry.accession}`}>Open</Link>}

@@ -34,7 +34,7 @@ export function StepSection({ preview }: { preview: Preview | undefined }) {
       {equation.trim() && (
         <p className="flex flex-wrap items-baseline gap-x-4 text-lead" aria-live="polite">
           <Equation display equation={preview?.step?.equation ?? equation} />
-          {preview?.step && <span className="text-fine text-second">{preview.step.class}</span>}
+          {preview?.step && <span className="text-fine text-second">{preview.step.class.replaceAll('-', ' ')}</span>}
         </p>
       )}
       {suggestion?.suggestion && (

@@ -64,6 +64,7 @@ export function SubmitDialog({ open, form, preview, sourceLabel, busy, error, on
         <div className="pt-3">
           <Notice kind="refusal" live title={isApiError(error) ? `${error.title}.` : 'It could not be submitted.'}>
             {isApiError(error) ? error.detail : 'Try again in a moment.'}
+            {isApiError(error) && error.errors.length > 1 && <ul className="list-disc pl-5">{error.errors.map((one) => <li key={one.path + one.message}>{one.message}</li>)}</ul>}
           </Notice>
         </div>
       )}

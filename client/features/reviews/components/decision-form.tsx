@@ -84,6 +84,7 @@ export function DecisionForm({ view }: { view: ReviewView }) {
     <div>
       <ChecklistFields checklist={view.decision ? view.checklist : checklist} onAnswer={answer} disabled={!mayDecide} />
       {mayDecide && <ChecklistKeys />}
+      {mayDecide && !view.claim && <p className="text-fine text-second">The first answer claims the submission for you, for 72 hours.</p>}
       {mayDecide && (
         <div className="flex flex-col gap-4 pt-5">
           <TextareaField

@@ -39,7 +39,7 @@ export function QueueList({ state }: { state: QueueState }) {
 function QueueRow({ item }: { item: QueueItem }) {
   const waits = item.state === 'submitted' || item.state === 'under-review';
   return (
-    <li className="grid gap-x-8 gap-y-1 border-b border-hairline py-3 mid:grid-cols-[minmax(0,1.5fr)_minmax(0,1.2fr)_minmax(0,1.1fr)_auto]">
+    <li className="grid gap-x-8 gap-y-1 border-b border-hairline py-3 mid:grid-cols-[minmax(0,1.5fr)_minmax(0,1.2fr)_minmax(0,1.1fr)_5.5rem]">
       <div className="min-w-0">
         <p className="text-lead"><Equation display equation={item.equation} /></p>
         <p>{item.surface} <samp className="ml-3">{[item.asPrinted, item.unitAsPrinted].filter(Boolean).join(' ')}</samp></p>
