@@ -5,7 +5,7 @@
  * A start by anybody else runs everything as that person.
  */
 import { spawnSync } from 'node:child_process';
-import { statSync } from 'node:fs';
+import { readFileSync, statSync } from 'node:fs';
 import { SetupError } from './say.mjs';
 
 /**
@@ -24,6 +24,9 @@ if (isRoot) process.umask(0o022);
  * @returns {Account | null}
  */
 export function findAccount(name) {
+  const local = readFileSync('/etc/passwd', 'utf8').split('\n').map((line) => line.split(':')).find((fields) => fields[0] === name || fields[2] === name);
+  if (local?.[0]) return { name: local[0], uid: Number(local[2]), gid: Number(local[3]) };
+  // Accounts may also come from a directory service; only the system knows those.
   const ask = (/** @type {string} */ flag) => spawnSync('id', [flag, name], { encoding: 'utf8' });
   const [uid, gid, label] = [ask('-u'), ask('-g'), ask('-un')];
   if (uid.status !== 0 || gid.status !== 0) return null;

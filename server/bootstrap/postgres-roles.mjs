@@ -3,6 +3,8 @@
  *
  * The owner migrates and restores; the application's role may do only what the migrations grant it.
  */
+import { createHash } from 'node:crypto';
+import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { runOrFail } from './processes.mjs';
 
@@ -17,7 +19,7 @@ export const extensions = ['pg_trgm', 'unaccent', 'btree_gin'];
  * @param {{ owner: string, application: string }} passwords
  */
 export async function ensureRolesAndDatabase(cluster, passwords) {
-  await superuserSql(cluster, [
+  const statements = [
     roleSql(ownerRole, passwords.owner),
     roleSql(applicationRole, passwords.application),
     `SELECT 'CREATE DATABASE ${databaseName} OWNER ${ownerRole} ENCODING UTF8 TEMPLATE template0' WHERE NOT EXISTS (SELECT FROM pg_database WHERE datname = '${databaseName}') \\gexec`,
@@ -25,7 +27,13 @@ export async function ensureRolesAndDatabase(cluster, passwords) {
     `GRANT CONNECT ON DATABASE ${databaseName} TO ${applicationRole};`,
     `\\connect ${databaseName}`,
     ...extensions.map((name) => `CREATE EXTENSION IF NOT EXISTS ${name};`),
-  ]);
+  ];
+  // Kept with the data, so that a start does not repeat what was done with these very passwords.
+  const mark = join(cluster.directory, 'sillstone.roles');
+  const wanted = createHash('sha256').update(statements.join('\n')).digest('hex');
+  if (existsSync(mark) && readFileSync(mark, 'utf8') === wanted) return;
+  await superuserSql(cluster, statements);
+  writeFileSync(mark, wanted, { mode: 0o600 });
 }
 
 /**
