@@ -36,14 +36,21 @@ export function Component() {
 
 function Missing({ detail }: { detail: string }) {
   useTitle('No such entry');
-  return <NotFoundState detail={detail} />;
+  return <><h1 className="sr-only">No such entry</h1><NotFoundState detail={detail} /></>;
 }
 
 function EntryPage({ accession, version }: { accession: string; version: number | null }) {
   const { temperatureK, unit } = useInstrument();
   const { data: entry, error, refetch } = useQuery(entryOptions(accession, version, temperatureK));
   useTitle(entry ? entryTitle(entry) : `Entry ${accession}`);
-  if (!entry) return error ? <ErrorState error={error} onRetry={() => void refetch()} /> : <LoadingState what={`entry ${accession}`} rows={8} />;
+  if (!entry) {
+    return (
+      <>
+        <h1 className="sr-only">{`Entry ${accession}`}</h1>
+        {error ? <ErrorState error={error} onRetry={() => void refetch()} /> : <LoadingState what={`entry ${accession}`} rows={8} />}
+      </>
+    );
+  }
   return (
     <article>
       <Head entry={entry} />

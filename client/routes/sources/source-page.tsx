@@ -21,7 +21,14 @@ import { SourceNotice, SourceStatus } from '#client/features/sources/components/
 export function Component() {
   const { id = '' } = useParams();
   const { data: source, error, refetch } = useQuery(sourceOptions(id));
-  if (!source) return error ? <ErrorState error={error} onRetry={() => void refetch()} /> : <LoadingState what="the source" />;
+  if (!source) {
+    return (
+      <>
+        <h1 className="sr-only">Source</h1>
+        {error ? <ErrorState error={error} onRetry={() => void refetch()} /> : <LoadingState what="the source" />}
+      </>
+    );
+  }
   return (
     <>
       <PageHead

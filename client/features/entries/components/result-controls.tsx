@@ -9,7 +9,7 @@ import { exportAddress, type ExportFormat } from '../api.ts';
 import { columnNames, columnWords, fixedColumns, printHidden, readHidden, usual, type ColumnName } from '../columns.ts';
 import { groupings, type Grouping } from '../search-state.ts';
 
-const quiet = 'text-second hover:text-ink hover:underline underline-offset-4 aria-expanded:text-ink';
+const quiet = 'min-h-6 text-second hover:text-ink hover:underline underline-offset-4 aria-expanded:text-ink';
 
 const groupingWords: Readonly<Record<Grouping, string>> = { step: 'elementary step', surface: 'surface', source: 'source', none: 'nothing' };
 
