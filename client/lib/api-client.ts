@@ -47,7 +47,7 @@ export async function callForAnswer<P extends z.ZodType, Q extends z.ZodType, B 
     forgetToken();
     response = await send(endpoint, url, parts);
   }
-  if (response.status === 401 && !endpoint.path.startsWith('/auth/')) {
+  if (response.status === 401 && !endpoint.path.startsWith('/auth/sign-')) {
     const refused = await problemOf(response);
     if (refused.code !== 'sign-in-required' || !(await askToSignIn())) throw refused;
     response = await send(endpoint, url, parts);

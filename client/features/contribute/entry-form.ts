@@ -32,7 +32,8 @@ export interface EntryForm {
   kind: Kind | '';
   scope: Scope | '';
   provenance: Provenance | '';
-  step: { equation: string };
+  /** `balancedAs` is the equation to which the free sites were added, empty when the source writes them itself. */
+  step: { equation: string; balancedAs: string };
   surface: {
     of: 'metal' | 'alloy'; metal: string; formula: string; structure: Structure | ''; facet: string; site: SiteType | '';
     sampleType: SampleType | ''; support: string; particleSizeNm: string;
@@ -60,7 +61,7 @@ export function emptyForm(): EntryForm {
   return {
     source: { via: '', id: '', doi: '', text: '', typed: emptyCitation },
     kind: '', scope: '', provenance: '',
-    step: { equation: '' },
+    step: { equation: '', balancedAs: '' },
     surface: { of: 'metal', metal: '', formula: '', structure: '', facet: '', site: '', sampleType: '', support: '', particleSizeNm: '' },
     locator: '',
     method: { class: '', technique: '', detail: '' },
@@ -85,7 +86,7 @@ export function formOf(input: EntryInput): EntryForm {
     kind: input.kind ?? '',
     scope: input.scope ?? '',
     provenance: input.provenance ?? '',
-    step: { equation: text(input.step?.equation) },
+    step: { equation: text(input.step?.equation), balancedAs: input.step?.sitesAdded ? text(input.step.equation) : '' },
     surface: {
       of: surface.formula ? 'alloy' : 'metal',
       metal: text(surface.metal), formula: text(surface.formula), structure: surface.structure ?? '', facet: text(surface.facet),

@@ -30,5 +30,6 @@ const silent = new Set(['equation', 'asPrinted', 'unitAsPrinted', 'symbol', 'met
 
 function wordsOfName(name: string): string {
   if (silent.has(name)) return '';
-  return `${name.replace(/([a-z])([A-Z])/g, '$1 $2').toLowerCase()} `;
+  // The unit at the end of a name belongs to programs.
+  return `${name.replace(/(KPerS|PerM2|Langmuir|K|Nm)$/, '').replace(/([a-z])([A-Z])/g, '$1 $2').toLowerCase()} `;
 }

@@ -63,7 +63,7 @@ export function readForm(form: EntryForm): ReadForm {
     kind: form.kind || undefined,
     scope: form.scope || undefined,
     provenance: form.provenance || undefined,
-    step: part({ equation: word(form.step.equation) }),
+    step: part({ equation: word(form.step.equation), sitesAdded: (form.step.balancedAs && form.step.balancedAs === form.step.equation) || undefined }),
     surface: part({
       metal: form.surface.of === 'metal' ? word(form.surface.metal) : undefined,
       formula: form.surface.of === 'alloy' ? word(form.surface.formula) : undefined,

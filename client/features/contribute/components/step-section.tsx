@@ -41,7 +41,13 @@ export function StepSection({ preview }: { preview: Preview | undefined }) {
         <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
           <Button
             small
-            onClick={() => setValue('step.equation', suggestion.suggestion ?? '', { shouldDirty: true })}
+            // Leaving the field would set its error, which moves this button from under the pointer before it is pressed.
+            onPointerDown={(event) => event.preventDefault()}
+            onMouseDown={(event) => event.preventDefault()}
+            onClick={() => {
+              setValue('step.balancedAs', suggestion.suggestion ?? '');
+              setValue('step.equation', suggestion.suggestion ?? '', { shouldDirty: true });
+            }}
           >
             Add the free site
           </Button>
