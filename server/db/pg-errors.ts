@@ -16,6 +16,9 @@ function pgFault(error: unknown): PgFault | null {
 /** What a broken constraint means to the person whose request broke it. */
 const byConstraint: Readonly<Record<string, () => Refusal>> = {
   revisions_one_open_per_entry: () => new Refusal('revision-open'),
+  // Two requests that open, or hand in, the same revision at the same instant meet here.
+  revisions_entry_number_key: () => new Refusal('revision-open'),
+  quantities_revision_position_key: () => new Refusal('state-conflict', 'This revision has been submitted already.'),
   revisions_one_accepted_per_entry: () => new Refusal('state-conflict', 'Another version of this entry was accepted meanwhile.'),
   revisions_transition: () => new Refusal('state-conflict'),
   revisions_are_frozen: () => new Refusal('state-conflict', 'This revision has been submitted and is frozen.'),
@@ -46,6 +49,6 @@ export function refusalFromDatabase(error: unknown): Refusal | null {
   if (known) return known();
   if (fault.code === '40001' || fault.code === '40P01' || fault.code === '55P03') return new Refusal('conflict', 'Two changes met; please try again.');
   if (fault.code.startsWith('08') || fault.code.startsWith('57P')) return new Refusal('database-unavailable');
-  if (fault.code === '22021' || fault.code === '22P05') return new Refusal('bad-request', 'The text holds a character that cannot be stored.');
+  if (fault.code === '22021' || fault.code === '22P02' || fault.code === '22P05') return new Refusal('bad-request', 'The text holds a character that cannot be stored.');
   return null;
 }
