@@ -100,7 +100,7 @@ function ConvertedQuantity({ quantity }: { quantity: Quantity }) {
         state={reached ? 'result' : 'doubt'}
       />
       {quantity.derivation.length > 0 && (
-        <details className="pt-2">
+        <details className="pt-2" open>
           <summary className="w-fit text-fine text-second">Derivation, {quantity.derivation.length === 1 ? 'one step' : `${quantity.derivation.length} steps`}</summary>
           <Derivation lines={quantity.derivation} />
         </details>
