@@ -1,4 +1,4 @@
-import { useCallback, useMemo } from 'react';
+import { useCallback, useEffect, useMemo, useRef } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { entryFilter, printSearch, readSearch, type EntryFilter, type EntrySearch, type SortKey } from '#shared/contracts/entry-search.ts';
 
@@ -55,30 +55,59 @@ function nextParams(before: URLSearchParams, change: (search: EntrySearch) => Pa
   return next;
 }
 
+/**
+ * The address's parameters and a setter that builds on the newest ones. The router shows a new address when it has time to (a transition),
+ * and its own setter builds on what is shown: a second change made before that would undo the first.
+ */
+function useNewestParams(): [string, (make: (before: URLSearchParams) => URLSearchParams, replace?: boolean) => void] {
+  const [params, setParams] = useSearchParams();
+  const shown = params.toString();
+  const newest = useRef(shown);
+  /** Addresses that were set and are not shown yet. */
+  const underway = useRef<string[]>([]);
+  useEffect(() => {
+    const at = underway.current.indexOf(shown);
+    if (at >= 0) {
+      underway.current.splice(0, at + 1);
+    } else {
+      underway.current = [];
+      newest.current = shown;
+    }
+  }, [shown]);
+  const change = useCallback((make: (before: URLSearchParams) => URLSearchParams, replace = false) => {
+    const next = make(new URLSearchParams(newest.current));
+    const address = next.toString();
+    if (address === newest.current) return;
+    newest.current = address;
+    underway.current.push(address);
+    setParams(next, { replace, preventScrollReset: true });
+  }, [setParams]);
+  return [shown, change];
+}
+
 /** The search the address asks, and the one way to change it. */
 export function useEntrySearchState(): EntrySearchState {
-  const [params, setParams] = useSearchParams();
-  const address = params.toString();
+  const [address, change] = useNewestParams();
   const read = useMemo(() => {
-    const { search, ignored } = readSearch(new URLSearchParams(address));
-    return { filter: filterOf(search), sort: search.sort, ignored };
+    const params = new URLSearchParams(address);
+    const { search, ignored } = readSearch(params);
+    const grouping = groupings.find((one) => one === params.get('group')) ?? usualGrouping;
+    return { filter: filterOf(search), sort: search.sort, grouping, ignored };
   }, [address]);
 
-  const changeFilter = useCallback((change: Partial<EntryFilter>, replace = false) => {
-    setParams((before) => nextParams(before, (search) => ({ ...search, ...change })), { replace, preventScrollReset: true });
-  }, [setParams]);
+  const changeFilter = useCallback((filters: Partial<EntryFilter>, replace = false) => {
+    change((before) => nextParams(before, (search) => ({ ...search, ...filters })), replace);
+  }, [change]);
   const clearFilter = useCallback(() => {
-    setParams((before) => nextParams(before, ({ sort, T }) => ({ sort, T })), { preventScrollReset: true });
-  }, [setParams]);
+    change((before) => nextParams(before, ({ sort, T }) => ({ sort, T })));
+  }, [change]);
   const changeSort = useCallback((sort: SortKey) => {
-    setParams((before) => nextParams(before, (search) => ({ ...search, sort })), { preventScrollReset: true });
-  }, [setParams]);
+    change((before) => nextParams(before, (search) => ({ ...search, sort })));
+  }, [change]);
   const changeGrouping = useCallback((grouping: Grouping) => {
-    setParams((before) => nextParams(before, (search) => ({ ...search, sort: sortFor(grouping, search.sort) }), grouping), { preventScrollReset: true });
-  }, [setParams]);
-
-  const grouping = groupings.find((one) => one === params.get('group')) ?? usualGrouping;
-  return { ...read, grouping, changeFilter, clearFilter, changeSort, changeGrouping };
+    change((before) => nextParams(before, (search) => ({ ...search, sort: sortFor(grouping, search.sort) }), grouping));
+  }, [change]);
+  return { ...read, changeFilter, clearFilter, changeSort, changeGrouping };
 }
 
 /** The order in which groups come whole. */

@@ -78,6 +78,26 @@ describe('query sentence', () => {
     expect(address()).toBe('?kind=activation-energy&kind=kie');
   });
 
+  it('builds a second change on the first even before the first is shown', async () => {
+    searchServer(() => ({ entries: [ru, ni] }));
+    const { address } = open('/search?metal=Ru&kind=kie');
+    const header = await screen.findByRole('button', { name: 'Source' });
+    const choice = screen.getByRole('button', { name: 'Method' });
+    act(() => {
+      header.click();
+      choice.click();
+    });
+    expect(address()).toBe('?kind=kie&metal=Ru&sort=method');
+    const group = screen.getByRole('button', { name: 'Group by: elementary step' });
+    act(() => group.click());
+    const none = screen.getByRole('option', { name: 'nothing' });
+    act(() => {
+      choice.click();
+      none.click();
+    });
+    expect(address()).toBe('?kind=kie&metal=Ru&sort=-method&group=none');
+  });
+
   it('opens a mangled link and says what it left out', async () => {
     searchServer(() => ({ entries: [ru] }));
     open('/search?metal=Ru&validAt=warm&sort=beauty');
