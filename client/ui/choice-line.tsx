@@ -14,7 +14,7 @@ export function ChoiceLine({ label, choices }: ChoiceLineProps) {
           key={choice.key} to={choice.to} replace aria-current={choice.current ? 'true' : undefined}
           className={`border-b-[3px] py-1 no-underline ${choice.current ? 'border-lichen font-semibold text-ink' : 'border-transparent text-second hover:border-rule hover:text-ink'}`}
         >
-          {choice.label}{choice.count !== undefined && <span className="font-normal text-second">{` · ${choice.count}`}</span>}
+          {choice.label}{choice.count !== undefined && <>{' '}<span className="font-normal text-second">{`· ${choice.count}`}</span></>}
         </Link>
       ))}
     </nav>

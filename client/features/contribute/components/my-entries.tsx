@@ -16,7 +16,7 @@ import { WithdrawDialog } from './withdraw-dialog.tsx';
 const stateLook: Partial<Record<State, TagKind>> = { accepted: 'result', returned: 'doubt', rejected: 'refusal', retracted: 'refusal' };
 
 /** The colour of a state's tag repeats what its word says. */
-export function StateTag({ state }: { state: State }) {
+function StateTag({ state }: { state: State }) {
   return <Tag kind={stateLook[state] ?? 'plain'}>{stateWords[state]}</Tag>;
 }
 
@@ -83,7 +83,7 @@ function MyEntryRow({ entry, onAsk }: { entry: MyEntry; onAsk: (what: 'withdraw'
       </div>
       <div className="flex flex-wrap items-start gap-2 mid:flex-col mid:items-stretch">
         {isDraft && <LinkButton small to={`/contribute/${entry.accession}`}>Continue editing</LinkButton>}
-        {may('revise') && <Button small onClick={() => onAsk('revise')}>{entry.state === 'returned' ? 'Answer' : 'Revise'}</Button>}
+        {may('revise') && <Button small onClick={() => onAsk('revise')}>{entry.state === 'returned' ? 'Answer' : entry.state === 'withdrawn' ? 'Take up again' : 'Revise'}</Button>}
         {!isDraft && <Link className="button button-small" to={`/entries/${entry.accession}`}>Open</Link>}
         {may('withdraw') && <Button small look="quiet" onClick={() => onAsk('withdraw')}>{isDraft ? 'Discard' : 'Withdraw'}</Button>}
       </div>

@@ -9,7 +9,7 @@ import { FormSection } from './form-section.tsx';
 import { QuantityRow } from './quantity-row.tsx';
 
 /** What is usually printed beside what is there already. */
-export function nextSymbol(held: readonly QuantitySymbol[]): QuantitySymbol {
+function nextSymbol(held: readonly QuantitySymbol[]): QuantitySymbol {
   const usual: QuantitySymbol[] = ['energy', 'preExponential', 'exponent', 'referenceTemperature', 'rateConstant'];
   return [...usual, ...quantitySymbols].find((symbol) => !held.includes(symbol)) ?? 'energy';
 }

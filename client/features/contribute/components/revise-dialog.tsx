@@ -25,10 +25,11 @@ export function ReviseDialog({ entry, onClose, onOpened }: ReviseDialogProps) {
     onClose();
   }
   const returned = entry?.state === 'returned';
+  const withdrawn = entry?.state === 'withdrawn';
   return (
     <Dialog
       open={entry !== null}
-      title={returned ? 'Answer the reviewer' : 'Revise this entry'}
+      title={returned ? 'Answer the reviewer' : withdrawn ? 'Take this entry up again' : 'Revise this entry'}
       onClose={close}
       actions={(
         <>
@@ -41,10 +42,10 @@ export function ReviseDialog({ entry, onClose, onOpened }: ReviseDialogProps) {
       <p className="pb-3">
         {returned
           ? 'The new draft is copied from the version that was returned. Change what the reviewer asks for, then submit it again.'
-          : 'The accepted version stays public, unchanged, until the new one is accepted.'}
+          : withdrawn ? 'The new draft is copied from the version that was withdrawn.' : 'The accepted version stays public, unchanged, until the new one is accepted.'}
       </p>
       <TextareaField
-        label={returned ? 'Answer to the reviewer (optional)' : 'Reason for the revision'} rows={3} maxLength={1000} value={reason}
+        label={returned ? 'Answer to the reviewer (optional)' : withdrawn ? 'Reason (optional)' : 'Reason for the revision'} rows={3} maxLength={1000} value={reason}
         onChange={(event) => setReason(event.target.value)}
       />
       {error && (

@@ -10,7 +10,7 @@ import type { EntryForm } from '../entry-form.ts';
 import { FormSection } from './form-section.tsx';
 
 /** The fault of the equation that names a spelling which would be right. */
-export function stepSuggestion(faults: readonly Fault[]): Fault | undefined {
+function stepSuggestion(faults: readonly Fault[]): Fault | undefined {
   return faults.find((fault) => fault.path.startsWith('step') && fault.suggestion);
 }
 

@@ -85,6 +85,7 @@ export function DecisionForm({ view }: { view: ReviewView }) {
       <ChecklistFields checklist={view.decision ? view.checklist : checklist} onAnswer={answer} disabled={!mayDecide} />
       {mayDecide && <ChecklistKeys />}
       {mayDecide && !view.claim && <p className="text-fine text-second">The first answer claims the submission for you, for 72 hours.</p>}
+      {refused && <Notice kind="refusal" live title={refusalWords(refused).title} className="mt-4">{refusalWords(refused).text}</Notice>}
       {mayDecide && (
         <div className="flex flex-col gap-4 pt-5">
           <TextareaField
@@ -102,7 +103,6 @@ export function DecisionForm({ view }: { view: ReviewView }) {
               setFaults(({ reason: _, ...rest }) => rest);
             }}
           />
-          {refused && <Notice kind="refusal" live title={refusalWords(refused).title}>{refusalWords(refused).text}</Notice>}
           <div className="flex flex-wrap gap-3">
             <Button look="primary" aria-disabled={why !== null || undefined} aria-describedby={whyId} onClick={() => ask('accept')}>Accept</Button>
             <Button onClick={() => ask('return')}>Return</Button>

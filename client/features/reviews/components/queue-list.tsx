@@ -3,6 +3,7 @@ import type { QueueItem } from '#shared/contracts/reviews.ts';
 import { stateWords } from '#shared/domain/states.ts';
 import { formatAge, formatDateTime } from '#client/lib/dates.ts';
 import { LinkButton } from '#client/ui/button.tsx';
+import { CheckTags } from '#client/ui/check-bars.tsx';
 import { Equation } from '#client/ui/equation.tsx';
 import { LoadMore } from '#client/ui/pagination.tsx';
 import { EmptyState, ErrorState, LoadingState } from '#client/ui/states.tsx';
@@ -49,7 +50,7 @@ function QueueRow({ item }: { item: QueueItem }) {
         <p className="text-fine text-second">
           by {item.contributor}{item.round > 1 && `, round ${item.round}`}
         </p>
-        <CheckTags item={item} />
+        <CheckTags checks={item.checks} />
       </div>
       <div className="min-w-0">
         <p>{waits ? <>waiting <time dateTime={item.submittedAt} title={formatDateTime(item.submittedAt)}>{formatAge(item.submittedAt)}</time></> : <Tag>{stateWords[item.state]}</Tag>}</p>
@@ -64,20 +65,5 @@ function QueueRow({ item }: { item: QueueItem }) {
         </LinkButton>
       </div>
     </li>
-  );
-}
-
-/** The checks as words, the weightiest first; notes are counted only. */
-function CheckTags({ item }: { item: QueueItem }) {
-  const named = item.checks.filter((check) => check.severity !== 'note');
-  if (named.length === 0) return null;
-  return (
-    <ul className="flex flex-wrap gap-1.5 pt-1" aria-label="Checks raised">
-      {named.map((check) => (
-        <li key={check.code + check.message} title={check.message}>
-          <Tag kind={check.severity === 'blocking' || check.code.includes('slip') ? 'refusal' : 'doubt'}>{check.code.replaceAll('-', ' ')}</Tag>
-        </li>
-      ))}
-    </ul>
   );
 }
