@@ -58,17 +58,18 @@ export function createReviewsService({ db, clock }: Context, records: EntryRecor
     return { ...record, revision };
   }
 
-  /** Runs `work` on the submission as it is once nobody else can change it. */
-  async function held<T>(id: string, actor: SignedIn, work: (tx: Tx, record: SubmissionRecord, now: Date) => Promise<T>): Promise<T> {
+  /** Runs `work` on the submission as it is once nobody else can change it, unless `isDone` finds it done already. */
+  async function held(id: string, actor: SignedIn, work: (tx: Tx, record: SubmissionRecord, now: Date) => Promise<void>, isDone: (record: SubmissionRecord) => boolean = () => false): Promise<void> {
     await find(id);
-    return db.transaction(async (tx) => {
+    await db.transaction(async (tx) => {
       await repository.lockSubmission(tx, id);
       const record = await repository.findSubmission(tx, id);
       if (!record) throw notFound('This submission');
+      if (isDone(record)) return;
       await requireWaiting(record);
       requireOthers(record, actor);
       requireUnclaimedByOthers(record, actor);
-      return work(tx, record, clock());
+      await work(tx, record, clock());
     });
   }
 
@@ -191,7 +192,9 @@ export function createReviewsService({ db, clock }: Context, records: EntryRecor
     async decide(who: Actor, id: string, body: z.infer<typeof decisionBody>): Promise<void> {
       const actor = requireRole(who, 'reviewer');
       const before = await find(id);
-      if (before.decision && before.decision.decidedBy === actor.userId && before.decision.decision === body.decision) return;
+      // Looked at again once the submission is held: a second press of the button may come while the first is under way.
+      const isRetry = ({ decision }: SubmissionRecord) => decision?.decidedBy === actor.userId && decision.decision === body.decision;
+      if (isRetry(before)) return;
       requireOthers(before, actor);
       const errors: { path: string; message: string }[] = [];
       if (body.decision === 'accept') {
@@ -218,7 +221,7 @@ export function createReviewsService({ db, clock }: Context, records: EntryRecor
         await appendEvents(tx, [...events, {
           at: now, actorId: actor.userId, action: `submission.${body.decision}`, subjectType: 'submission', subjectId: id, payload: { revision: record.revision.id, reason: body.reason ?? null },
         }]);
-      });
+      }, isRetry);
     },
 
     /** Puts submissions whose claim has run out back into the queue; one round of the job. */
