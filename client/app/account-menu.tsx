@@ -1,5 +1,5 @@
 import { Link, useLocation } from 'react-router-dom';
-import { strongestRole } from '#shared/domain/roles.ts';
+import { hasRole, strongestRole } from '#shared/domain/roles.ts';
 import { Button } from '#client/ui/button.tsx';
 import { Popover } from '#client/ui/popover.tsx';
 import { useSession, useSignOut } from './session.ts';
@@ -26,7 +26,12 @@ export function AccountMenu() {
         panelClassName="account-panel"
         label={<><strong>{name}</strong><span className="text-second">{`\u00a0· ${strongestRole(roles)}`}</span></>}
       >
-        {() => <SignOut />}
+        {(close) => (
+          <>
+            {hasRole(roles, 'contributor') && <Link to="/contributions" onClick={close}>My submissions</Link>}
+            <SignOut />
+          </>
+        )}
       </Popover>
     </div>
   );
@@ -51,6 +56,7 @@ export function AccountLines({ onFollow }: { onFollow: () => void }) {
   return (
     <>
       <p><strong>{me.user.name}</strong><span className="text-second"> · {strongestRole(me.user.roles)}</span></p>
+      {hasRole(me.user.roles, 'contributor') && <Link className="nav-link" to="/contributions" onClick={onFollow}>My submissions</Link>}
       <SignOut />
     </>
   );

@@ -28,8 +28,9 @@ export function useSignOut() {
   return useMutation({
     mutationFn: () => call(signOut, {}),
     onSuccess: (me) => {
-      client.clear();
+      // The session's own query stays, so that every page that follows it hears at once that nobody is signed in.
       client.setQueryData(sessionOptions.queryKey, me);
+      client.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== sessionOptions.queryKey[0] });
     },
   });
 }

@@ -97,7 +97,7 @@ export function EntryEditor({ start, userId, onCreated, onSubmitted }: EntryEdit
       <FaultsContext value={at}>
         <PageHead
           title={start || accession ? `Draft ${accession ?? ''}` : 'New entry'}
-          trail={[{ label: 'My submissions', to: '/contributions' }, { label: 'Contribute' }]}
+          trail={[{ label: 'My submissions', to: '/contributions' }, { label: start || accession ? 'Draft' : 'New' }]}
           aside={<><SaveLine state={view.state} onRetry={() => void saver.save()} /><Button look="primary" onClick={trySubmitting}>Submit for review</Button></>}
         />
         {view.draft?.lastDecision && <LastDecision decision={view.draft.lastDecision} />}

@@ -69,7 +69,7 @@ interface Entered {
 
 /** Entries already taken from the source, so that nothing is entered twice. */
 function AlreadyEntered({ entries }: { entries: readonly Entered[] }) {
-  if (entries.length === 0) return <p className="text-fine text-second">Nothing has been entered from this source yet.</p>;
+  if (entries.length === 0) return <p className="text-fine text-second">No accepted value and none of yours is from this source yet.</p>;
   return (
     <section aria-label="Already entered from this source">
       <p className="field-label">Already entered from this source: {entries.length}</p>
