@@ -5,11 +5,11 @@ import { Refusal } from '#server/refusal.ts';
 export type Position = (string | number | null)[];
 
 /**
- * Page markers: opaque to clients and bound to the question they were given for, so that a marker of another search is refused.
- * `question` is whatever the page depends on (filter, sort, temperature).
+ * Page markers: opaque to clients and bound to the question they were given for, so that a marker of another search is refused,
+ * and so is one whose position was changed. `question` is whatever the page depends on (filter, sort, temperature).
  */
 export function writeCursor(position: Position, question: unknown): string {
-  return Buffer.from(JSON.stringify([fingerprint(question), ...position]), 'utf8').toString('base64url');
+  return Buffer.from(JSON.stringify([fingerprint([question, position]), ...position]), 'utf8').toString('base64url');
 }
 
 export function readCursor(cursor: string, question: unknown, columns: number): Position {
@@ -19,7 +19,7 @@ export function readCursor(cursor: string, question: unknown, columns: number): 
   } catch {
     throw new Refusal('cursor-invalid');
   }
-  if (!Array.isArray(parts) || parts.length !== columns + 1 || parts[0] !== fingerprint(question)) throw new Refusal('cursor-invalid', 'The page marker does not belong to this search. Start again from the first page.');
+  if (!Array.isArray(parts) || parts.length !== columns + 1 || parts[0] !== fingerprint([question, parts.slice(1)])) throw new Refusal('cursor-invalid', 'The page marker does not belong to this search. Start again from the first page.');
   const position = parts.slice(1) as unknown[];
   if (!position.every((part) => part === null || typeof part === 'string' || (typeof part === 'number' && Number.isFinite(part)))) throw new Refusal('cursor-invalid');
   return position as Position;

@@ -1,6 +1,7 @@
 import type { Request, Response, Router } from 'express';
 import type * as z from 'zod';
 import { requireRole, visitor, type Actor } from '#server/actor.ts';
+import { Refusal } from '#server/refusal.ts';
 import type { BodyOf, Endpoint, ParamsOf, QueryOf, ResponseOf } from '#shared/contracts/endpoint.ts';
 
 export interface Call<E> {
@@ -30,6 +31,10 @@ export function route<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodT
   router[method](endpoint.path, async (req: Request, res: Response) => {
     const actor = actorOf(res);
     if (endpoint.access !== 'visitor') requireRole(actor, endpoint.access);
+    // A body that was sent but is not JSON must not pass for an empty one.
+    if (endpoint.body && req.body === undefined && (Number(req.headers['content-length'] ?? '0') > 0 || req.headers['transfer-encoding'] !== undefined)) {
+      throw new Refusal('bad-request', 'Send the body as JSON, with the Content-Type application/json.');
+    }
     const call = {
       params: endpoint.params?.parse(req.params),
       query: endpoint.query?.parse(req.query),

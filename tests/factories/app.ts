@@ -8,7 +8,7 @@ import { createApp, type HttpSettings } from '#server/app.ts';
 import type { Context } from '#server/context.ts';
 import { openPools, type Pools } from '#server/db/pool.ts';
 import { createServices, type Services } from '#server/services.ts';
-import { startFakeDoiServer, type FakeDoiServer } from '#server/services/doi/fake-doi-server.ts';
+import { startFakeDoiServer, type FakeDoiRecord, type FakeDoiServer } from '#server/services/doi/fake-doi-server.ts';
 import { createDoiClient } from '#server/services/doi/resolver-client.ts';
 import type { Actor } from '#server/actor.ts';
 import type { Role } from '#shared/domain/roles.ts';
@@ -41,6 +41,8 @@ export class TestClock {
 export interface AppOptions {
   demonstration?: boolean;
   limits?: Partial<HttpSettings['limits']>;
+  /** Further sources that the stand-in DOI service knows. */
+  doiRecords?: () => Promise<readonly FakeDoiRecord[]>;
 }
 
 /** The product on a database of the test file's own, answering over HTTP. */
@@ -66,7 +68,7 @@ export class TestApp {
   async start(database: TestDatabase, options: AppOptions): Promise<void> {
     this.database = database;
     const pools = openPools(database.appUrl, () => undefined);
-    const fake = await startFakeDoiServer({ records: testSources, slowMs: 20_000 });
+    const fake = await startFakeDoiServer({ records: [...testSources, ...(await options.doiRecords?.() ?? [])], slowMs: 20_000 });
     const working = createDoiClient({ resolverUrl: fake.url, timeoutMs: 400, maxConcurrent: 50 });
     const dead = createDoiClient({ resolverUrl: 'http://127.0.0.1:9', timeoutMs: 400 });
     const log = pino({ level: 'error' }, { write: (line: string) => this.unforeseen.push(line) });

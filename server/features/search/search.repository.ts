@@ -19,13 +19,14 @@ const escapeLike = (text: string) => text.replace(/[%_\\]/g, '\\$&');
 /** Finds a word in the full text, by its beginning, inside an equation, or misspelt. */
 function matchesWord(word: string): SQL {
   const plain = word.toLowerCase();
-  const lexeme = plain.replace(/[^\p{L}\p{N}]+/gu, ' ').trim().split(' ').filter(Boolean);
-  const query = lexeme.map((part) => `${part}:*`).join(' & ');
+  const parts = plain.split(/[^\p{L}\p{N}]+/u).filter(Boolean);
   const whole = sql`${rows.searchText} like ${`%${escapeLike(plain)}%`}`;
-  if (query === '') return whole;
-  const full = sql`${rows.document} @@ to_tsquery('simple', unaccent(${query}))`;
-  // Trigrams of a word under five letters find too much to be of use.
-  return plain.length < 5 ? sql`(${full} or ${whole})` : sql`(${full} or ${whole} or ${plain} <% ${rows.searchText})`;
+  if (parts.length === 0) return whole;
+  // Each part in quotes: taking accents off can bring brackets and apostrophes with it, as ⑴ becomes (1).
+  const quoted = parts.map((part) => sql`'''' || translate(unaccent(${part}), '''\\', '  ') || ''':*'`);
+  const full = sql`${rows.document} @@ to_tsquery('simple', ${sql.join(quoted, sql` || ' & ' || `)})`;
+  // Trigrams of a word under five letters find too much to be of use; a DOI, an accession or a figure is typed right or not at all.
+  return plain.length < 5 || !/^\p{L}+$/u.test(plain) ? sql`(${full} or ${whole})` : sql`(${full} or ${whole} or ${plain} <% ${rows.searchText})`;
 }
 
 /** One condition a filter in force; different names are joined with AND, repeated values with OR. */
@@ -55,7 +56,7 @@ export function filterConditions(filter: SearchFilter): Map<FilterName, SQL> {
   anyOf('sampleType', rows.sampleType, filter.sampleType);
   anyOf('accession', rows.accession, filter.accession);
   if (some(filter.source)) {
-    const ids = (filter.source ?? []).filter((text) => /^[0-9a-f]{8}-[0-9a-f-]{27}$/i.test(text));
+    const ids = (filter.source ?? []).filter((text) => /^[0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12}$/i.test(text));
     put('source', or(inArray(rows.doi, (filter.source ?? []).map((text) => text.toLowerCase())), ids.length > 0 ? inArray(rows.sourceId, ids) : undefined));
   }
   if (filter.yearFrom !== undefined) put('yearFrom', sql`${rows.year} >= ${filter.yearFrom}`);

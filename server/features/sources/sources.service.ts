@@ -24,6 +24,8 @@ export interface ResolvedSource {
   fault: { path: string; message: string; code: string } | null;
 }
 
+const isSourceId = (text: string): boolean => /^[0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12}$/i.test(text);
+
 /** A source that failed to be confirmed is tried again after this long [min]. */
 const retryMinutes = 2;
 
@@ -92,7 +94,7 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
   async function resolve(input: SourceInput | undefined): Promise<{ row: repository.SourceRow | null; fault: ResolvedSource['fault'] }> {
     if (!input) return { row: null, fault: null };
     if (input.id) {
-      const row = /^[0-9a-f-]{36}$/i.test(input.id) ? await repository.findSource(db, input.id) : await repository.findSourceByKey(db, input.id);
+      const row = isSourceId(input.id) ? await repository.findSource(db, input.id) : await repository.findSourceByKey(db, input.id);
       return row ? { row, fault: null } : { row: null, fault: { path: 'source.id', code: 'source-unknown', message: 'This source is not in the store.' } };
     }
     const typed = input.bibtex ?? input.ris;
@@ -132,7 +134,7 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
     /** Looks at what a contributor named without asking anyone outside or storing anything. */
     async peek(input: SourceInput | undefined): Promise<SourceSummary | null> {
       const doi = input?.doi ? normaliseDoi(input.doi) : null;
-      const row = input?.id && /^[0-9a-f-]{36}$/i.test(input.id) ? await repository.findSource(db, input.id) : doi ? await repository.findSourceByDoi(db, doi) : null;
+      const row = input?.id && isSourceId(input.id) ? await repository.findSource(db, input.id) : doi ? await repository.findSourceByDoi(db, doi) : null;
       return row ? presentSource(row) : null;
     },
 
@@ -154,7 +156,7 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
     },
 
     async get(_actor: Actor, id: string): Promise<SourceDetail> {
-      const row = /^[0-9a-f-]{36}$/i.test(id) ? await repository.findSource(db, id) : await repository.findSourceByKey(db, id);
+      const row = isSourceId(id) ? await repository.findSource(db, id) : await repository.findSourceByKey(db, id);
       if (!row) throw notFound(`The source ${id}`);
       return detail(row);
     },
