@@ -17,6 +17,8 @@ export function exportsRoutes(exports: ExportsService, exportLimit: RequestHandl
         res.setHeader('Cache-Control', 'no-store');
       });
     } catch (error) {
+      // A reader who went away before the first byte needs no answer, and is no failure of ours.
+      if (res.destroyed) return;
       // Once bytes have gone out, breaking the connection is the only way to say that the file is not whole.
       if (!res.headersSent) throw error;
       res.destroy(error instanceof Error ? error : undefined);

@@ -54,6 +54,10 @@ export function createExportsService({ exportPool, clock, publicUrl, version, de
     const madeAt = clock();
     const hashes: Record<string, string> = {};
     const tally: Tally = { entries: 0, sources: new Map() };
+    // Asked once and before anything is read: who is gone already does not go again.
+    if (out.destroyed) throw new Error('The reader went away.');
+    const gone = new Promise<never>((_resolve, reject) => out.once('close', () => reject(new Error('The reader went away.'))));
+    gone.catch(() => undefined);
     // Files follow one another, because a later one depends on what an earlier one held; each is read only as fast as it is sent.
     const add = async (name: string, lines: AsyncIterable<string> | Iterable<string>): Promise<void> => {
       const hash = createHash('sha256');
@@ -61,7 +65,8 @@ export function createExportsService({ exportPool, clock, publicUrl, version, de
       zip.addReadStream(file, name, { mtime: madeAt });
       for await (const line of lines) {
         hash.update(line, 'utf8');
-        if (!file.write(line)) await Promise.race([once(file, 'drain'), once(out, 'close').then(() => { throw new Error('The reader went away.'); })]);
+        if (!file.write(line)) await Promise.race([once(file, 'drain'), gone]);
+        if (out.destroyed) throw new Error('The reader went away.');
       }
       file.end();
       hashes[name] = hash.digest('hex');
