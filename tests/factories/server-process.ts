@@ -29,7 +29,7 @@ function freePort(): Promise<number> {
 async function startProcess(program: string, databaseUrl: string, running: Set<ChildProcess>): Promise<ServerProcess> {
   const port = await freePort();
   const child = spawn(process.execPath, [program], {
-    env: { PATH: process.env.PATH, NODE_ENV: 'test', HOST: '127.0.0.1', PORT: String(port), DATABASE_URL: databaseUrl, SILLSTONE_DEMO: '1', SESSION_SECRET: 'a long text that is only ever used in tests 0123456789', LOG_LEVEL: 'warn' },
+    env: { NODE_ENV: 'test', HOST: '127.0.0.1', PORT: String(port), DATABASE_URL: databaseUrl, SILLSTONE_DEMO: '1', SESSION_SECRET: 'a long text that is only ever used in tests 0123456789', LOG_LEVEL: 'warn' },
     stdio: ['ignore', 'pipe', 'pipe'],
   });
   running.add(child);

@@ -11,7 +11,7 @@ import * as vocabulary from '#shared/contracts/vocabulary.ts';
 import { hasRole, roles, type Role } from '#shared/domain/roles.ts';
 import { readdirSync } from 'node:fs';
 import { useApp } from '#tests/factories/app.ts';
-import { Client, problemOf } from '#tests/factories/client.ts';
+import { problemOf, type Client } from '#tests/factories/client.ts';
 import { Lives } from '#tests/factories/lives.ts';
 
 const app = useApp();
