@@ -4,5 +4,5 @@ import { useTitle } from '#client/lib/use-title.ts';
 /** No screen has this address. */
 export function NotFoundPage() {
   useTitle('Nothing here');
-  return <NotFoundState />;
+  return <NotFoundState page />;
 }

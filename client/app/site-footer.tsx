@@ -20,9 +20,7 @@ export function SiteFooter({ version }: { version: string | undefined }) {
             Values are reports from the literature, not design data. Values outside their valid range are marked extrapolated.
             Relief, runaway and reactor safety work follows local codes and is done by licensed or otherwise competent people.
           </p>
-          <p className="pt-1">
-            {version && `Sillstone ${version} · `}<a href="/api/v1/docs">HTTP interface</a>
-          </p>
+          {version && <p className="pt-1">{`Sillstone ${version}`}</p>}
         </div>
         <div className="theme-choice">
           <RadioGroup legend="Theme" hideLegend name="theme" look="segments" choices={choices} value={theme} onChange={(next) => choose({ theme: next })} />

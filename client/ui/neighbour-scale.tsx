@@ -1,8 +1,8 @@
-import { scaleLinear } from 'd3-scale';
 import type { EnergyUnit } from '#shared/contracts/accounts.ts';
 import { energyIn, fixed } from '#client/lib/numbers.ts';
 import { useWidth } from '#client/lib/use-width.ts';
 import { Link } from 'react-router-dom';
+import { linearScale } from './linear-scale.ts';
 
 export interface Neighbour {
   accession: string;
@@ -47,7 +47,7 @@ export function NeighbourScale({ neighbours, own, energyUnit, most = 10 }: Neigh
     ...(own ? [{ accession: '', computed: false, sameSurface: true, ...own, own: true }] : []),
   ];
   const values = rows.map((row) => energyIn(energyUnit, row.energyKJPerMol));
-  const x = scaleLinear().domain([Math.min(0, ...values), Math.max(1e-9, ...values)]).nice(5).range([margin, width - margin]);
+  const x = linearScale({ domain: [Math.min(0, ...values), Math.max(1e-9, ...values)], range: [margin, width - margin], nice: 5 });
   const axisY = rows.length * rowHeight + 10;
   const ticks = x.ticks(Math.max(2, Math.min(5, Math.floor(width / 90))));
   return (

@@ -9,15 +9,18 @@ interface StatePanelProps {
   /** What to do next. */
   actions?: ReactNode;
   line?: 'flat' | 'sill' | 'broken';
+  /** The panel is the whole page, so that its title is the page's. */
+  page?: boolean;
 }
 
 /** A page or part of it that has nothing to show, and says why and what to do. */
-export function StatePanel({ title, children, actions, line = 'flat' }: StatePanelProps) {
+export function StatePanel({ title, children, actions, line = 'flat', page = false }: StatePanelProps) {
+  const Title = page ? 'h1' : 'h2';
   return (
     <section className="state-panel">
       <SillLine shape={line} />
-      <h2>{title}</h2>
-      {children && <div className="max-w-[62ch] text-second">{children}</div>}
+      <Title>{title}</Title>
+      {children && <div className="w-full max-w-[62ch] text-second">{children}</div>}
       {actions && <div className="flex flex-wrap gap-3 pt-2">{actions}</div>}
     </section>
   );
@@ -77,9 +80,9 @@ export function ForbiddenState({ error }: { error: ApiError }) {
 }
 
 /** There is nothing at this address. */
-export function NotFoundState({ detail }: { detail?: string }) {
+export function NotFoundState({ detail, page }: { detail?: string; page?: boolean }) {
   return (
-    <StatePanel line="flat" title="There is nothing here" actions={<LinkButton to="/search">Go to the search</LinkButton>}>
+    <StatePanel line="flat" page={page} title="There is nothing here" actions={<LinkButton to="/search">Go to the search</LinkButton>}>
       <p>{detail ?? 'No page has this address. Check it for a slip, or look for what you need by the search.'}</p>
     </StatePanel>
   );

@@ -1,5 +1,4 @@
 import { createHash } from 'node:crypto';
-import { sql } from 'drizzle-orm';
 import type { Tx } from './pool.ts';
 import { events } from './schema/log.ts';
 
@@ -27,13 +26,6 @@ export async function appendEvents(tx: Tx, records: readonly EventRecord[]): Pro
       seq: 0, previousHash: Buffer.alloc(0), hash: Buffer.alloc(0),
     });
   }
-}
-
-/** The first broken row of the log, or null when the chain holds from the first row to the last. */
-export async function findBrokenEvent(tx: Tx): Promise<{ seq: number; fault: string } | null> {
-  const result = await tx.execute<{ seq: string; fault: string }>(sql`select seq, fault from broken_event()`);
-  const row = result.rows[0];
-  return row ? { seq: Number(row.seq), fault: row.fault } : null;
 }
 
 /** SHA-256 of a text, in hexadecimal, for payloads that must not hold the text itself. */

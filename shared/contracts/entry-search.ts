@@ -11,8 +11,8 @@ export const sortKeys = [
 export type SortKey = (typeof sortKeys)[number];
 
 /** A name that may be repeated in the address: one value or several, always read as a list. */
-const several = <T extends z.ZodType>(item: T) =>
-  z.preprocess((value) => (value === undefined || value === '' ? undefined : Array.isArray(value) ? value : [value]), z.array(item).max(50).optional());
+const several = <T extends z.ZodType>(item: T, most = 50) =>
+  z.preprocess((value) => (value === undefined || value === '' ? undefined : Array.isArray(value) ? value : [value]), z.array(item).max(most).optional());
 const word = z.string().trim().min(1).max(200);
 const year = z.coerce.number().int().min(1800).max(2200).optional();
 const real = z.preprocess((value) => (value === '' ? undefined : value), z.coerce.number().optional());
@@ -85,7 +85,7 @@ export const searchSummary = z.object({
   sources: z.int(), measured: z.int(), computed: z.int(),
   /** Over the energies with a value (bounds and ranges left out) [kJ/mol]; null when there is none. */
   energy: z.object({ count: z.int(), median: z.number(), low: z.number(), high: z.number() }).nullable(),
-  /** Whether the energies are all of one scope and energy type; when not, the median mixes unlike quantities and is not shown. */
+  /** Whether the energies are all of one elementary step and direction, one scope and one energy type; when not, a median would mix unlike quantities. */
   alike: z.boolean(),
   points: z.array(z.object({
     accession: z.string(), value: z.number(), bound: z.enum(['=', '≈', '<', '≤', '>', '≥', 'range']), computed: z.boolean(), label: z.string(),
@@ -97,6 +97,9 @@ export const summariseEntries = endpoint({
   method: 'GET', path: '/entries/summary', access: 'visitor', summary: 'Figures over everything a search finds', query: entryFilter, response: searchSummary,
 });
 
+/** How many chosen entries one address can name. */
+export const mostChosen = 500;
+
 export const exportFormats = ['zip', 'csv', 'bib'] as const;
 export const exportEntries = endpoint({
   method: 'GET', path: '/entries/export', access: 'visitor', summary: 'The filtered set as a file, streamed',
@@ -104,7 +107,7 @@ export const exportEntries = endpoint({
     format: z.enum(exportFormats).default('zip'),
     T: entrySearch.shape.T,
     /** Only these entries (the chosen rows), by accession. */
-    accession: several(z.string().max(20)),
+    accession: several(z.string().max(20), mostChosen),
   }),
 });
 

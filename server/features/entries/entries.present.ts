@@ -1,4 +1,5 @@
 import type { Actor } from '#server/actor.ts';
+import { presentSource } from '#server/features/sources/sources.service.ts';
 import { rateAtTemperature } from '#shared/assessment/rate-at-temperature.ts';
 import type { Assessment } from '#shared/assessment/assess-entry.ts';
 import type { Entry, EntryAction, EntryInput } from '#shared/contracts/entries.ts';
@@ -72,13 +73,6 @@ function links(accession: string, publicUrl: string) {
   return { self: `${publicUrl}/api/v1/entries/${accession}`, page: `${publicUrl}/entries/${accession}` };
 }
 
-function presentSourceRow(row: EntryRecord['source']): SourceSummary {
-  return {
-    id: row.id, doi: row.doi, key: row.citationKey, title: row.title, authors: row.authors, label: row.label, year: row.year, container: row.container,
-    status: row.status as SourceSummary['status'], notice: row.notice,
-  };
-}
-
 /** A frozen revision as the interface gives it. */
 export function presentRecord(record: EntryRecord, view: View): Entry {
   const { revision, step, surface, conversion } = record;
@@ -92,7 +86,7 @@ export function presentRecord(record: EntryRecord, view: View): Entry {
       id: surface.id, metal: surface.metal, formula: surface.formula, structure: surface.structure, facet: surface.facet, site: surface.site,
       sampleType: surface.sampleType, support: surface.support, label: surface.label,
     },
-    source: presentSourceRow(record.source),
+    source: presentSource(record.source),
     quantities,
     checks: record.checks as Entry['checks'],
     kAtT: view.temperatureK === null ? null : rateAtTemperature(quantities, {

@@ -4,16 +4,13 @@ import type { Context } from '#server/context.ts';
 import { appendEvents, textHash, type EventRecord } from '#server/db/event-log.ts';
 import { readCursor, writeCursor } from '#server/db/keyset.ts';
 import { isUniqueViolation } from '#server/db/pg-errors.ts';
-import type { Tx } from '#server/db/pool.ts';
 import type { SourcesService } from '#server/features/sources/sources.service.ts';
 import { notFound, Refusal, refusalFromZod } from '#server/refusal.ts';
-import { assessEntry, type Assessment } from '#shared/assessment/assess-entry.ts';
+import { assessEntry } from '#shared/assessment/assess-entry.ts';
 import { rateAtTemperature } from '#shared/assessment/rate-at-temperature.ts';
 import { entryInput, type EntryDetail, type EntryForEditing, type EntryInput, type Preview } from '#shared/contracts/entries.ts';
 import { accessionAlphabetSize, accessionFrom, readAccession } from '#shared/domain/accession.ts';
 import type { State } from '#shared/domain/states.ts';
-import { CONSTANTS_VERSION, CORE_VERSION } from '#shared/kinetics/constants.ts';
-import { STEP_PARSER_VERSION } from '#shared/steps/parse-step.ts';
 import { readHistory } from './history.repository.ts';
 import { mergePatch } from './merge-patch.ts';
 import { listRelated } from './neighbours.repository.ts';
@@ -22,6 +19,7 @@ import { actionsFor, presentAssessed, presentDraft, presentRecord, presentStep, 
 import * as repository from './entries.repository.ts';
 import type { EntryHead, RevisionRow } from './entries.repository.ts';
 import { unlistSearchRow } from './search-rows.repository.ts';
+import { freezeRevision } from './freeze.ts';
 import { checkAgainstStore } from './store-checks.ts';
 import { describeStanding } from './standing.ts';
 
@@ -94,34 +92,6 @@ export function createEntriesService(context: Context, sources: SourcesService) 
         if (!isUniqueViolation(error, 'entries_accession_key') || attempt >= 5) throw error;
       }
     }
-  }
-
-  /** Writes what a submission freezes: step, surface, quantities, conversion and checks. The revision is still a draft while this runs. */
-  async function freeze(tx: Tx, revision: RevisionRow, assessment: Assessment, checks: EntryForEditing['checks'], at: Date) {
-    const { step, surface } = assessment;
-    if (!step || !surface) throw new Error('Only what can be read is frozen.');
-    const stepId = await repository.ensureStep(tx, {
-      key: step.key, variantKey: step.variantKey, direction: step.direction, equation: step.equation, stepClass: step.class, bond: step.bond.broken ?? step.bond.formed,
-      gasOrder: step.gasOrder, surfaceOrder: step.surfaceOrder, parserVersion: STEP_PARSER_VERSION,
-    });
-    const surfaceId = await repository.ensureSurface(tx, { ...surface, createdAt: at });
-    const rows = await repository.insertQuantities(tx, assessment.quantities.map((quantity) => ({
-      revisionId: revision.id, position: quantity.position, symbol: quantity.symbol, energyType: quantity.energyType ?? null, asPrinted: quantity.asPrinted,
-      unitAsPrinted: quantity.unitAsPrinted ?? '', unitId: quantity.unitId, multiplier: quantity.multiplier ?? null, bound: quantity.bound, value: quantity.printed.value,
-      low: quantity.printed.low, high: quantity.printed.high, reportedUncertainty: quantity.reportedUncertainty, reportedMinus: quantity.reportedMinus ?? null,
-      reportedPlus: quantity.reportedPlus ?? null, uncertaintyKind: quantity.uncertaintyKind, uncertaintyScale: quantity.uncertaintyScale,
-      standardUncertainty: quantity.printed.standardUncertainty, significantDigits: quantity.significantDigits,
-    })));
-    const idAt = new Map(rows.map((row) => [row.position, row.id]));
-    await repository.insertConversion(
-      tx, { revisionId: revision.id, coreVersion: CORE_VERSION, constantsVersion: CONSTANTS_VERSION, createdAt: at },
-      assessment.quantities.map((quantity) => ({
-        quantityId: idAt.get(quantity.position) ?? '', value: quantity.value, low: quantity.low, high: quantity.high, standardUncertainty: quantity.standardUncertainty,
-        unit: quantity.unit, siteValue: quantity.siteValue ?? null, siteUnit: quantity.siteUnit ?? null, siteExponentChange: quantity.siteExponentChange ?? null, missing: quantity.missing ?? [], derivation: quantity.derivation,
-      })),
-      checks.map((check, position) => ({ ...check, position })),
-    );
-    return { stepId, surfaceId };
   }
 
   function stale(revision: RevisionRow): Refusal {
@@ -228,7 +198,7 @@ export function createEntriesService(context: Context, sources: SourcesService) 
       const at = clock();
       const { input } = revision;
       const submitted = await db.transaction(async (tx) => {
-        const { stepId, surfaceId } = await freeze(tx, revision, assessment, [...assessment.checks, ...findings.checks], at);
+        const { stepId, surfaceId } = await freezeRevision(tx, revision, assessment, [...assessment.checks, ...findings.checks], at);
         const round = (last?.submission.round ?? 0) + 1;
         const row = await repository.updateRevision(tx, revision, {
           state: 'submitted', authorName: actor.name, changedAt: at, kind: input.kind ?? null, scope: input.scope ?? null, provenance: input.provenance ?? null,

@@ -1,6 +1,7 @@
 import type { Actor } from '#server/actor.ts';
 import type { Context } from '#server/context.ts';
 import type { Tx } from '#server/db/pool.ts';
+import { presentSource } from '#server/features/sources/sources.service.ts';
 import { notFound, Refusal } from '#server/refusal.ts';
 import { assessEntry } from '#shared/assessment/assess-entry.ts';
 import type { Entry, EntryInput } from '#shared/contracts/entries.ts';
@@ -52,11 +53,7 @@ export function createEntryRecordsService({ db, publicUrl }: Context) {
       if (!record) throw notFound(`Entry ${accession}`);
       const all = await repository.listRevisions(db, record.revision.entryId);
       const assessment = assessEntry(record.revision.input);
-      const { source } = record;
-      const findings = await checkAgainstStore(db, record.revision.input, assessment, {
-        id: source.id, doi: source.doi, key: source.citationKey, title: source.title, authors: source.authors, label: source.label, year: source.year,
-        container: source.container, status: source.status as 'current' | 'corrected' | 'retracted', notice: source.notice,
-      }, record.revision.entryId);
+      const findings = await checkAgainstStore(db, record.revision.input, assessment, presentSource(record.source), record.revision.entryId);
       const entry = presentRecord(record, { temperatureK: null, actions: actionsFor(actor, record.contributorId, record.revision, all), publicUrl });
       const open = record.revision.state === 'submitted' || record.revision.state === 'under-review';
       return {

@@ -205,3 +205,4 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
   };
 }
 export type SourcesService = ReturnType<typeof createSourcesService>;
+export { presentSource } from './sources.present.ts';

@@ -30,7 +30,7 @@ export function ZeroResults({ filter, emptiedBy, withoutStatedRange, unit, vocab
       {helps.length > 0 ? (
         <>
           <p>Each of these filters empties the list together with the others:</p>
-          <ul className="w-[60ch] max-w-full pt-2 text-ink">
+          <ul className="pt-2 text-ink">
             {helps.map(({ filter: name, totalWithout }) => {
               const names = namesOf(name).filter((one) => inForce.includes(one));
               const words = names.map((one) => filterWords(one, filter, unit, vocabulary));
