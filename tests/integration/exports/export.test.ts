@@ -196,8 +196,9 @@ describe('an export under way', () => {
 
   it('gives its connection back when the reader goes away, at whatever moment', async () => {
     for (const format of ['zip', 'csv', 'bib'] as const) {
-      for (const when of ['at once', 'after the first bytes'] as const) {
+      for (const when of ['before it begins', 'at once', 'after the first bytes'] as const) {
         const out = new PassThrough({ highWaterMark: 16 });
+        if (when === 'before it begins') await new Promise((resolve) => out.destroy().once('close', resolve));
         const written = app.services.exports.write(anybody, { format }, out, () => { if (when === 'at once') out.destroy(); });
         if (when === 'after the first bytes') out.once('data', () => out.destroy());
         const outcome = await Promise.race([written.then(() => 'written', () => 'broken off'), pause(5000, 'hangs')]);
