@@ -82,7 +82,9 @@ export function compareWithFamily(value: number, others: readonly number[], opti
   const shown = options.logarithmic ? Math.exp(median) : median;
   if (score <= (options.threshold ?? 3.5)) return { outlier: false, score, median: shown, scaledDeviation: scaled, hint: null, checks: [] };
   const hint = findSlip(value, transform, median, scale, [...(options.extraFactors ?? []), ...slipFactors]);
-  const message = `${value} is ${score.toFixed(1)} scaled deviations from the median ${Number(shown.toPrecision(4))} of ${family.length} accepted values${hint ? `; ${hint.name} would explain it (factor ${Number(hint.factor.toPrecision(5))})` : ''}`;
+  const short = (x: number): number => Number(x.toPrecision(4));
+  const reading = hint ? `; ${hint.name} would explain it: the value would then be ${short(value * hint.factor)}` : '';
+  const message = `${short(value)} lies ${score.toFixed(1)} scaled deviations from the median ${short(shown)} of ${family.length} accepted values${reading}`;
   return { outlier: true, score, median: shown, scaledDeviation: scaled, hint, checks: [{ code: 'outlier', severity: 'warning', message }] };
 }
 

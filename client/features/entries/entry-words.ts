@@ -22,17 +22,28 @@ export function classWords(stepClass: string): string {
   return stepClass.replace(/-/g, ' ').replace('eley rideal', 'Eley–Rideal');
 }
 
-const titles: Readonly<Record<string, string>> = {
-  adsorption: 'Adsorption on',
-  'dissociative-adsorption': 'Dissociative adsorption on',
-  desorption: 'Desorption from',
-  'associative-desorption': 'Associative desorption from',
+const titles: Readonly<Record<string, { words: string; side: 0 | 1; place: 'on' | 'from' }>> = {
+  'adsorption': { words: 'Adsorption', side: 0, place: 'on' },
+  'dissociative-adsorption': { words: 'Dissociative adsorption', side: 0, place: 'on' },
+  'desorption': { words: 'Desorption', side: 1, place: 'from' },
+  'associative-desorption': { words: 'Associative desorption', side: 1, place: 'from' },
 };
 
-/** What an entry is about, in plain words: "Associative desorption from Ru(0001)". */
+const names: Readonly<Record<string, string>> = { N2: 'nitrogen', H2: 'hydrogen', NH3: 'ammonia', D2: 'deuterium', ND3: 'deuterated ammonia', O2: 'oxygen', CO: 'carbon monoxide' };
+
+/** The gas on one side of an equation by its name, or null when we have none for it. */
+function gasName(equation: string, side: 0 | 1): string | null {
+  const terms = equation.split('->')[side]?.split(' + ').map((term) => term.trim().replace(/^[\d.]+\s*/, '')) ?? [];
+  const gas = terms.find((term) => !term.includes('*'));
+  return gas ? names[gas] ?? null : null;
+}
+
+/** What an entry is about, in plain words: "Associative desorption of nitrogen from Ru(0001)". */
 export function entryTitle({ step, surface }: Pick<Entry, 'step' | 'surface'>): string {
   const where = surface?.label ?? 'a surface not given yet';
   if (!step) return `An elementary step not given yet on ${where}`;
-  const words = classWords(step.class);
-  return `${titles[step.class] ?? `${words.replace(/^./, (first) => first.toUpperCase())} on`} ${where}`;
+  const title = titles[step.class];
+  if (!title) return `${classWords(step.class).replace(/^./, (first) => first.toUpperCase())} on ${where}`;
+  const gas = gasName(step.equation, title.side);
+  return `${title.words}${gas ? ` of ${gas}` : ''} ${title.place} ${where}`;
 }

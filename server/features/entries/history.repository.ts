@@ -37,7 +37,8 @@ export async function readHistory(db: DbOrTx, entryId: string, seesAll: boolean)
     .orderBy(asc(events.seq));
   return rows.map(({ at, action, name, version, comment, number }) => {
     const text = words[action]?.text ?? action;
-    const what = action === 'submission.accept' && version !== null ? `Version ${version} accepted` : version === null && number > 1 ? `${text} (revision ${number})` : text;
+    const what = action === 'submission.accept' && version !== null ? `Version ${version} accepted`
+      : action === 'revision.superseded' && version !== null ? `Version ${version} replaced by the next` : version === null && number > 1 ? `${text} (revision ${number})` : text;
     return { at: at.toISOString(), by: name ?? 'the system', what: comment ? `${what}: ${comment}` : what, version };
   });
 }

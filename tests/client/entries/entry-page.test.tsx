@@ -45,7 +45,7 @@ afterEach(() => {
 describe('entry page', () => {
   it('sets what is printed beside what it became, and says how', async () => {
     open('/entries/222-222-2', detail());
-    expect(await screen.findByRole('heading', { level: 1, name: 'Associative desorption from Ru(0001)' })).toBeTruthy();
+    expect(await screen.findByRole('heading', { level: 1, name: 'Associative desorption of nitrogen from Ru(0001)' })).toBeTruthy();
     expect(screen.getByText('186 ± 3 kJ/mol')).toBeTruthy();
     expect(screen.getByText(/elementary; ± is one standard uncertainty, as reported/)).toBeTruthy();
     expect(screen.getByText('entry 222-222-2, version 1')).toBeTruthy();

@@ -37,7 +37,7 @@ describe('words of filters', () => {
 
 describe('words of entries', () => {
   it.each([
-    ['associative-desorption', 'Associative desorption from Ru(0001)'],
+    ['associative-desorption', 'Associative desorption of nitrogen from Ru(0001)'],
     ['dissociative-adsorption', 'Dissociative adsorption on Ru(0001)'],
     ['eley-rideal', 'Eley–Rideal on Ru(0001)'],
     ['dehydrogenation', 'Dehydrogenation on Ru(0001)'],

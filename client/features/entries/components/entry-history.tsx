@@ -6,7 +6,7 @@ import { formatDate } from '#client/lib/dates.ts';
 /** What happened to the entry, newest first, and its public versions. */
 export function EntryHistory({ entry }: { entry: EntryDetail }) {
   const { history, versions, accession, version } = entry;
-  const lines = [...history].sort((a, b) => b.at.localeCompare(a.at));
+  const lines = [...history].reverse();
   return (
     <section>
       <h2 className="pb-2">History</h2>

@@ -109,7 +109,7 @@ export function DecisionForm({ view }: { view: ReviewView }) {
             <Button look="refusal" onClick={() => ask('reject')}>Reject</Button>
           </div>
           <p id={whyId} className="text-fine text-second">
-            {why ?? 'All eight points are answered and none with no.'} The decision is recorded; it can be reopened, never erased.
+            {why ?? 'All eight points are answered and none with no.'} The decision is recorded and never erased.
           </p>
         </div>
       )}

@@ -40,7 +40,7 @@ export function Discussion({ view }: { view: ReviewView }) {
       {mayComment && (
         <form className="flex flex-col gap-2 pt-4" noValidate onSubmit={say}>
           <TextareaField
-            label="Ask or answer" rows={2} maxLength={4000} value={body} error={error} hint="The contributor sees it at once; it decides nothing."
+            label="Ask or answer" rows={2} maxLength={4000} value={body} error={error} hint="Kept with the submission for whoever reviews it; it decides nothing."
             onChange={(event) => {
               setBody(event.target.value);
               setError(undefined);
