@@ -42,6 +42,8 @@ export function createApp(context: Context, services: Services, settings: HttpSe
   const app = express();
   app.disable('x-powered-by');
   app.set('query parser', 'simple');
+  // The TLS proxy in front runs on this machine or in its private network; only such a peer is believed about the client's address and protocol.
+  app.set('trust proxy', ['loopback', 'uniquelocal']);
   app.use(requestId);
   app.use(helmet({
     contentSecurityPolicy: {

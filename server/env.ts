@@ -9,7 +9,6 @@ const schema = z.object({
   HOST: z.string().default('127.0.0.1'),
   DATABASE_URL: z.url({ error: 'DATABASE_URL is not set: give the URL of the application role' }),
   DATABASE_OWNER_URL: optionalUrl,
-  DATABASE_READ_URL: optionalUrl,
   SILLSTONE_DEMO: flag.default(false),
   SILLSTONE_DEMO_FORCE: flag.default(false),
   SILLSTONE_CLIENT_DIR: z.string().default('dist/client'),
@@ -25,7 +24,6 @@ export interface Environment {
   host: string;
   databaseUrl: string;
   databaseOwnerUrl: string | undefined;
-  databaseReadUrl: string | undefined;
   demonstration: boolean;
   clientDir: string;
   sessionSecret: string;
@@ -60,7 +58,6 @@ export function readEnvironment(source: NodeJS.ProcessEnv = process.env): Enviro
     host: env.HOST,
     databaseUrl: env.DATABASE_URL,
     databaseOwnerUrl: env.DATABASE_OWNER_URL,
-    databaseReadUrl: env.DATABASE_READ_URL,
     demonstration: env.SILLSTONE_DEMO,
     clientDir: env.SILLSTONE_CLIENT_DIR,
     sessionSecret: env.SESSION_SECRET,

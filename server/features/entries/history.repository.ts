@@ -16,7 +16,6 @@ const words: Readonly<Record<string, { text: string; open: boolean }>> = {
   'submission.accept': { text: 'Accepted', open: true },
   'submission.return': { text: 'Returned to the contributor', open: false },
   'submission.reject': { text: 'Rejected', open: false },
-  'revision.superseded': { text: 'Replaced by the next version', open: true },
   'revision.retracted': { text: 'Retracted', open: true },
 };
 
@@ -37,8 +36,7 @@ export async function readHistory(db: DbOrTx, entryId: string, seesAll: boolean)
     .orderBy(asc(events.seq));
   return rows.map(({ at, action, name, version, comment, number }) => {
     const text = words[action]?.text ?? action;
-    const what = action === 'submission.accept' && version !== null ? `Version ${version} accepted`
-      : action === 'revision.superseded' && version !== null ? `Version ${version} replaced by the next` : version === null && number > 1 ? `${text} (revision ${number})` : text;
+    const what = action === 'submission.accept' && version !== null ? `Version ${version} accepted` : version === null && number > 1 ? `${text} (revision ${number})` : text;
     return { at: at.toISOString(), by: name ?? 'the system', what: comment ? `${what}: ${comment}` : what, version };
   });
 }
