@@ -66,3 +66,13 @@ export function readEnvironment(source: NodeJS.ProcessEnv = process.env): Enviro
     logLevel: env.LOG_LEVEL,
   };
 }
+
+/** The environment for a program's own start: what is wrong with it is printed, without a trace of calls, and the program ends. */
+export function environmentOrExit(): Environment {
+  try {
+    return readEnvironment();
+  } catch (error) {
+    process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+    process.exit(1);
+  }
+}

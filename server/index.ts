@@ -3,7 +3,7 @@ import packageJson from '../package.json' with { type: 'json' };
 import { createApp, usualLimits } from './app.ts';
 import type { Context } from './context.ts';
 import { openPools } from './db/pool.ts';
-import { readEnvironment } from './env.ts';
+import { environmentOrExit } from './env.ts';
 import { startJobs } from './jobs/run-jobs.ts';
 import { createServices } from './services.ts';
 import { demonstrationDoiService } from './services/doi/demonstration-doi.ts';
@@ -12,7 +12,7 @@ import { createDoiClient } from './services/doi/resolver-client.ts';
 const publicResolver = 'https://doi.org';
 const stopLimitMs = 5000;
 
-const env = readEnvironment();
+const env = environmentOrExit();
 const log = pino({ level: env.logLevel });
 const pools = openPools(env.databaseUrl, (error) => log.warn({ err: error }, 'a database connection was lost'));
 const demonstrationDoi = env.demonstration && !env.doiResolverUrl

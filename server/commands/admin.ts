@@ -2,7 +2,7 @@ import { randomBytes } from 'node:crypto';
 import pino from 'pino';
 import * as z from 'zod';
 import { openPools } from '#server/db/pool.ts';
-import { readEnvironment } from '#server/env.ts';
+import { environmentOrExit } from '#server/env.ts';
 import { Refusal } from '#server/refusal.ts';
 import { createServices } from '#server/services.ts';
 import { refusalFromDatabase } from '#server/db/pg-errors.ts';
@@ -20,7 +20,7 @@ async function run([command, email, name, role]: string[]): Promise<number> {
     process.stderr.write(`${usage}\n`);
     return 1;
   }
-  const env = readEnvironment();
+  const env = environmentOrExit();
   const pools = openPools(env.databaseUrl, () => undefined);
   try {
     const { accounts } = createServices({

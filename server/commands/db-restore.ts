@@ -1,11 +1,11 @@
-import { readEnvironment } from '#server/env.ts';
+import { environmentOrExit } from '#server/env.ts';
 import { loadBackup } from './db-load-backup.ts';
 import { BackupError } from './db-manifest.ts';
 
 /** Loads a backup into the database of DATABASE_OWNER_URL. Arguments: folder of PostgreSQL's programs, the file, `--force` or nothing. */
 const [programs = '', file = '', ...flags] = process.argv.slice(2);
 try {
-  const { databaseUrl, databaseOwnerUrl } = readEnvironment();
+  const { databaseUrl, databaseOwnerUrl } = environmentOrExit();
   const appRole = decodeURIComponent(new URL(databaseUrl).username);
   const { madeAt, tables } = await loadBackup({ ownerUrl: databaseOwnerUrl ?? '', appRole, programs, file, force: flags.includes('--force') });
   const rows = Object.values(tables).reduce((sum, table) => sum + table.rows, 0);

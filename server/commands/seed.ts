@@ -3,13 +3,13 @@ import { readDoiRecords } from '#seeds/demo/doi-records.ts';
 import { demonstrationFolder, demonstrationState, loadDemonstration, loadVocabulary, resetBrokenDemonstration } from '#seeds/run.ts';
 import type { Context } from '#server/context.ts';
 import { openPools } from '#server/db/pool.ts';
-import { readEnvironment } from '#server/env.ts';
+import { environmentOrExit } from '#server/env.ts';
 import { createServices } from '#server/services.ts';
 import { demonstrationDoiService } from '#server/services/doi/demonstration-doi.ts';
 import packageJson from '../../package.json' with { type: 'json' };
 
 /** Loads the vocabulary, and in demonstration mode the invented data, once. */
-const env = readEnvironment();
+const env = environmentOrExit();
 const say = (line: string) => process.stdout.write(`${line}\n`);
 const state = env.demonstration && env.databaseOwnerUrl ? await demonstrationState(env.databaseOwnerUrl) : 'loaded';
 if (state === 'broken' && env.databaseOwnerUrl) {
