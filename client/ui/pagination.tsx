@@ -16,7 +16,7 @@ export function LoadMore({ shown, total, totalIsExact = true, hasMore, busy, onM
     <div className="flex flex-wrap items-center gap-4 py-5">
       {hasMore && <Button busy={busy} onClick={onMore}>{`Show more ${what}`}</Button>}
       <p className="text-second" role="status">
-        {hasMore ? `${shown} of ${totalIsExact ? '' : 'about '}${total} ${what} shown` : `All ${shown} ${what} shown`}
+        {hasMore ? `${shown} of ${totalIsExact ? '' : 'about '}${total} ${what} shown` : shown === 1 ? '1 of 1 shown' : `All ${shown} ${what} shown`}
       </p>
     </div>
   );
