@@ -143,7 +143,7 @@ export function createEntriesService(context: Context, sources: SourcesService) 
       const parsed = entryInput.safeParse(mergePatch(revision.input, patch));
       if (!parsed.success) throw refusalFromZod(parsed.error);
       const input = parsed.data;
-      const { source, fault } = await sources.resolve(input.source);
+      const { source, fault } = await sources.resolve(input.source, false);
       const at = clock();
       const changed = await db.transaction(async (tx) => {
         const row = await repository.updateRevision(tx, revision, { input, inputHash: inputHash(input), sourceId: source?.id ?? null, authorName: actor.name, changedAt: at });

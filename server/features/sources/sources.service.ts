@@ -4,6 +4,7 @@ import { appendEvents } from '#server/db/event-log.ts';
 import { isUniqueViolation } from '#server/db/pg-errors.ts';
 import { readCursor, writeCursor } from '#server/db/keyset.ts';
 import { notFound, Refusal } from '#server/refusal.ts';
+import type { DoiAnswer } from '#server/services/doi/doi-service.ts';
 import { formatCitation, readBibtex, readRis, writeBibtex, writeRis } from '#server/services/citation/citation.ts';
 import { citationKey, disambiguate } from '#shared/citations/citation-key.ts';
 import { authorsText, containerText, shortLabel, titleText, yearOf } from '#shared/citations/citation-text.ts';
@@ -28,6 +29,9 @@ const isSourceId = (text: string): boolean => /^[0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[
 
 /** A source that failed to be confirmed is tried again after this long [min]. */
 const retryMinutes = 2;
+/** While a draft saves itself, a DOI that was just looked up in vain is not asked for again for this long [ms]. */
+const patienceMs = 30_000;
+const mostRemembered = 1000;
 
 export function createSourcesService({ db, doi: doiService, clock }: Context) {
   /** Everything the record shows, rendered once from the citation. */
@@ -36,6 +40,21 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
       csl: csl as Record<string, unknown>, title: titleText(csl), authors: authorsText(csl), label: shortLabel(csl), year: yearOf(csl), container: containerText(csl),
       citation: await formatCitation(csl), bibtex: await writeBibtex(csl, key), ris: await writeRis(csl),
     };
+  }
+
+  /** Look-ups that led to nothing a moment ago, so that saving a draft does not wait for a slow service each time. */
+  const inVain = new Map<string, { at: number; answer: DoiAnswer }>();
+
+  async function ask(doi: string, again: boolean): Promise<DoiAnswer> {
+    const last = inVain.get(doi);
+    if (!again && last && clock().getTime() - last.at < patienceMs) return last.answer;
+    const answer = await doiService.lookup(doi);
+    inVain.delete(doi);
+    if (answer.kind !== 'found') {
+      if (inVain.size >= mostRemembered) inVain.clear();
+      inVain.set(doi, { at: clock().getTime(), answer });
+    }
+    return answer;
   }
 
   function standing(notice: SourceStanding): { status: SourceStanding['status']; notice: string | null } {
@@ -68,30 +87,30 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
   }
 
   /** A source by its DOI: the one held, else what the DOI service answers, stored when `keep`. */
-  async function byDoi(text: string): Promise<{ row: repository.SourceRow | null; fault: ResolvedSource['fault'] }> {
+  async function byDoi(text: string, again: boolean): Promise<{ row: repository.SourceRow | null; fault: ResolvedSource['fault'] }> {
     const doi = normaliseDoi(text);
     if (!doi) return { row: null, fault: { path: 'source.doi', code: 'doi-unreadable', message: `“${text}” is not a DOI. A DOI begins with 10. and a slash follows, such as 10.1000/182.` } };
     const held = await repository.findSourceByDoi(db, doi);
     if (held) return { row: held, fault: null };
-    const answer = await doiService.lookup(doi);
+    const answer = await ask(doi, again);
     if (answer.kind === 'found') return { row: await store({ ...answer.csl, DOI: doi }, 'doi', answer.notice), fault: null };
     if (answer.kind === 'not-found') return { row: null, fault: { path: 'source.doi', code: 'doi-not-found', message: `The DOI ${doi} is not registered. Check it against the paper, or type the citation.` } };
     return { row: null, fault: { path: 'source.doi', code: 'doi-service-unavailable', message: `The DOI service does not answer (${answer.reason}). Go on with a typed or pasted citation; the DOI is looked up again later.` } };
   }
 
   /** A citation read from a paste, with its DOI confirmed when the service answers. */
-  async function byCitation(csl: Csl, origin: Origin): Promise<repository.SourceRow> {
+  async function byCitation(csl: Csl, origin: Origin, again: boolean): Promise<repository.SourceRow> {
     const doi = csl.DOI ? normaliseDoi(csl.DOI) : null;
     if (doi) {
       const held = await repository.findSourceByDoi(db, doi);
       if (held) return held;
-      const answer = await doiService.lookup(doi);
+      const answer = await ask(doi, again);
       if (answer.kind === 'found') return store({ ...answer.csl, DOI: doi }, origin, answer.notice);
     }
     return store(csl, origin, null);
   }
 
-  async function resolve(input: SourceInput | undefined): Promise<{ row: repository.SourceRow | null; fault: ResolvedSource['fault'] }> {
+  async function resolve(input: SourceInput | undefined, again: boolean): Promise<{ row: repository.SourceRow | null; fault: ResolvedSource['fault'] }> {
     if (!input) return { row: null, fault: null };
     if (input.id) {
       const row = isSourceId(input.id) ? await repository.findSource(db, input.id) : await repository.findSourceByKey(db, input.id);
@@ -106,7 +125,7 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
         const problem = problems[0];
         return { row: null, fault: { path, code: 'citation-unreadable', message: problem ? `Line ${problem.line}: ${problem.message}` : 'No citation was found in the text.' } };
       }
-      return { row: await byCitation(first, input.bibtex ? 'bibtex' : 'ris'), fault: null };
+      return { row: await byCitation(first, input.bibtex ? 'bibtex' : 'ris', again), fault: null };
     }
     if (input.csl && Object.keys(input.csl).length > 0) {
       const reading = readCsl({ type: 'article-journal', ...input.csl, ...(input.doi ? { DOI: input.doi } : {}) });
@@ -114,9 +133,9 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
       if (!reading.csl.title?.trim()) return { row: null, fault: { path: 'source.csl.title', code: 'citation-incomplete', message: 'Type the title of the source.' } };
       if (!reading.csl.author?.length) return { row: null, fault: { path: 'source.csl.author', code: 'citation-incomplete', message: 'Type at least one author.' } };
       if (yearOf(reading.csl) === null) return { row: null, fault: { path: 'source.csl.issued', code: 'citation-incomplete', message: 'Type the year of publication.' } };
-      return { row: await byCitation(reading.csl, 'typed'), fault: null };
+      return { row: await byCitation(reading.csl, 'typed', again), fault: null };
     }
-    if (input.doi?.trim()) return byDoi(input.doi);
+    if (input.doi?.trim()) return byDoi(input.doi, again);
     return { row: null, fault: null };
   }
 
@@ -125,9 +144,12 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
   }
 
   return {
-    /** Finds or stores the source a contributor named. Never inside a transaction: it may ask the DOI service. */
-    async resolve(input: SourceInput | undefined): Promise<ResolvedSource> {
-      const { row, fault } = await resolve(input);
+    /**
+     * Finds or stores the source a contributor named. Never inside a transaction: it may ask the DOI service.
+     * @param again whether to ask anew about a DOI that was just looked up in vain
+     */
+    async resolve(input: SourceInput | undefined, again = true): Promise<ResolvedSource> {
+      const { row, fault } = await resolve(input, again);
       return { source: row ? presentSource(row) : null, fault };
     },
 

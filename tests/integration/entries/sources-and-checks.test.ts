@@ -51,6 +51,20 @@ describe('a DOI service that is down or talks nonsense', () => {
     expect(await app.sql("select input -> 'source' -> 'csl' ->> 'title' as title from revisions r join entries e on e.id = r.entry_id where accession = $1", [refused.accession])).toEqual([{ title: csl.title }]);
   });
 
+  it('while a draft saves itself, a look-up in vain is not repeated for half a minute; handing in asks anew', async () => {
+    app.doiIsUp = false;
+    const { accession } = await create(entryInputOf({ source: { doi: '10.5555/test.5' } })) as { accession: string };
+    app.doiIsUp = true;
+    const soon = okBody(await person.client.patch(`/entries/${accession}`, { note: 'a' }, { 'If-Match': '"1.1"' }));
+    expect((soon.faults as { code: string }[]).map(({ code }) => code)).toEqual(['doi-service-unavailable']);
+    app.clock.advance(0.01);
+    expect(okBody(await person.client.patch(`/entries/${accession}`, { note: 'b' }, { 'If-Match': '"1.2"' }))).toMatchObject({ faults: [], source: { doi: '10.5555/test.5' } });
+    app.doiIsUp = false;
+    const other = await create({ ...entryInputOf({ source: { doi: '10.5555/corrected' } }) });
+    app.doiIsUp = true;
+    expect(okBody(await person.client.post(`/entries/${other.accession as string}/submit`)).source).toMatchObject({ doi: '10.5555/corrected', status: 'corrected' });
+  });
+
   it('what is held already needs no service', async () => {
     await create(entryInputOf({ source: { doi: '10.5555/test.2' } }));
     app.doiIsUp = false;
