@@ -20,6 +20,18 @@ const markOf: Readonly<Record<string, RichTextMark>> = {
  * @example richText('CH<sub>4</sub>')[1].marks[0] === 'sub'
  */
 export function richText(text: string): RichTextRun[] {
+  let runs = scan(text);
+  // Taking a tag away can join what stood around it into another one; each round takes at least one away, so it ends.
+  for (let written = richTextSource(runs); ; ) {
+    const again = scan(written);
+    const rewritten = richTextSource(again);
+    runs = again;
+    if (rewritten === written) return runs;
+    written = rewritten;
+  }
+}
+
+function scan(text: string): RichTextRun[] {
   const runs: RichTextRun[] = [];
   const open: RichTextMark[] = [];
   const source = text.replace(droppedTag, '');

@@ -59,7 +59,7 @@ await energy.getByLabel('As printed', { exact: true }).fill('44.5 ± 1.4');
 await energy.getByLabel('Unit as printed', { exact: true }).fill('kcal/mol');
 await contributor.getByText('186.2').first().waitFor();
 await contributor.getByText(/^Saved/).first().waitFor();
-await contributor.evaluate(() => window.scrollTo(0, 0));
+await contributor.evaluate('scrollTo(0, 0)');
 await contributor.screenshot({ path: place('contribute-light') });
 await contributor.getByText(/^Saved/).first().waitFor();
 const { token } = await (await contributor.request.get(`${base}/api/v1/auth/csrf`)).json();
