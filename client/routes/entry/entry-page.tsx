@@ -22,7 +22,7 @@ import { EntryDerivations, EntryQuantities } from '#client/features/entries/comp
 import { RatePlot } from '#client/features/entries/components/rate-plot.tsx';
 import { RelatedEntries } from '#client/features/entries/components/related-entries.tsx';
 import { SourceCard } from '#client/features/entries/components/source-card.tsx';
-import { SurfaceLabel } from '#client/features/entries/components/surface-label.tsx';
+import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 
 /** One entry: what is printed, what it became and how, under which conditions, from where. */
 export function Component() {

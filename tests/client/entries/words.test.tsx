@@ -6,7 +6,7 @@ import { entryTitle, methodTags, methodText } from '#client/features/entries/ent
 import { filterWords, joinWords, valueRangeWords } from '#client/features/entries/filter-words.ts';
 import { uncertaintyText } from '#client/features/entries/quantity-words.ts';
 import { printHidden, readHidden, sortOf, tableSort } from '#client/features/entries/columns.ts';
-import { SurfaceLabel } from '#client/features/entries/components/surface-label.tsx';
+import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { energy, sampleEntry } from './entry-samples.ts';
 
 describe('words of filters', () => {

@@ -9,6 +9,7 @@ import { Equation } from '#client/ui/equation.tsx';
 import { LoadMore } from '#client/ui/pagination.tsx';
 import { EmptyState, ErrorState, LoadingState } from '#client/ui/states.tsx';
 import { Tag, type TagKind } from '#client/ui/tag.tsx';
+import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { useMyEntries } from '../use-my-entries.ts';
 import { ReviseDialog } from './revise-dialog.tsx';
 import { WithdrawDialog } from './withdraw-dialog.tsx';
@@ -68,7 +69,7 @@ function MyEntryRow({ entry, onAsk }: { entry: MyEntry; onAsk: (what: 'withdraw'
       <div className="min-w-0">
         <p className="text-lead">{title}</p>
         <p>
-          {entry.surface ?? <span className="text-second">no surface yet</span>}
+          {entry.surface ? <SurfaceLabel label={entry.surface} /> : <span className="text-second">no surface yet</span>}
           {entry.kind && <span className="text-second">{`, ${kindWord[entry.kind]}`}</span>}
         </p>
         <p><samp>{[entry.asPrinted, entry.unitAsPrinted].filter(Boolean).join(' ')}</samp></p>

@@ -8,6 +8,7 @@ import { Equation } from '#client/ui/equation.tsx';
 import { Facts } from '#client/ui/facts.tsx';
 import { Notice } from '#client/ui/notice.tsx';
 import { printedText, QuantityValue } from '#client/ui/quantity-value.tsx';
+import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import type { EntryForm } from '../entry-form.ts';
 
 interface SubmitDialogProps {
@@ -40,7 +41,7 @@ export function SubmitDialog({ open, form, preview, sourceLabel, busy, error, on
       <Facts
         facts={[
           { name: 'Elementary step', value: preview?.step ? <Equation equation={preview.step.equation} /> : form.step.equation },
-          { name: 'Surface', value: preview?.surface?.label ?? null },
+          { name: 'Surface', value: preview?.surface ? <SurfaceLabel label={preview.surface.label} /> : null },
           { name: 'Kind', value: form.kind ? kindWord[form.kind] : null },
           {
             name: 'As printed',

@@ -9,7 +9,7 @@ import { columnSort, columnWords, type ColumnName } from '../columns.ts';
 import type { Grouping } from '../search-state.ts';
 import { barrierOf } from '../row-figures.ts';
 import type { EntryRow, RowView } from '../table-rows.ts';
-import { SurfaceLabel } from './surface-label.tsx';
+import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { BarrierCell, MethodCell, PrintedText, RangeCell, RateCell, SourceCell, UncertaintyCell, ValueCell } from './row-cells.tsx';
 
 interface Heading {

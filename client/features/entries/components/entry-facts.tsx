@@ -8,7 +8,7 @@ import { Facts } from '#client/ui/facts.tsx';
 import { classWords } from '../entry-words.ts';
 import { siteWords } from '../filter-words.ts';
 import { rangeText } from '../row-figures.ts';
-import { SurfaceLabel } from './surface-label.tsx';
+import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 
 /** Conditions and surface, under their names; what a kind of method does not need is left out, what it does need and lacks is said. */
 export function EntryFacts({ entry }: { entry: Entry }) {

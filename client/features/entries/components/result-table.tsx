@@ -13,7 +13,7 @@ import { groupSorts, type Grouping } from '../search-state.ts';
 import { entryRows, groupKey, rowView, type EntryRow, type RowView } from '../table-rows.ts';
 import { entryColumns } from './entry-columns.tsx';
 import { BarrierCell, MethodCell, PrintedText, RateCell, SourceCell, UncertaintyCell, ValueCell } from './row-cells.tsx';
-import { SurfaceLabel } from './surface-label.tsx';
+import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { valueHeading } from './value-heading.tsx';
 
 interface ResultTableProps {

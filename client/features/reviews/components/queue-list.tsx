@@ -8,6 +8,7 @@ import { Equation } from '#client/ui/equation.tsx';
 import { LoadMore } from '#client/ui/pagination.tsx';
 import { EmptyState, ErrorState, LoadingState } from '#client/ui/states.tsx';
 import { Tag } from '#client/ui/tag.tsx';
+import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { queueOptions, type QueueState } from '../api.ts';
 
 const nothing: Readonly<Record<QueueState, { title: string; text: string }>> = {
@@ -43,7 +44,7 @@ function QueueRow({ item }: { item: QueueItem }) {
     <li className="grid gap-x-8 gap-y-1 border-b border-hairline py-3 mid:grid-cols-[minmax(0,1.5fr)_minmax(0,1.2fr)_minmax(0,1.1fr)_5.5rem]">
       <div className="min-w-0">
         <p className="text-lead"><Equation display equation={item.equation} /></p>
-        <p>{item.surface} <samp className="ml-3">{[item.asPrinted, item.unitAsPrinted].filter(Boolean).join(' ')}</samp></p>
+        <p><SurfaceLabel label={item.surface} /> <samp className="ml-3">{[item.asPrinted, item.unitAsPrinted].filter(Boolean).join(' ')}</samp></p>
       </div>
       <div className="min-w-0">
         <p>{item.sourceLabel}</p>

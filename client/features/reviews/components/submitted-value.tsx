@@ -8,6 +8,7 @@ import { Notice } from '#client/ui/notice.tsx';
 import { printedText, QuantityValue, quantityWords } from '#client/ui/quantity-value.tsx';
 import { Tag } from '#client/ui/tag.tsx';
 import { Value } from '#client/ui/value.tsx';
+import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { conditionFacts } from '../condition-facts.ts';
 
 /** What was handed in: as printed, converted, and everything else a reviewer holds against the paper. */
@@ -44,7 +45,7 @@ export function SubmittedValue({ entry }: { entry: Entry }) {
         <Facts
           facts={[
             { name: 'Elementary step', value: entry.step && <Equation equation={entry.step.equation} /> },
-            { name: 'Surface', value: surface && [surface.label, surface.sampleType && (sampleTypeWords[surface.sampleType as SampleType] ?? surface.sampleType)].filter(Boolean).join(', ') },
+            { name: 'Surface', value: surface && <><SurfaceLabel label={surface.label} />{surface.sampleType && `, ${sampleTypeWords[surface.sampleType as SampleType] ?? surface.sampleType}`}</> },
             { name: 'Kind', value: [entry.kind && kindWord[entry.kind], entry.scope].filter(Boolean).join(', ') || null },
             { name: 'Came by', value: entry.provenance && provenanceWords[entry.provenance] },
             { name: 'Method', value: [method.class, method.technique, method.detail].filter(Boolean).join(', ') || null },
