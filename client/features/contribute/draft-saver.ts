@@ -148,6 +148,11 @@ export class DraftSaver {
     this.set({ state: { kind: 'nothing' }, draft: held?.draft ?? null, etag: held?.etag ?? null });
   }
 
+  /** Saves nothing more by itself: the page is gone, and what was typed is kept on this device. */
+  rest(): void {
+    this.stopTimer();
+  }
+
   private stopTimer(): void {
     if (this.timer !== null) clearTimeout(this.timer);
     this.timer = null;

@@ -38,6 +38,17 @@ export function useDraft(start: HeldDraft | null, userId: string): Opened & { vi
 export function useKeeping(saver: DraftSaver, view: SaverView, form: EntryForm, input: EntryInput, userId: string): void {
   const { accession, state, etag } = view;
   useEffect(() => {
+    const onHide = () => {
+      if (document.visibilityState === 'hidden') void saver.save();
+    };
+    document.addEventListener('visibilitychange', onHide);
+    return () => {
+      document.removeEventListener('visibilitychange', onHide);
+      saver.rest();
+    };
+  }, [saver]);
+
+  useEffect(() => {
     saver.change(input);
   }, [saver, input]);
 
@@ -47,12 +58,4 @@ export function useKeeping(saver: DraftSaver, view: SaverView, form: EntryForm, 
     else forgetMirror(userId, accession);
     if (accession !== null) forgetMirror(userId, null);
   }, [saver, form, accession, etag, userId, state]);
-
-  useEffect(() => {
-    const onHide = () => {
-      if (document.visibilityState === 'hidden') void saver.save();
-    };
-    document.addEventListener('visibilitychange', onHide);
-    return () => document.removeEventListener('visibilitychange', onHide);
-  }, [saver]);
 }
