@@ -1,4 +1,4 @@
-import { printEquation, printTerm } from './print-step.ts';
+import { printEquation, printSpecies, printTerm } from './print-step.ts';
 import type { Term } from './species.ts';
 import { StepError, type Imbalance } from './step-error.ts';
 
@@ -34,10 +34,19 @@ function withSites(terms: readonly Term[], count: number): Term[] {
   return [...terms, { coefficient: count, species: { formula: '*', spelling: '*', composition: {}, phase: 'free-site', sites: 1 } }];
 }
 
+/** The most species one elementary step is written with. */
+export const mostTerms = 24;
+
+/** Whether both sides are the same and nothing of it is adsorbed: free sites and gases that only stand there. */
+export function nothingHappens(reactants: readonly Term[], products: readonly Term[]): boolean {
+  const list = (terms: readonly Term[]): string => terms.map(({ coefficient, species }) => `${coefficient} ${printSpecies(species)}`).sort().join('|');
+  return list(reactants) === list(products) && reactants.every(({ species }) => species.phase !== 'adsorbed');
+}
+
 /**
  * Refuses an equation that is not balanced for elements, isotopes, sites and charge.
  *
- * Where only free sites are missing, the error holds the equation with them.
+ * Where only free sites are missing, and with them it would be a step, the error holds the equation with them.
  * @throws StepError `unbalanced`
  */
 export function requireBalance(reactants: readonly Term[], products: readonly Term[]): void {
@@ -59,8 +68,8 @@ export function requireBalance(reactants: readonly Term[], products: readonly Te
   if (imbalance.length === 1 && only.what === 'site') {
     const fixedLeft = only.by > 0 ? withSites(reactants, only.by) : reactants;
     const fixedRight = only.by < 0 ? withSites(products, -only.by) : products;
-    suggestion = printEquation(fixedLeft, fixedRight);
-    addition = `; add ${printTerm({ coefficient: Math.abs(only.by), species: withSites([], 1)[0]?.species as Term['species'] })} on the ${only.by > 0 ? 'left' : 'right'}`;
+    if (!nothingHappens(fixedLeft, fixedRight) && fixedLeft.length + fixedRight.length <= mostTerms) suggestion = printEquation(fixedLeft, fixedRight);
+    if (suggestion) addition = `; add ${printTerm({ coefficient: Math.abs(only.by), species: withSites([], 1)[0]?.species as Term['species'] })} on the ${only.by > 0 ? 'left' : 'right'}`;
   }
   throw new StepError('unbalanced', `not balanced: ${sentences.join('; ')}${addition}`, { imbalance, ...(suggestion ? { suggestion } : {}) });
 }

@@ -1,6 +1,6 @@
-import { requireBalance } from './balance.ts';
+import { mostTerms, nothingHappens, requireBalance } from './balance.ts';
 import { classify, type Classification, type StepClass } from './classify.ts';
-import { printEquation, printSpecies } from './print-step.ts';
+import { printEquation } from './print-step.ts';
 import { readTerm } from './read-species.ts';
 import type { Species, Term } from './species.ts';
 import { StepError } from './step-error.ts';
@@ -51,11 +51,6 @@ function orderOf(terms: readonly Term[], gas: boolean): number {
   return Number(sum.toPrecision(12));
 }
 
-function sameTerms(a: readonly Term[], b: readonly Term[]): boolean {
-  const list = (terms: readonly Term[]): string => terms.flatMap(({ coefficient, species }) => [`${coefficient} ${printSpecies(species)}`]).sort().join('|');
-  return list(a) === list(b);
-}
-
 /**
  * Reads the equation of an elementary step in any of its notations.
  *
@@ -67,12 +62,11 @@ function sameTerms(a: readonly Term[], b: readonly Term[]): boolean {
  */
 export function readStep(text: string): ElementaryStep {
   const { left, right } = splitEquation(text);
-  if (left.length + right.length > 24) throw new StepError('unreadable', 'more than 24 species: write one elementary step at a time', { position: 0 });
+  if (left.length + right.length > mostTerms) throw new StepError('unreadable', `more than ${mostTerms} species: write one elementary step at a time`, { position: 0 });
   const reactants = gatherFreeSites(left.map(readTerm));
   const products = gatherFreeSites(right.map(readTerm));
   requireBalance(reactants, products);
-  const changes = !sameTerms(reactants, products) || reactants.some(({ species }) => species.phase === 'adsorbed');
-  if (!changes) throw new StepError('no-change', 'both sides are the same: nothing happens in this step', { position: 0 });
+  if (nothingHappens(reactants, products)) throw new StepError('no-change', 'both sides are the same: nothing happens in this step', { position: 0 });
   const { class: stepClass, bond, assistance } = classify(reactants, products);
   return {
     ...stepKeys(reactants, products),

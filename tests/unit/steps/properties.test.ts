@@ -81,6 +81,15 @@ describe('elementary steps', () => {
     );
   });
 
+  it.each(['** <-> *', 'CO -> CO + *'])('suggests no step in which nothing happens: %s', (text) => {
+    expect(() => readStep(text)).toThrow(StepError);
+    try {
+      readStep(text);
+    } catch (error) {
+      expect((error as StepError).suggestion).toBeUndefined();
+    }
+  });
+
   it('does not hang on hostile text', () => {
     const start = performance.now();
     for (const text of ['('.repeat(400), '*'.repeat(400), '+'.repeat(400), '='.repeat(400), '<-'.repeat(200), '_{'.repeat(200), `${'C'.repeat(380)}->C`, `${'1'.repeat(380)}->C`, 'H9999*'.repeat(60), `${'(C)9'.repeat(90)} -> C`]) {
