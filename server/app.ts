@@ -73,7 +73,7 @@ export function createApp(context: Context, services: Services, settings: HttpSe
   api.use(searchRoutes(services.search));
   api.use(entriesRoutes(services.entries));
   api.use(reviewsRoutes(services.reviews));
-  api.use(calculatorsRoutes(limit(pool, 'calculator', settings.limits.calculators)));
+  api.use(calculatorsRoutes(services.sources, limit(pool, 'calculator', settings.limits.calculators)));
   api.use((_req, _res, next) => next(new Refusal('not-found', 'There is no such address in this interface.')));
   app.use('/api/v1', api);
   app.use('/api', (_req, _res, next) => next(new Refusal('not-found', 'There is no such address. The interface is under /api/v1.')));

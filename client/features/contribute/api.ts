@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { keepPreviousData, queryOptions } from '@tanstack/react-query';
-import { citeCalculator } from '#shared/contracts/calculators.ts';
+import { cite } from '#shared/contracts/citations.ts';
 import { endpoint } from '#shared/contracts/endpoint.ts';
 import {
   createEntry, getDraft, listMyEntries, patchEntry, previewEntry, reviseEntry, submitEntry, withdrawEntry, type EntryInput,
@@ -59,7 +59,7 @@ export const citationOptions = (pasted: { bibtex: string } | { ris: string }) =>
   queryKey: ['citation', pasted],
   queryFn: async ({ signal }) => {
     // The endpoint answers one item or many; one was asked for.
-    return printedCitation.parse(await call(citeCalculator.endpoint, { body: pasted, signal }));
+    return printedCitation.parse(await call(cite, { body: pasted, signal }));
   },
   staleTime: Infinity,
   retry: false,

@@ -139,6 +139,18 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
     return { row: null, fault: null };
   }
 
+  /** The source held under a DOI, or what the DOI service answers. @throws Refusal when it is no DOI, leads nowhere, or the service does not answer. */
+  async function answerFor(text: string): Promise<{ doi: string } & ({ held: repository.SourceRow; found: null } | { held: null; found: { csl: Csl; notice: SourceStanding } })> {
+    const doi = normaliseDoi(text);
+    if (!doi) throw new Refusal('invalid-input', `“${text}” is not a DOI. A DOI begins with 10. and a slash follows, such as 10.1000/182.`, { errors: [{ path: 'doi', message: 'Not a DOI.' }] });
+    const held = await repository.findSourceByDoi(db, doi);
+    if (held) return { doi, held, found: null };
+    const answer = await doiService.lookup(doi);
+    if (answer.kind === 'not-found') throw new Refusal('doi-not-found', `The DOI ${doi} is not registered. Check it against the paper, or type the citation.`);
+    if (answer.kind === 'unavailable') throw new Refusal('doi-service-unavailable', `The DOI service does not answer (${answer.reason}). Go on with a typed or pasted citation; the DOI is looked up again later.`);
+    return { doi, held: null, found: { csl: { ...answer.csl, DOI: doi }, notice: answer.notice } };
+  }
+
   async function detail(row: repository.SourceRow): Promise<SourceDetail> {
     return presentSourceDetail(row, await repository.countAccepted(db, row.id));
   }
@@ -185,22 +197,23 @@ export function createSourcesService({ db, doi: doiService, clock }: Context) {
 
     /** What a DOI stands for: the source held, or what the DOI service answers. Stores nothing. */
     async lookUp(text: string) {
-      const doi = normaliseDoi(text);
-      if (!doi) throw new Refusal('invalid-input', `“${text}” is not a DOI. A DOI begins with 10. and a slash follows, such as 10.1000/182.`, { errors: [{ path: 'doi', message: 'Not a DOI.' }] });
-      const held = await repository.findSourceByDoi(db, doi);
+      const { doi, held, found } = await answerFor(text);
       if (held) {
         return {
           doi, source: await detail(held), title: held.title, authors: held.authors, year: held.year, container: held.container, citation: held.citation,
           status: presentSource(held).status, notice: held.notice,
         };
       }
-      const answer = await doiService.lookup(doi);
-      if (answer.kind === 'not-found') throw new Refusal('doi-not-found', `The DOI ${doi} is not registered. Check it against the paper, or type the citation.`);
-      if (answer.kind === 'unavailable') throw new Refusal('doi-service-unavailable', `The DOI service does not answer (${answer.reason}). Go on with a typed or pasted citation; the DOI is looked up again later.`);
-      const csl = { ...answer.csl, DOI: doi };
+      const { csl, notice } = found;
       return {
-        doi, source: null, title: titleText(csl), authors: authorsText(csl), year: yearOf(csl), container: containerText(csl), citation: await formatCitation(csl), ...standing(answer.notice),
+        doi, source: null, title: titleText(csl), authors: authorsText(csl), year: yearOf(csl), container: containerText(csl), citation: await formatCitation(csl), ...standing(notice),
       };
+    },
+
+    /** The citation behind a DOI: of the source held, or what the DOI service answers. Stores nothing. */
+    async citationOf(text: string): Promise<Csl> {
+      const { held, found } = await answerFor(text);
+      return held ? held.csl as unknown as Csl : found.csl;
     },
 
     /** Asks again about sources whose DOI has not been confirmed; one round of the job. */

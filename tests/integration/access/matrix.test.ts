@@ -1,6 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import * as accounts from '#shared/contracts/accounts.ts';
-import * as calculators from '#shared/contracts/calculators.ts';
+import { calculatorEndpoints } from '#shared/contracts/calculators.ts';
+import * as citations from '#shared/contracts/citations.ts';
 import type { Endpoint } from '#shared/contracts/endpoint.ts';
 import * as entries from '#shared/contracts/entries.ts';
 import * as search from '#shared/contracts/entry-search.ts';
@@ -17,7 +18,8 @@ import { Lives } from '#tests/factories/lives.ts';
 const app = useApp();
 
 const isEndpoint = (value: unknown): value is Endpoint => typeof value === 'object' && value !== null && 'method' in value && 'path' in value && 'access' in value;
-const contracts = { accounts, calculators, entries, 'entry-search': search, reviews, service, sources, vocabulary };
+const calculators = Object.fromEntries(calculatorEndpoints.map(({ calculator, endpoint }) => [calculator.name, endpoint]));
+const contracts = { accounts, calculators, citations, entries, 'entry-search': search, reviews, service, sources, vocabulary };
 const endpoints: Endpoint[] = Object.values(contracts).flatMap((module) => Object.values(module as Record<string, unknown>)).flatMap((value) => {
   if (isEndpoint(value)) return [value];
   const inner = typeof value === 'object' && value !== null && 'endpoint' in value ? value.endpoint : null;
@@ -68,7 +70,7 @@ const expected = (endpoint: Endpoint, role: Role): string => {
 describe('every endpoint as every role', () => {
   it('is read from every contract there is', () => {
     const files = readdirSync('shared/contracts').map((name) => name.replace(/\.ts$/, ''));
-    const withoutEndpoints = ['endpoint', 'problem', 'quantities'];
+    const withoutEndpoints = ['calculator-endpoint', 'endpoint', 'problem', 'quantities'];
     expect(files.filter((name) => !withoutEndpoints.includes(name)).sort()).toEqual(Object.keys(contracts).sort());
     expect(endpoints.length).toBeGreaterThan(25);
     expect(new Set(endpoints.map(nameOf)).size).toBe(endpoints.length);
