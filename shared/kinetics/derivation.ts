@@ -54,3 +54,18 @@ export function operationLine(
 ): DerivationLine {
   return { operation, from: quantityText(from.value, from.unit), to: quantityText(to.value, to.unit), ...extra, reference };
 }
+
+/**
+ * Lets every line of a value with a bound keep it, and every line of a range show both of its ends.
+ *
+ * @param lines the lines of the value, of the limit, or of the lower end
+ * @param upper the lines of the upper end of a range
+ * @example boundLines('≥', [operationLine('Unit kept', { value: 1, unit: 'eV' }, { value: 1, unit: 'eV' }, '')])[0].to // '≥ 1 eV'
+ */
+export function boundLines(bound: string, lines: readonly DerivationLine[], upper: readonly DerivationLine[] = []): DerivationLine[] {
+  const figure = (text: string, other: string | undefined): string => {
+    if (other !== undefined) return `${text.split(' ', 1)[0]} to ${other}`;
+    return bound === '=' ? text : `${bound} ${text}`;
+  };
+  return lines.map((line, i) => ({ ...line, from: figure(line.from, upper[i]?.from), to: figure(line.to, upper[i]?.to) }));
+}

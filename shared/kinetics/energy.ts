@@ -1,4 +1,4 @@
-import { N_A, R } from './constants.ts';
+import { c, h, N_A, R } from './constants.ts';
 import { operationLine, references, type DerivationLine } from './derivation.ts';
 import { KineticsError, requireFinite, requireNonNegative } from './kinetics-error.ts';
 import { wavenumberEnergy } from './unit-tokens.ts';
@@ -17,12 +17,12 @@ export interface EnergyUnit {
 }
 
 const perMole: Record<string, Omit<EnergyUnit, 'symbol'>> = {
-  'J/mol': { numerator: 1, denominator: 1, operation: 'SI unit', constant: '1 J = 1 J', reference: references.siBrochure },
+  'J/mol': { numerator: 1, denominator: 1, operation: 'SI unit', constant: '1 kJ = 1000 J', reference: references.siBrochure },
   'kJ/mol': { numerator: 1000, denominator: 1, operation: 'SI unit, × 1000 exactly', constant: '1 kJ = 1000 J', reference: references.siBrochure },
   'cal/mol': { numerator: 4184, denominator: 1000, operation: 'Thermochemical calorie, × 4.184 exactly', constant: '1 cal = 4.184 J', reference: references.sp811 },
   'kcal/mol': { numerator: 4184, denominator: 1, operation: 'Thermochemical calorie, × 4.184 exactly', constant: '1 kcal = 4.184 kJ', reference: references.sp811 },
   K: { numerator: R, denominator: 1, operation: 'Temperature equivalent E/R, × R', constant: `R = ${R} J mol-1 K-1`, reference: references.codata },
-  'cm-1': { numerator: N_A * wavenumberEnergy, denominator: 1, operation: 'Wavenumber E/hc, × N_A h c', constant: 'N_A h c, exact', reference: references.codata },
+  'cm-1': { numerator: N_A * wavenumberEnergy, denominator: 1, operation: 'Wavenumber E/hc, × N_A h c', constant: `N_A = 6.02214076e23 mol-1, h = ${h} J s, c = ${c} m s-1`, reference: references.codata },
 };
 
 const particleWords: Record<string, [operation: string, constant: string]> = {

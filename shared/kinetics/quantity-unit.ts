@@ -5,7 +5,7 @@ import { KineticsError } from './kinetics-error.ts';
 import { toPlainText } from './printed-text.ts';
 import type { QuantitySymbol } from './quantity-symbols.ts';
 import { requireUnit } from './rate-constant.ts';
-import { dimensionText, findUnit, siUnit, type Unit } from './units.ts';
+import { dimensionText, findUnit, siUnit, unitConstants, type Unit } from './units.ts';
 
 /** How one printed unit becomes the canonical one: a number, and the words for it. */
 export interface CanonicalUnit {
@@ -40,7 +40,8 @@ function coverageSlope(text: string): CanonicalUnit {
   const factors = unit.factors.filter(({ token }) => token.symbol !== 'ML');
   const bare = factors.map(({ token, exponent }) => `${token.symbol}^${exponent}`).join(' ');
   if (unit.dimension.coverage !== -1 || !findEnergyUnit(bare)) throw wrong(unit, 'an energy per coverage such as kJ/mol');
-  return energy(bare);
+  const found = energy(bare);
+  return { ...found, operation: `${found.operation}, per coverage of 1`, constant: [found.constant, '1 ML is a coverage of 1'].filter((part) => part !== undefined).join(', ') };
 }
 
 function entropy(text: string): CanonicalUnit {
@@ -54,7 +55,7 @@ function entropy(text: string): CanonicalUnit {
     numerator: unit.numerator * (perParticle ? N_A : 1),
     denominator: unit.denominator,
     operation: `SI unit of ${unit.symbol}`,
-    constant: perParticle ? `N_A = ${quantityText(N_A)} mol-1` : undefined,
+    constant: [unitConstants(unit), perParticle ? `N_A = ${quantityText(N_A)} mol-1` : undefined].filter((part) => part !== undefined).join(', ') || undefined,
     reference: references.sp811,
   };
 }
@@ -62,14 +63,14 @@ function entropy(text: string): CanonicalUnit {
 function number(text: string): CanonicalUnit {
   const unit = requireUnit(text, path);
   if (Object.values(unit.dimension).some((exponent) => exponent !== 0)) throw wrong(unit, 'a pure number');
-  return { unit: '1', numerator: unit.numerator, denominator: unit.denominator, operation: unit.toSi === 1 ? 'Pure number kept' : `Factor of ${unit.symbol}`, reference: references.siBrochure };
+  return { unit: '1', numerator: unit.numerator, denominator: unit.denominator, operation: unit.toSi === 1 ? 'Pure number kept' : `Factor of ${unit.symbol}`, constant: unitConstants(unit), reference: references.siBrochure };
 }
 
 function si(text: string, accept: (unit: Unit) => boolean, expected: string): CanonicalUnit {
   const unit = requireUnit(text, path);
   if (!accept(unit)) throw wrong(unit, expected);
   const canonical = siUnit(unit.dimension).symbol;
-  return { unit: canonical, numerator: unit.numerator, denominator: unit.denominator, operation: canonical === unit.symbol ? 'SI unit kept' : `SI unit of ${unit.symbol}`, reference: references.sp811 };
+  return { unit: canonical, numerator: unit.numerator, denominator: unit.denominator, operation: canonical === unit.symbol ? 'SI unit kept' : `SI unit of ${unit.symbol}`, constant: unitConstants(unit), reference: references.sp811 };
 }
 
 const only = (unit: Unit, allowed: readonly string[]): boolean => Object.entries(unit.dimension).every(([name, exponent]) => exponent === 0 || allowed.includes(name));

@@ -1,11 +1,11 @@
-import { operationLine, printedLine, quantityText, references, type DerivationLine } from './derivation.ts';
+import { boundLines, operationLine, printedLine, quantityText, references, type DerivationLine } from './derivation.ts';
 import { findEnergyUnit } from './energy.ts';
 import { KineticsError, requireFinite, requirePositive } from './kinetics-error.ts';
 import { readPrintedValue, resolveUncertainty, type Bound, type PrintedValue } from './printed-value.ts';
 import { quantitySymbols, type QuantityContext, type QuantitySymbol } from './quantity-symbols.ts';
 import { canonicalUnit, splitUnitPower } from './quantity-unit.ts';
 import { basisScale, unitOfBasis } from './rate-basis.ts';
-import { requireUnit } from './rate-constant.ts';
+import { requireUnit, siConstants } from './rate-constant.ts';
 import { isHomogeneous, judgeRateUnit, ordersOf, type ReportedOrders } from './rate-law.ts';
 import { toSiteBasis } from './site-basis.ts';
 import { missingForStandard, type UncertaintyKind } from './uncertainty.ts';
@@ -67,11 +67,19 @@ export interface ConvertedQuantity {
   unitId: string;
 }
 
+interface SiteConversion {
+  value: number | null;
+  unit?: string;
+  exponentChange: number;
+  missing: string[];
+  lines: DerivationLine[];
+}
+
 interface Conversion {
   unit: string;
   scale: (value: number) => number;
   lines: (value: number) => DerivationLine[];
-  site?: (value: number) => { value: number | null; unit?: string; exponentChange: number; missing: string[]; lines: DerivationLine[] };
+  site?: (value: number) => SiteConversion;
 }
 
 const pureNumbers: ReadonlySet<QuantitySymbol> = new Set(['exponent', 'kie', 'stickingCoefficient', 'reactionOrder', 'equilibriumConstant']);
@@ -98,12 +106,22 @@ export function convertQuantity(input: QuantityInput, context: QuantityContext):
   if (unitName === null) throw new KineticsError('unitAsPrinted', `a unit is needed for ${input.symbol}`, 'missing-input', input.unitAsPrinted);
 
   const derivation: DerivationLine[] = [printedLine(input.asPrinted, unitName === '1' ? null : (input.unitAsPrinted?.trim() || null), readingText(printed, unitName))];
-  const central = printed.value ?? (printed.low as number);
   const scaled = (number: number): number => timesDecimal(timesDecimal(number, multiplier), unitPower);
-  if (multiplier !== 1) derivation.push(multiplierLine(central, multiplier, unitName, 'Multiplier of the column heading'));
-  if (unitPower !== 1) derivation.push(multiplierLine(timesDecimal(central, multiplier), unitPower, unitName, 'Power of ten printed with the unit'));
   const conversion = conversionFor(input.symbol, unitName, context);
-  derivation.push(...conversion.lines(scaled(central)));
+  const way = (number: number): { lines: DerivationLine[]; site: SiteConversion | undefined } => {
+    const site = conversion.site?.(conversion.scale(scaled(number)));
+    return {
+      site,
+      lines: [
+        ...(multiplier === 1 ? [] : [multiplierLine(number, multiplier, unitName, 'Multiplier of the column heading')]),
+        ...(unitPower === 1 ? [] : [multiplierLine(timesDecimal(number, multiplier), unitPower, unitName, 'Power of ten printed with the unit')]),
+        ...conversion.lines(scaled(number)),
+        ...(site?.lines ?? []),
+      ],
+    };
+  };
+  const { lines, site } = way(printed.value ?? (printed.low as number));
+  derivation.push(...boundLines(printed.bound, lines, printed.bound === 'range' ? way(printed.high as number).lines : undefined));
 
   const inPrinted = (value: number | null): number | null => (value === null ? null : requireFinite('asPrinted', scaled(value)));
   const convert = (value: number | null): number | null => (value === null ? null : requireFinite('asPrinted', conversion.scale(value)));
@@ -111,11 +129,7 @@ export function convertQuantity(input: QuantityInput, context: QuantityContext):
   const linear = printed.uncertaintyScale === 'linear';
   const u = linear ? inPrinted(printed.standardUncertainty) : printed.standardUncertainty;
   const missing: string[] = [];
-  const site = conversion.site?.(conversion.scale(value ?? scaled(central)));
-  if (site) {
-    missing.push(...site.missing);
-    derivation.push(...site.lines);
-  }
+  if (site) missing.push(...site.missing);
   const reported = printed.reportedUncertainty !== null || printed.reportedMinus !== null;
   if (reported && input.uncertaintyKind != null) {
     const need = missingForStandard({ kind: input.uncertaintyKind, coverageFactor: input.coverageFactor, level: input.level, degreesOfFreedom: input.degreesOfFreedom });
@@ -177,7 +191,7 @@ function conversionFor(symbol: QuantitySymbol, unitName: string, context: Quanti
     unit: canonical.unit,
     scale,
     lines: (value) =>
-      canonical.numerator === canonical.denominator ? [] : [operationLine(canonical.operation, { value, unit: from }, { value: scale(value), unit: canonical.unit }, canonical.reference, canonical.constant ? { constant: canonical.constant } : {})],
+      canonical.numerator === canonical.denominator && canonical.unit === from ? [] : [operationLine(canonical.operation, { value, unit: from }, { value: scale(value), unit: canonical.unit }, canonical.reference, canonical.constant ? { constant: canonical.constant } : {})],
   };
 }
 
@@ -202,7 +216,7 @@ function rateConversion(symbol: QuantitySymbol, unitName: string, context: Quant
     if (target !== unit.symbol || numerator !== denominator) {
       result.push(
         operationLine(`SI unit of ${unit.symbol}`, { value, unit: unit.symbol }, { value: si(value), unit: target }, references.sp811, {
-          ...(unit.molecular !== 0 || basis.omittedMolecule !== 0 ? { constant: 'N_A = 6.02214076e23 mol-1' } : {}),
+          constant: siConstants(unit, basis.omittedMolecule),
           ...(basis.omittedMolecule !== 0 ? { assumption: `molecule${basis.omittedMolecule === 1 ? '' : basis.omittedMolecule} is understood in ${unit.symbol}` } : {}),
         }),
       );

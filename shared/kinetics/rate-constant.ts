@@ -2,7 +2,7 @@ import { N_A, R } from './constants.ts';
 import { operationLine, quantityText, references, type DerivationLine } from './derivation.ts';
 import { KineticsError, requireFinite, requireNonNegative, requirePositive, requireTemperature } from './kinetics-error.ts';
 import { basisScale, isAmbiguousArea, omissionCandidates, rateBasisOf, unitOfBasis, type RateBasis } from './rate-basis.ts';
-import { dimensionText, findUnit, type Unit } from './units.ts';
+import { dimensionText, findUnit, unitConstants, type Unit } from './units.ts';
 
 /** Reads a unit or throws an error that names it. */
 export function requireUnit(text: string, path: string): Unit {
@@ -41,6 +41,13 @@ export interface ConvertedRateConstant {
   standardUncertainty: number | null;
   assumptions: string[];
   derivation: DerivationLine[];
+}
+
+/** The constants between a rate unit and SI, with the molecule it leaves out; undefined when there are none. */
+export function siConstants(unit: Unit, omittedMolecule: number): string | undefined {
+  const sizes = unitConstants(unit);
+  const count = omittedMolecule === 0 ? undefined : `N_A = ${quantityText(N_A)} mol-1`;
+  return [sizes, count].filter((part) => part !== undefined).join(', ') || undefined;
 }
 
 function order(basis: RateBasis): number {
@@ -108,7 +115,7 @@ function walk(input: RateConstantInput, value: number, u: number | null, from: U
   }
   let current = { value: (value * source.numerator) / source.denominator, unit: unitOfBasis(bases.from).symbol };
   derivation.push(
-    operationLine(`SI unit of ${from.symbol}`, { value, unit: from.symbol }, current, references.sp811, from.molecular !== 0 || bases.from.omittedMolecule !== 0 ? { constant: `N_A = ${quantityText(N_A)} mol-1` } : {}),
+    operationLine(`SI unit of ${from.symbol}`, { value, unit: from.symbol }, current, references.sp811, { constant: siConstants(from, bases.from.omittedMolecule) }),
   );
   const toConcentration = Number((bases.to.gasConcentration - bases.from.gasConcentration).toPrecision(12));
   if (toConcentration !== 0) {
@@ -157,7 +164,7 @@ function walk(input: RateConstantInput, value: number, u: number | null, from: U
     current = next;
   }
   const direct = from.symbol === to.symbol ? value : scaled(value, numerator, denominator);
-  if (current.unit !== to.symbol) derivation.push(operationLine(`Unit ${to.symbol}`, current, { value: direct, unit: to.symbol }, references.sp811));
+  if (current.unit !== to.symbol) derivation.push(operationLine(`Unit ${to.symbol}`, current, { value: direct, unit: to.symbol }, references.sp811, { constant: siConstants(to, bases.to.omittedMolecule) }));
   return { value: direct, unit: to.symbol, standardUncertainty: u === null ? null : from.symbol === to.symbol ? u : scaled(u, numerator, denominator), assumptions, derivation };
 }
 

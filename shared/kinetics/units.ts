@@ -1,3 +1,5 @@
+import { N_A } from './constants.ts';
+import { quantityText } from './derivation.ts';
 import { readUnitFactors, type UnitFactor } from './unit-text.ts';
 import { dimensionNames, findToken, type Dimension, type DimensionName, type UnitToken } from './unit-tokens.ts';
 
@@ -116,6 +118,24 @@ export function scaleBetween(value: number, from: Unit, to: Unit): number {
 export function dimensionText(dimension: Dimension): string {
   const parts = dimensionNames.filter((name) => dimension[name] !== 0).map((name) => `${name}${printExponent(dimension[name])}`);
   return parts.length === 0 ? 'dimensionless' : parts.join(' ');
+}
+
+function factorConstant({ token }: UnitFactor): string[] {
+  if (token.particle || token.site) return [`N_A = ${quantityText(N_A)} mol-1`];
+  if (token.numerator === token.denominator) return [];
+  // A decimal fraction is written as a number, another one as the fraction it is.
+  const decimal = /^10*$/.test(String(token.denominator));
+  const size = decimal ? quantityText(token.numerator / token.denominator) : `${token.numerator}/${token.denominator}`;
+  return [`1 ${token.symbol} = ${size} ${siUnit(token.dimension).symbol}`.replace(/ 1$/, '')];
+}
+
+/**
+ * The sizes that lie between a unit and SI, as a derivation names them; undefined when there are none.
+ *
+ * @example unitConstants(findUnit('Torr-1 min-1')) // '1 Torr = 101325/760 Pa, 1 min = 60 s'
+ */
+export function unitConstants(unit: Unit): string | undefined {
+  return [...new Set(unit.factors.flatMap(factorConstant))].join(', ') || undefined;
 }
 
 /** Kinds of unit that a picker offers. */
