@@ -164,7 +164,10 @@ function walk(input: RateConstantInput, value: number, u: number | null, from: U
     current = next;
   }
   const direct = from.symbol === to.symbol ? value : scaled(value, numerator, denominator);
-  if (current.unit !== to.symbol) derivation.push(operationLine(`Unit ${to.symbol}`, current, { value: direct, unit: to.symbol }, references.sp811, { constant: siConstants(to, bases.to.omittedMolecule) }));
+  const last = derivation.at(-1) as DerivationLine;
+  // One product of all factors rounds less than one at a time: where the last line ends in the unit asked for, it states that.
+  if (current.unit === to.symbol) last.to = quantityText(direct, to.symbol);
+  else derivation.push(operationLine(`Unit ${to.symbol}`, current, { value: direct, unit: to.symbol }, references.sp811, { constant: siConstants(to, bases.to.omittedMolecule) }));
   return { value: direct, unit: to.symbol, standardUncertainty: u === null ? null : from.symbol === to.symbol ? u : scaled(u, numerator, denominator), assumptions, derivation };
 }
 

@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { expect } from 'vitest';
+import type { RateConstantInput } from '#shared/kinetics/rate-constant.ts';
 
 /** A case of a reference file. */
 export interface ReferenceCase {
@@ -20,4 +21,14 @@ export function referenceCases(name: string): ReferenceCase[] {
 export function expectClose(actual: number | null | undefined, expected: number, relative: number, label = ''): void {
   const distance = Math.abs((actual ?? NaN) - expected);
   expect(distance, `${label} ${String(actual)} against ${expected}`).toBeLessThanOrEqual(relative * Math.max(Math.abs(expected), Number.MIN_VALUE));
+}
+
+/** The input of a case of `rate_units`; the file adds words behind the unit of a rate per site. */
+export function rateUnitInput({ input }: ReferenceCase): RateConstantInput {
+  const unit = (text: string | undefined): string => (text ?? '').replace(/ \(per site.*\)/, '');
+  const density = input['site_density_cm-2'];
+  return {
+    value: Number(input.value), from: unit(input.from), to: unit(input.to), temperatureK: input.T_K === undefined ? undefined : Number(input.T_K),
+    siteDensityPerM2: density === undefined ? undefined : Number(density) * 1e4,
+  };
 }
