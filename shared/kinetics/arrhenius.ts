@@ -1,5 +1,5 @@
 import { R } from './constants.ts';
-import { operationLine, references, type DerivationLine } from './derivation.ts';
+import { operationLine, quantityText, references, type DerivationLine } from './derivation.ts';
 import { KineticsError, requireFinite, requireNonNegative, requirePositive, requireTemperature } from './kinetics-error.ts';
 
 /** Parameters of k = A (T/T0)^n exp(-E/RT). */
@@ -52,28 +52,99 @@ export function uLnRateAt(uLnA: number, uEnergyOverR: number, correlation: numbe
   return Math.sqrt(Math.max(0, uLnA * uLnA + b * b - 2 * correlation * uLnA * b));
 }
 
-interface ULnK {
-  uLnK: number | null;
-  uLnKRange?: [number, number];
-}
-
-function propagate(uLnA: number | null, uEnergy: number | null, correlation: number | null, T: number): ULnK {
-  if (uLnA === null || uEnergy === null) return { uLnK: null };
-  const b = (uEnergy * 1000) / (R * T);
-  if (uLnA === 0 || b === 0) return { uLnK: uLnA + b };
-  if (correlation === null) return { uLnK: null, uLnKRange: [Math.abs(uLnA - b), uLnA + b] };
-  return { uLnK: uLnRateAt(uLnA, (uEnergy * 1000) / R, correlation, T) };
-}
-
-/** Input of `rateAt`. */
-export interface RateAtInput extends ArrheniusParameters {
-  temperatureK: number;
+/** What k(T) and its uncertainty are computed from. */
+export interface UncertainArrhenius extends ArrheniusParameters {
   /** Standard uncertainty of ln A. */
   uLnPreExponential?: number | null;
   /** Standard uncertainty of E [kJ mol-1]. */
   uEnergyKJPerMol?: number | null;
   /** Correlation of ln A and E; a missing one is never taken as 0. */
   correlation?: number | null;
+}
+
+/** Checked parameters of k(T), evaluated at many temperatures without allocating: by `rateEvaluator`. */
+export class RateEvaluator {
+  readonly lnA: number;
+  readonly exponent: number;
+  readonly lnT0: number;
+  /** E/R [K]. */
+  readonly energyOverR: number;
+  readonly uLnA: number | null;
+  /** u(E)/R [K]. */
+  readonly uEnergyOverR: number | null;
+  readonly correlation: number | null;
+
+  constructor(input: UncertainArrhenius) {
+    this.lnA = Math.log(requirePositive('preExponential', input.preExponential, 'A'));
+    this.exponent = requireFinite('exponent', input.exponent ?? 0);
+    this.lnT0 = Math.log(requireTemperature('referenceTemperatureK', input.referenceTemperatureK ?? 1, 'T0'));
+    this.energyOverR = (requireFinite('energyKJPerMol', input.energyKJPerMol) * 1000) / R;
+    this.uLnA = input.uLnPreExponential ?? null;
+    const uE = input.uEnergyKJPerMol ?? null;
+    this.correlation = input.correlation ?? null;
+    if (this.uLnA !== null) requireNonNegative('uLnPreExponential', this.uLnA, 'u(ln A)');
+    if (uE !== null) requireNonNegative('uEnergyKJPerMol', uE, 'u(E)', 'kJ/mol');
+    if (this.correlation !== null && !(this.correlation >= -1 && this.correlation <= 1)) {
+      throw new KineticsError('correlation', `correlation must be between -1 and 1, got ${this.correlation}`, 'out-of-range', this.correlation);
+    }
+    this.uEnergyOverR = uE === null ? null : (uE * 1000) / R;
+  }
+
+  /** ln k at a temperature [K] above 0, which the caller has checked. */
+  lnK(temperatureK: number): number {
+    return lnRateAt(this.lnA, this.exponent, this.lnT0, this.energyOverR, temperatureK);
+  }
+
+  /** k at a temperature [K] above 0; 0 or Infinity outside double range. */
+  k(temperatureK: number): number {
+    return Math.exp(this.lnK(temperatureK));
+  }
+
+  /** u(ln k) at a temperature [K] above 0; null where an uncertainty, or the correlation of two, is not known. */
+  uLnK(temperatureK: number): number | null {
+    const { uLnA, uEnergyOverR } = this;
+    if (uLnA === null || uEnergyOverR === null) return null;
+    if (uLnA === 0 || uEnergyOverR === 0) return uLnA + uEnergyOverR / temperatureK;
+    return this.correlation === null ? null : uLnRateAt(uLnA, uEnergyOverR, this.correlation, temperatureK);
+  }
+
+  /** Least and greatest u(ln k) over all correlations, where the correlation alone is not known; otherwise null. */
+  uLnKRange(temperatureK: number): [number, number] | null {
+    const { uLnA, uEnergyOverR } = this;
+    if (this.correlation !== null || uLnA === null || uEnergyOverR === null || uLnA === 0 || uEnergyOverR === 0) return null;
+    const b = uEnergyOverR / temperatureK;
+    return [Math.abs(uLnA - b), uLnA + b];
+  }
+}
+
+/**
+ * Checks modified Arrhenius parameters once, to evaluate them at many temperatures.
+ *
+ * Sources: as for `rateAt`, which gives the same figures with a derivation.
+ * @throws KineticsError on A or T0 not above 0, a negative uncertainty, or a correlation outside -1 to 1.
+ * @example rateEvaluator({ preExponential: 1e13, energyKJPerMol: 72.4 }).k(300) // 2.479056039812485
+ */
+export function rateEvaluator(input: UncertainArrhenius): RateEvaluator {
+  return new RateEvaluator(input);
+}
+
+/** n, T0 and E as a derivation names them. */
+function parametersText({ exponent = 0, referenceTemperatureK = 1, energyKJPerMol }: ArrheniusParameters): string {
+  const power = exponent === 0 ? 'n = 0' : `n = ${quantityText(exponent)}, T0 = ${quantityText(referenceTemperatureK)} K`;
+  return `${power}, E = ${quantityText(energyKJPerMol)} kJ/mol`;
+}
+
+function uncertaintyLines({ uLnPreExponential, uEnergyKJPerMol, correlation }: UncertainArrhenius, uLnK: number | null, T: number): DerivationLine[] {
+  if (uLnPreExponential == null || uEnergyKJPerMol == null || uLnK === null) return [];
+  const known = `u(E) = ${quantityText(uEnergyKJPerMol)} kJ/mol, r = ${quantityText(correlation ?? 0)}, T = ${quantityText(T)} K`;
+  return [
+    operationLine(`u²(ln k) = u²(ln A) + u²(E)/(RT)² - 2 r u(ln A) u(E)/(RT), ${known}`, { value: uLnPreExponential }, { value: uLnK }, references.gum, { constant: `R = ${R} J mol-1 K-1` }),
+  ];
+}
+
+/** Input of `rateAt`. */
+export interface RateAtInput extends UncertainArrhenius {
+  temperatureK: number;
 }
 
 /**
@@ -85,31 +156,30 @@ export interface RateAtInput extends ArrheniusParameters {
  * @example rateAt({ preExponential: 1e13, energyKJPerMol: 72.4, temperatureK: 300 }).k // 2.479056039812485
  */
 export function rateAt(input: RateAtInput): RateAt {
-  const A = requirePositive('preExponential', input.preExponential, 'A');
-  const n = requireFinite('exponent', input.exponent ?? 0);
-  const T0 = requireTemperature('referenceTemperatureK', input.referenceTemperatureK ?? 1, 'T0');
-  const E = requireFinite('energyKJPerMol', input.energyKJPerMol);
+  const evaluator = rateEvaluator(input);
   const T = requireTemperature('temperatureK', input.temperatureK);
-  const uLnA = input.uLnPreExponential ?? null;
-  const uE = input.uEnergyKJPerMol ?? null;
-  const r = input.correlation ?? null;
-  if (uLnA !== null) requireNonNegative('uLnPreExponential', uLnA, 'u(ln A)');
-  if (uE !== null) requireNonNegative('uEnergyKJPerMol', uE, 'u(E)', 'kJ/mol');
-  if (r !== null && !(r >= -1 && r <= 1)) throw new KineticsError('correlation', `correlation must be between -1 and 1, got ${r}`, 'out-of-range', r);
+  const { preExponential: A, energyKJPerMol: E } = input;
+  const n = evaluator.exponent;
+  const ratio = T / (input.referenceTemperatureK ?? 1);
   const exponentPart = (-E * 1000) / (R * T);
-  const lnK = Math.log(A) + n * Math.log(T / T0) + exponentPart;
-  const direct = A * (T / T0) ** n * Math.exp(exponentPart);
+  const lnK = evaluator.lnA + n * Math.log(ratio) + exponentPart;
+  // The product rounds less than the exponential of a sum, but may leave double range on the way.
+  const direct = A * ratio ** n * Math.exp(exponentPart);
   const k = Number.isFinite(direct) && direct > 1e-300 ? direct : Math.exp(lnK);
+  const uLnK = evaluator.uLnK(T);
+  const uLnKRange = evaluator.uLnKRange(T);
   return {
     k,
     lnK,
     localEnergyKJPerMol: E + (n * R * T) / 1000,
-    ...propagate(uLnA, uE, r, T),
+    uLnK,
+    ...(uLnKRange === null ? {} : { uLnKRange }),
     derivation: [
-      operationLine('Evaluate k = A (T/T0)^n exp(-E/RT)', { value: T, unit: 'K' }, { value: k }, references.glossary, {
+      operationLine(`k = A (T/T0)^n exp(-E/RT), ${parametersText(input)}, T = ${quantityText(T)} K`, { value: A }, { value: k }, references.glossary, {
         constant: `R = ${R} J mol-1 K-1`,
         assumption: input.referenceTemperatureK === undefined && n !== 0 ? 'T0 = 1 K, as none is stated' : undefined,
       }),
+      ...uncertaintyLines(input, uLnK, T),
     ],
   };
 }
@@ -145,7 +215,8 @@ export function twoTemperature(input: { k1: number; temperature1K: number; k2: n
     lnPreExponential: lnA,
     energyKJPerMol,
     derivation: [
-      operationLine('Line of ln k against 1/T through two points', { value: ratio }, { value: energyKJPerMol, unit: 'kJ/mol' }, references.glossary, { constant: `R = ${R} J mol-1 K-1` }),
+      operationLine(`E = R ln(k2/k1)/(1/T1 - 1/T2), T1 = ${quantityText(T1)} K, T2 = ${quantityText(T2)} K, from ln(k2/k1)`, { value: ratio }, { value: energyKJPerMol, unit: 'kJ/mol' }, references.glossary, { constant: `R = ${R} J mol-1 K-1` }),
+      operationLine(`A = k1 exp(E/RT1), E = ${quantityText(energyKJPerMol)} kJ/mol, T1 = ${quantityText(T1)} K`, { value: k1 }, { value: Math.exp(lnA) }, references.glossary, { constant: `R = ${R} J mol-1 K-1` }),
     ],
   };
 }
@@ -189,7 +260,7 @@ export function changeBasis(input: ArrheniusParameters & { gasOrder: number; fro
     referenceTemperatureK: T0,
     energyKJPerMol: E,
     derivation: [
-      operationLine(toPressure ? `A_p = A_c/(R T0)^${g}` : `A_c = A_p (R T0)^${g}`, { value: A }, { value: preExponential }, references.idealGas, {
+      operationLine(toPressure ? `A_p = A_c/(R T0)^${g}, T0 = ${quantityText(T0)} K` : `A_c = A_p (R T0)^${g}, T0 = ${quantityText(T0)} K`, { value: A }, { value: preExponential }, references.idealGas, {
         constant: `R = ${R} J mol-1 K-1`,
         assumption: input.referenceTemperatureK === undefined ? 'T0 = 1 K, as none is stated' : undefined,
       }),

@@ -1,5 +1,5 @@
 import { h, k_B, R } from './constants.ts';
-import { operationLine, references, type DerivationLine } from './derivation.ts';
+import { operationLine, quantityText, type DerivationLine } from './derivation.ts';
 import { KineticsError, requireFinite, requirePositive, requireTemperature } from './kinetics-error.ts';
 
 /** Where the elementary step takes place: at the surface, in the gas, or from the gas onto the surface. */
@@ -31,6 +31,8 @@ export interface ArrheniusToEyringInput extends EyringSystem {
 }
 
 const standardPressure = 1e5;
+const goldBook = 'IUPAC Gold Book E02142';
+const constant = `R = ${R} J mol-1 K-1, k_B = ${k_B} J K-1, h = ${h} J s`;
 
 interface Form {
   /** Multiplies e (k_B T/h) exp(ΔS/R) to give A. */
@@ -39,6 +41,8 @@ interface Form {
   shift: number;
   unit: string;
   words: string;
+  /** The standard state's part of k, in words; empty where there is none. */
+  standard: string;
 }
 
 /** Δn‡ counts gas molecules in the transition state minus those in the reactants. */
@@ -47,15 +51,15 @@ function formOf(input: EyringSystem): Form {
   if (input.molecularity !== 1 && input.molecularity !== 2) throw new KineticsError('molecularity', `molecularity must be 1 or 2, got ${String(input.molecularity)}`, 'out-of-range', input.molecularity);
   const state = input.standardState ?? '1 bar';
   if (input.phase === 'surface' || (input.phase === 'gas' && input.molecularity === 1)) {
-    return { factor: 1, shift: 1, unit: 's-1', words: input.phase === 'surface' ? 'E = ΔH‡ + RT, coverages with θ° = 1' : 'E = ΔH‡ + RT' };
+    return { factor: 1, shift: 1, unit: 's-1', words: input.phase === 'surface' ? 'E = ΔH‡ + RT, coverages with θ° = 1' : 'E = ΔH‡ + RT', standard: '' };
   }
   if (input.phase === 'gas') {
     const volume = state === '1 bar' ? (R * T) / standardPressure : 1e-3;
-    return { factor: Math.E * volume, shift: 2, unit: 'm3 mol-1 s-1', words: `E = ΔH‡ + 2RT, standard state ${state}` };
+    return { factor: Math.E * volume, shift: 2, unit: 'm3 mol-1 s-1', words: `E = ΔH‡ + 2RT, standard state ${state}`, standard: state === '1 bar' ? ' (RT/p°)' : '/c°' };
   }
   // Δn‡ = -1: one gas molecule adsorbs and the transition state holds no gas.
   const pressure = state === '1 bar' ? standardPressure : 1e3 * R * T;
-  return { factor: 1 / pressure, shift: 1, unit: 'Pa-1 s-1', words: `E = ΔH‡ + RT, Δn‡ = -1, per site, standard state ${state}` };
+  return { factor: 1 / pressure, shift: 1, unit: 'Pa-1 s-1', words: `E = ΔH‡ + RT, Δn‡ = -1, per site, standard state ${state}`, standard: state === '1 bar' ? '/p°' : '/(c° RT)' };
 }
 
 /** Rate constant and tangent Arrhenius parameters at T. */
@@ -95,10 +99,10 @@ export function eyringToArrhenius(input: EyringToArrheniusInput): EyringResult {
     gibbsKJPerMol,
     unit: form.unit,
     derivation: [
-      operationLine(`Eyring equation, ${form.words}`, { value: gibbsKJPerMol, unit: 'kJ/mol' }, { value: k, unit: form.unit }, 'IUPAC Gold Book E02142', {
-        constant: `k_B/h = ${k_B / h} K-1 s-1`,
-        assumption: `A and E are tangent values at T = ${T} K; transmission coefficient ${kappa}`,
-      }),
+      operationLine(`ΔG‡ = ΔH‡ - TΔS‡, ΔS‡ = ${quantityText(S)} J mol-1 K-1, T = ${quantityText(T)} K`, { value: H, unit: 'kJ/mol' }, { value: gibbsKJPerMol, unit: 'kJ/mol' }, goldBook),
+      operationLine(`k = κ (k_B T/h)${form.standard} exp(-ΔG‡/RT), κ = ${quantityText(kappa)}, T = ${quantityText(T)} K`, { value: gibbsKJPerMol, unit: 'kJ/mol' }, { value: k, unit: form.unit }, goldBook, { constant }),
+      operationLine(`${form.words}, T = ${quantityText(T)} K`, { value: H, unit: 'kJ/mol' }, { value: energyKJPerMol, unit: 'kJ/mol' }, goldBook, { constant, assumption: `A and E are tangent values at T = ${quantityText(T)} K` }),
+      operationLine(`A = k exp(E/RT), E = ${quantityText(energyKJPerMol)} kJ/mol, T = ${quantityText(T)} K`, { value: k, unit: form.unit }, { value: preExponential, unit: form.unit }, goldBook, { constant }),
     ],
   };
 }
@@ -126,15 +130,15 @@ export function arrheniusToEyring(input: ArrheniusToEyringInput): ActivationTher
   const kappa = requirePositive('transmission', input.transmission ?? 1, 'transmission coefficient');
   const enthalpyKJPerMol = E - (form.shift * R * T) / 1000;
   const entropyJPerMolK = R * (Math.log(A) - Math.log(kappa) - 1 - Math.log((k_B * T) / h) - Math.log(form.factor));
+  const gibbsKJPerMol = enthalpyKJPerMol - (T * entropyJPerMolK) / 1000;
   return {
     enthalpyKJPerMol,
     entropyJPerMolK,
-    gibbsKJPerMol: enthalpyKJPerMol - (T * entropyJPerMolK) / 1000,
+    gibbsKJPerMol,
     derivation: [
-      operationLine(`Inverse Eyring equation, ${form.words}`, { value: E, unit: 'kJ/mol' }, { value: enthalpyKJPerMol, unit: 'kJ/mol' }, references.glossary, {
-        constant: `k_B/h = ${k_B / h} K-1 s-1`,
-        assumption: `values at T = ${T} K; transmission coefficient ${kappa}`,
-      }),
+      operationLine(`${form.words.replace('E = ΔH‡ +', 'ΔH‡ = E -')}, T = ${quantityText(T)} K`, { value: E, unit: 'kJ/mol' }, { value: enthalpyKJPerMol, unit: 'kJ/mol' }, goldBook, { constant, assumption: `values at T = ${quantityText(T)} K` }),
+      operationLine(`ΔG‡ = -RT ln[k/(κ (k_B T/h)${form.standard})] with k = A exp(-E/RT), E = ${quantityText(E)} kJ/mol, κ = ${quantityText(kappa)}, T = ${quantityText(T)} K`, { value: A, unit: form.unit }, { value: gibbsKJPerMol, unit: 'kJ/mol' }, goldBook, { constant }),
+      operationLine(`ΔS‡ = (ΔH‡ - ΔG‡)/T, ΔH‡ = ${quantityText(enthalpyKJPerMol)} kJ/mol, T = ${quantityText(T)} K`, { value: gibbsKJPerMol, unit: 'kJ/mol' }, { value: entropyJPerMolK, unit: 'J mol-1 K-1' }, goldBook),
     ],
   };
 }

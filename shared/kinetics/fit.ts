@@ -143,10 +143,11 @@ export function fitArrhenius(input: FitInput): FitResult {
     leverage: line.leverage,
     warnings: warningsOf(input, x, line, weights),
     derivation: [
-      operationLine(`Least squares of ln k on 1/T, ${n} points, ${input.weights === 'given' ? 'weights (k/u)²' : 'equal weights'}`, { value: n, unit: 'points' }, { value: energyKJPerMol, unit: 'kJ/mol' }, references.gum, {
-        constant: `R = ${R} J mol-1 K-1`,
+      operationLine(`Least squares of ln k on 1/T, ${n} points, ${input.weights === 'given' ? 'weights (k/u)²' : 'equal weights'}`, { value: n, unit: 'points' }, { value: line.slope, unit: 'K' }, references.gum, {
         assumption: scaled ? 'errors from the residuals, Student t' : 'errors from the given standard uncertainties, normal distribution',
       }),
+      operationLine('E = -R × slope', { value: line.slope, unit: 'K' }, { value: energyKJPerMol, unit: 'kJ/mol' }, references.glossary, { constant: `R = ${R} J mol-1 K-1` }),
+      operationLine('A = exp(intercept)', { value: line.intercept }, { value: Math.exp(line.intercept) }, references.glossary),
     ],
   };
 }
