@@ -1,9 +1,17 @@
 import { arrheniusCalculator } from './arrhenius.ts';
 import type { Calculator } from './calculator.ts';
+import { changeBasisCalculator } from './change-basis.ts';
 import { energyCalculator } from './energy.ts';
+import { eyringCalculator } from './eyring.ts';
+import { fitCalculator } from './fit.ts';
+import { kieCalculator } from './kie.ts';
 import { parseStepCalculator } from './parse-step.ts';
 import { parseValueCalculator } from './parse-value.ts';
 import { rateConstantCalculator } from './rate-constant.ts';
+import { siteDensityCalculator } from './site-density.ts';
+import { twoTemperatureCalculator } from './two-temperature.ts';
+import { uncertaintyCalculator } from './uncertainty.ts';
+import { tunnellingCalculator } from './tunnelling.ts';
 
 /** Every calculator, in the order of the Workbench. */
 export const calculators: readonly Calculator[] = [
@@ -11,5 +19,13 @@ export const calculators: readonly Calculator[] = [
   parseStepCalculator,
   energyCalculator,
   rateConstantCalculator,
+  changeBasisCalculator,
   arrheniusCalculator,
+  twoTemperatureCalculator,
+  eyringCalculator,
+  fitCalculator,
+  kieCalculator,
+  tunnellingCalculator,
+  siteDensityCalculator,
+  uncertaintyCalculator,
 ];
