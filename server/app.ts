@@ -5,6 +5,7 @@ import helmet from 'helmet';
 import type { Context } from './context.ts';
 import { accountsRoutes } from './features/accounts/accounts.routes.ts';
 import { calculatorsRoutes } from './features/calculators/calculators.routes.ts';
+import { collectionsRoutes } from './features/collections/collections.routes.ts';
 import { entriesRoutes } from './features/entries/entries.routes.ts';
 import { exportsRoutes } from './features/exports/exports.routes.ts';
 import { healthRoutes } from './features/health/health.routes.ts';
@@ -73,6 +74,7 @@ export function createApp(context: Context, services: Services, settings: HttpSe
   api.use(searchRoutes(services.search));
   api.use(entriesRoutes(services.entries));
   api.use(reviewsRoutes(services.reviews));
+  api.use(collectionsRoutes(services.collections));
   api.use(calculatorsRoutes(services.sources, limit(pool, 'calculator', settings.limits.calculators)));
   api.use((_req, _res, next) => next(new Refusal('not-found', 'There is no such address in this interface.')));
   app.use('/api/v1', api);

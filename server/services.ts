@@ -1,5 +1,6 @@
 import type { Context } from './context.ts';
 import { createAccountsService } from './features/accounts/accounts.service.ts';
+import { createCollectionsService } from './features/collections/collections.service.ts';
 import { createEntriesService } from './features/entries/entries.service.ts';
 import { createEntryRecordsService } from './features/entries/records.service.ts';
 import { createExportsService } from './features/exports/exports.service.ts';
@@ -20,6 +21,7 @@ export function createServices(context: Context) {
     reviews: createReviewsService(context, records),
     search: createSearchService(context, records),
     exports: createExportsService(context),
+    collections: createCollectionsService(context),
   };
 }
 export type Services = ReturnType<typeof createServices>;

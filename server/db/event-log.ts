@@ -7,7 +7,7 @@ export interface EventRecord {
   actorId: string | null;
   /** What happened, as `subject.verb`. */
   action: string;
-  subjectType: 'entry' | 'revision' | 'submission' | 'source' | 'user' | 'vocabulary';
+  subjectType: 'entry' | 'revision' | 'submission' | 'source' | 'user' | 'vocabulary' | 'collection';
   subjectId: string;
   /** Opaque ids, codes, numbers and hashes only: nothing that names a person or repeats a text. */
   payload?: Record<string, string | number | boolean | null>;

@@ -2,6 +2,7 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import * as accounts from '#shared/contracts/accounts.ts';
 import { calculatorEndpoints } from '#shared/contracts/calculators.ts';
 import * as citations from '#shared/contracts/citations.ts';
+import * as collections from '#shared/contracts/collections.ts';
 import type { Endpoint } from '#shared/contracts/endpoint.ts';
 import * as entries from '#shared/contracts/entries.ts';
 import * as search from '#shared/contracts/entry-search.ts';
@@ -19,7 +20,7 @@ const app = useApp();
 
 const isEndpoint = (value: unknown): value is Endpoint => typeof value === 'object' && value !== null && 'method' in value && 'path' in value && 'access' in value;
 const calculators = Object.fromEntries(calculatorEndpoints.map(({ calculator, endpoint }) => [calculator.name, endpoint]));
-const contracts = { accounts, calculators, citations, entries, 'entry-search': search, reviews, service, sources, vocabulary };
+const contracts = { accounts, calculators, citations, collections, entries, 'entry-search': search, reviews, service, sources, vocabulary };
 const endpoints: Endpoint[] = Object.values(contracts).flatMap((module) => Object.values(module as Record<string, unknown>)).flatMap((value) => {
   if (isEndpoint(value)) return [value];
   const inner = typeof value === 'object' && value !== null && 'endpoint' in value ? value.endpoint : null;
