@@ -1,3 +1,4 @@
+import { operationLine, references, type DerivationLine } from './derivation.ts';
 import { KineticsError, requireNonNegative, requirePositive } from './kinetics-error.ts';
 import { studentCoverageFactor } from './student-t.ts';
 
@@ -79,7 +80,70 @@ export function standardUncertaintyOf(halfWidth: number, statement: UncertaintyS
  * @example factorUncertainty(10, 0.95) // 1.1748099001596677
  */
 export function factorUncertainty(factor: number, level: number): number {
+  requireFactor(factor);
+  return Math.log(factor) / studentCoverageFactor(level);
+}
+
+function requireFactor(factor: number): void {
   requirePositive('factor', factor);
   if (factor < 1) throw new KineticsError('factor', `factor must be 1 or more, got ${factor}`, 'out-of-range', factor);
-  return Math.log(factor) / studentCoverageFactor(level);
+}
+
+/** A reported uncertainty whose kind is stated, as the HTTP contract names its parts. */
+export type StatedUncertainty =
+  | { kind: 'expanded'; value: number; coverageFactor: number }
+  | { kind: 'confidence'; halfWidth: number; level: number; degreesOfFreedom?: number | null }
+  | { kind: 'rectangular' | 'triangular'; halfWidth: number }
+  | { kind: 'factor'; factor: number; level: number };
+
+/** A standard uncertainty with the way it was reached. */
+export interface EvaluatedUncertainty {
+  /** In the unit of what was reported; of ln x where the scale is `ln`. */
+  standardUncertainty: number;
+  /** What the reported figure (or the logarithm of the factor) was divided by. */
+  divisor: number;
+  scale: 'linear' | 'ln';
+  derivation: DerivationLine[];
+}
+
+/** The figure to divide, the divisor and the words for it. */
+function divisionOf(given: StatedUncertainty): { figure: number; divisor: number; operation: string; assumption: string; reference: string } {
+  switch (given.kind) {
+    case 'expanded': {
+      const divisor = requirePositive('coverageFactor', given.coverageFactor, 'coverage factor');
+      return { figure: requireNonNegative('value', given.value, 'expanded uncertainty'), divisor, operation: 'Expanded uncertainty divided by its coverage factor', assumption: `coverage factor ${divisor}`, reference: `${references.gum} 4.3.3` };
+    }
+    case 'confidence': {
+      const divisor = studentCoverageFactor(given.level, given.degreesOfFreedom);
+      const distribution = given.degreesOfFreedom == null ? 'normal distribution, as no degrees of freedom are stated' : `Student t with ${given.degreesOfFreedom} degrees of freedom`;
+      return { figure: requireNonNegative('halfWidth', given.halfWidth, 'half-width'), divisor, operation: 'Half-width of a confidence interval divided by its quantile', assumption: `two-sided level ${given.level}, ${distribution}`, reference: `${references.gum} annex G` };
+    }
+    case 'rectangular':
+      return { figure: requireNonNegative('halfWidth', given.halfWidth, 'half-width'), divisor: Math.sqrt(3), operation: 'Half-width of a rectangular distribution divided by √3', assumption: 'every value between the limits is equally likely', reference: `${references.gum} 4.3.7` };
+    case 'triangular':
+      return { figure: requireNonNegative('halfWidth', given.halfWidth, 'half-width'), divisor: Math.sqrt(6), operation: 'Half-width of a triangular distribution divided by √6', assumption: 'symmetric triangle between the limits', reference: `${references.gum} 4.3.9` };
+    case 'factor': {
+      requireFactor(given.factor);
+      return { figure: Math.log(given.factor), divisor: studentCoverageFactor(given.level), operation: 'Logarithm of the factor divided by the normal quantile', assumption: `the factor encloses x/f to x f with the two-sided level ${given.level}; ln x is normal`, reference: `${references.gum} 4.3.4 on the logarithm` };
+    }
+  }
+}
+
+/**
+ * Standard uncertainty of a reported uncertainty whose kind is stated, with its derivation.
+ *
+ * Expanded: U/k. Confidence: half-width/t (normal without degrees of freedom). Rectangular: /√3, triangular: /√6.
+ * Factor f: u(ln x) = ln f/z. Source: JCGM 100:2008 (GUM) 4.3.3, 4.3.4, 4.3.7, 4.3.9, annex G.
+ * @throws KineticsError on a negative half-width, a coverage factor or degrees of freedom not above 0, a level outside 0 to 1, a factor below 1.
+ * @example evaluateUncertainty({ kind: 'expanded', value: 3, coverageFactor: 2 }).standardUncertainty // 1.5
+ */
+export function evaluateUncertainty(given: StatedUncertainty): EvaluatedUncertainty {
+  const { figure, divisor, operation, assumption, reference } = divisionOf(given);
+  const standardUncertainty = figure / divisor;
+  return {
+    standardUncertainty,
+    divisor,
+    scale: given.kind === 'factor' ? 'ln' : 'linear',
+    derivation: [operationLine(operation, { value: figure }, { value: standardUncertainty }, reference, { constant: `divisor ${divisor}`, assumption })],
+  };
 }
