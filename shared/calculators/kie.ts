@@ -1,15 +1,12 @@
 import * as z from 'zod';
 import { bigeleisenMayer } from '../kinetics/bigeleisen-mayer.ts';
-import { operationLine, references } from '../kinetics/derivation.ts';
-import { kieFromArrheniusPair, kieFromZeroPoint, kieLineFromTwoTemperatures, ratioFromLn } from '../kinetics/kie.ts';
+import { kieAtThirdTemperature, kieFromArrheniusPair, kieFromZeroPoint } from '../kinetics/kie.ts';
 import { swainSchaad, swainSchaadExponent, swainSchaadExponentFromDT, swainSchaadFromDT } from '../kinetics/kie-swain-schaad.ts';
-import { R } from '../kinetics/constants.ts';
-import { requireTemperature } from '../kinetics/kinetics-error.ts';
 import { tunnellingKie, tunnellingModels } from '../kinetics/tunnelling.ts';
 import { calculator } from './calculator.ts';
 
 /** More modes than a slab calculation lists. */
-const wavenumbers = z.array(z.number()).max(3000);
+const wavenumbers = z.array(z.number()).max(300);
 
 const input = z.discriminatedUnion('method', [
   z.strictObject({
@@ -29,19 +26,6 @@ const input = z.discriminatedUnion('method', [
   z.strictObject({ method: z.literal('swain-schaad'), kie: z.number(), exponent: z.number().default(swainSchaadExponent) }),
   z.strictObject({ method: z.literal('swain-schaad-from-dt'), kie: z.number(), exponent: z.number().default(swainSchaadExponentFromDT) }),
 ]);
-
-/** The line through two temperatures, evaluated at a third. */
-function atThirdTemperature(given: { kie1: number; temperature1K: number; kie2: number; temperature2K: number; temperatureK: number }) {
-  const T = requireTemperature('temperatureK', given.temperatureK);
-  const line = kieLineFromTwoTemperatures(given);
-  const lnKie = line.lnPreExponentialRatio + (line.energyDifferenceKJPerMol * 1000) / (R * T);
-  const kie = ratioFromLn('temperatureK', lnKie, 'the isotope effect');
-  const { preExponentialRatio, energyDifferenceKJPerMol } = line;
-  return {
-    kie, lnKie, preExponentialRatio, energyDifferenceKJPerMol,
-    derivation: [...line.derivation, operationLine('KIE = (A_L/A_H) exp[(E_H - E_L)/RT]', { value: T, unit: 'K' }, { value: kie }, references.glossary, { constant: `R = ${R} J mol-1 K-1` })],
-  };
-}
 
 export const kieCalculator = calculator({
   name: 'kie',
@@ -70,7 +54,7 @@ export const kieCalculator = calculator({
   calculate: (given) => {
     switch (given.method) {
       case 'arrhenius-pair': return kieFromArrheniusPair(given);
-      case 'two-temperatures': return atThirdTemperature(given);
+      case 'two-temperatures': return kieAtThirdTemperature(given);
       case 'zero-point': return kieFromZeroPoint(given);
       case 'bigeleisen-mayer': return bigeleisenMayer(given);
       case 'tunnelling-ratio': return tunnellingKie(given);

@@ -1,6 +1,6 @@
-import { operationLine, type DerivationLine } from './derivation.ts';
+import { operationLine, quantityText, type DerivationLine } from './derivation.ts';
 import { ratioFromLn, type IsotopeEffect } from './kie.ts';
-import { reducedWavenumber, requireWavenumber } from './kie-wavenumber.ts';
+import { radiationConstantText, reducedWavenumber, requireWavenumber } from './kie-wavenumber.ts';
 import { KineticsError, requireTemperature } from './kinetics-error.ts';
 
 /** Harmonic wavenumbers [cm-1] of reactant and transition state, light and heavy. */
@@ -109,15 +109,20 @@ export function bigeleisenMayer(input: BigeleisenMayerInput): BigeleisenMayerEff
   return { kie, lnKie, factors, derivation: linesOf(input, factors, kie) };
 }
 
+const listText = (light: readonly number[], heavy: readonly number[]): string => light.map((nu, index) => `${quantityText(nu)}/${quantityText(heavy[index] as number)}`).join(', ');
+
 function linesOf(input: BigeleisenMayerInput, factors: BigeleisenMayerFactors, kie: number): DerivationLine[] {
   const reference = 'Bigeleisen and Mayer, J. Chem. Phys. 15 (1947) 261';
-  const T = { value: input.temperatureK, unit: 'K' };
-  const counts = `${input.reactantLightPerCm.length} modes of the reactant and ${input.transitionLightPerCm.length} real ones of the transition state, harmonic`;
+  const T = `T = ${quantityText(input.temperatureK)} K`;
+  const assumption = `light/heavy in cm-1, harmonic: reactant ${listText(input.reactantLightPerCm, input.reactantHeavyPerCm)}; transition state, real modes ${listText(input.transitionLightPerCm, input.transitionHeavyPerCm)}`;
+  const constant = radiationConstantText;
+  const times = (operation: string, before: number, factor: number, extra: { constant?: string; assumption?: string }): DerivationLine =>
+    operationLine(`${operation} = ${quantityText(factor)}`, { value: before }, { value: before * factor }, reference, extra);
+  const { imaginaryRatio, productRule, excitation } = factors;
   return [
-    operationLine('Ratio of the imaginary wavenumbers, light over heavy', { value: input.imaginaryLightPerCm, unit: 'cm-1' }, { value: factors.imaginaryRatio }, reference),
-    operationLine('Product rule: Π(ν_H/ν_L) of the reactant over that of the transition state', { value: 1 }, { value: factors.productRule }, reference, { assumption: counts }),
-    operationLine('Excitation: Π(1 - e^-u_L)/(1 - e^-u_H), reactant over transition state', T, { value: factors.excitation }, reference),
-    operationLine('Zero-point energies: Π exp[(u_L - u_H)/2], reactant over transition state', T, { value: factors.zeroPoint }, reference),
-    operationLine('KIE = product of the four factors', T, { value: kie }, reference, { assumption: 'no tunnelling' }),
+    operationLine(`Imaginary wavenumbers: ν‡_L/ν‡_H, ν‡_H = ${quantityText(input.imaginaryHeavyPerCm)} cm-1`, { value: input.imaginaryLightPerCm, unit: 'cm-1' }, { value: imaginaryRatio }, reference),
+    times('Product rule: times Π(ν_H/ν_L), reactant over transition state,', imaginaryRatio, productRule, { assumption }),
+    times(`Excitation: times Π(1 - e^-u_L)/(1 - e^-u_H), u = hcν/k_BT, reactant over transition state, ${T},`, imaginaryRatio * productRule, excitation, { constant }),
+    { ...times(`Zero-point energies: times Π exp[(u_L - u_H)/2], reactant over transition state, ${T},`, imaginaryRatio * productRule * excitation, factors.zeroPoint, { constant, assumption: 'no tunnelling' }), to: quantityText(kie) },
   ];
 }

@@ -4,6 +4,9 @@ import { requirePositive } from './kinetics-error.ts';
 /** Second radiation constant h c/k_B [cm K], exact in the SI of 2019: reduces a wavenumber over a temperature. */
 export const secondRadiationConstant = ((h * c) / k_B) * 100;
 
+/** The same as derivations name it. */
+export const radiationConstantText = `hc/k_B = ${secondRadiationConstant} cm K`;
+
 /**
  * Returns a wavenumber [cm-1] above zero, or throws with the path of the input.
  *

@@ -1,7 +1,7 @@
 import { c, h, N_A, R } from './constants.ts';
-import { operationLine, references, type DerivationLine } from './derivation.ts';
+import { operationLine, quantityText, references, type DerivationLine } from './derivation.ts';
 import { KineticsError, requireFinite, requirePositive, requireTemperature } from './kinetics-error.ts';
-import { reducedWavenumber, requireWavenumber } from './kie-wavenumber.ts';
+import { radiationConstantText, reducedWavenumber, requireWavenumber } from './kie-wavenumber.ts';
 
 /** A kinetic isotope effect k_light/k_heavy. */
 export interface IsotopeEffect {
@@ -13,6 +13,7 @@ export interface IsotopeEffect {
 }
 
 const gasConstant = `R = ${R} J mol-1 K-1`;
+const reference = 'Bigeleisen and Mayer, J. Chem. Phys. 15 (1947) 261';
 
 /**
  * A ratio from its natural logarithm, refused where it leaves the range of double precision.
@@ -69,9 +70,16 @@ export function kieFromArrheniusPair(input: ArrheniusPair): ArrheniusPairEffect 
     preExponentialRatio: AL / AH,
     energyDifferenceKJPerMol,
     derivation: [
-      operationLine('KIE = (A_L/A_H) exp[(E_H - E_L)/RT]', { value: T, unit: 'K' }, { value: kie }, references.glossary, { constant: gasConstant }),
+      operationLine(`A_L/A_H, A_H = ${quantityText(AH)}`, { value: AL }, { value: AL / AH }, references.glossary),
+      operationLine(`E_H - E_L, E_L = ${quantityText(EL)} kJ/mol`, { value: EH, unit: 'kJ/mol' }, { value: energyDifferenceKJPerMol, unit: 'kJ/mol' }, references.glossary),
+      kieLine(AL / AH, energyDifferenceKJPerMol, T, kie),
     ],
   };
+}
+
+/** The line of a derivation that evaluates (A_L/A_H) exp[(E_H - E_L)/RT]. */
+function kieLine(ratio: number, energyDifferenceKJPerMol: number, T: number, kie: number): DerivationLine {
+  return operationLine(`KIE = (A_L/A_H) exp[(E_H - E_L)/RT], E_H - E_L = ${quantityText(energyDifferenceKJPerMol)} kJ/mol, T = ${quantityText(T)} K`, { value: ratio }, { value: kie }, references.glossary, { constant: gasConstant });
 }
 
 /** The Arrhenius pair behind an isotope effect that changes with temperature. */
@@ -99,14 +107,31 @@ export function kieLineFromTwoTemperatures(input: { kie1: number; temperature1K:
   if (T1 === T2) throw new KineticsError('temperature2K', `the two temperatures must differ, both are ${T1} K`, 'out-of-range', T2);
   const energyDifferenceKJPerMol = ((R * (ln1 - ln2) * T1) * (T2 / (T2 - T1))) / 1000;
   const lnPreExponentialRatio = (T2 * ln2 - T1 * ln1) / (T2 - T1);
+  const preExponentialRatio = ratioFromLn('temperature2K', lnPreExponentialRatio, 'A_L/A_H');
   return {
-    preExponentialRatio: ratioFromLn('temperature2K', lnPreExponentialRatio, 'A_L/A_H'),
+    preExponentialRatio,
     lnPreExponentialRatio,
     energyDifferenceKJPerMol,
     derivation: [
-      operationLine('Line of ln KIE against 1/T through two points', { value: ln1 - ln2 }, { value: energyDifferenceKJPerMol, unit: 'kJ/mol' }, references.glossary, { constant: gasConstant }),
+      operationLine(`E_H - E_L = R ln(KIE1/KIE2)/(1/T1 - 1/T2), T1 = ${quantityText(T1)} K, T2 = ${quantityText(T2)} K, from ln(KIE1/KIE2)`, { value: ln1 - ln2 }, { value: energyDifferenceKJPerMol, unit: 'kJ/mol' }, references.glossary, { constant: gasConstant }),
+      operationLine(`A_L/A_H = KIE1 exp[-(E_H - E_L)/RT1], E_H - E_L = ${quantityText(energyDifferenceKJPerMol)} kJ/mol, T1 = ${quantityText(T1)} K`, { value: input.kie1 }, { value: preExponentialRatio }, references.glossary, { constant: gasConstant }),
     ],
   };
+}
+
+/**
+ * The isotope effect at a third temperature, from the line through two.
+ *
+ * Source: as for `kieLineFromTwoTemperatures`; outside the two temperatures it is an extrapolation.
+ * @throws KineticsError on an isotope effect or temperature not above 0, or equal temperatures.
+ * @example kieAtThirdTemperature({ kie1: 6.8, temperature1K: 298.15, kie2: 3.1, temperature2K: 450, temperatureK: 450 }).kie // 3.1
+ */
+export function kieAtThirdTemperature(input: { kie1: number; temperature1K: number; kie2: number; temperature2K: number; temperatureK: number }): ArrheniusPairEffect {
+  const T = requireTemperature('temperatureK', input.temperatureK);
+  const { preExponentialRatio, lnPreExponentialRatio, energyDifferenceKJPerMol, derivation } = kieLineFromTwoTemperatures(input);
+  const lnKie = lnPreExponentialRatio + (energyDifferenceKJPerMol * 1000) / (R * T);
+  const kie = ratioFromLn('temperatureK', lnKie, 'the isotope effect');
+  return { kie, lnKie, preExponentialRatio, energyDifferenceKJPerMol, derivation: [...derivation, kieLine(preExponentialRatio, energyDifferenceKJPerMol, T, kie)] };
 }
 
 /** An isotope effect from one stretch that is lost in the transition state. */
@@ -136,10 +161,11 @@ export function kieFromZeroPoint(input: { wavenumberLightPerCm: number; wavenumb
     lnKie,
     zeroPointDifferenceKJPerMol,
     derivation: [
-      operationLine('Zero-point energies: N_A h c (ν_L - ν_H)/2', { value: difference, unit: 'cm-1' }, { value: zeroPointDifferenceKJPerMol, unit: 'kJ/mol' }, references.codata, {
+      operationLine(`ν_L - ν_H, ν_H = ${quantityText(heavy)} cm-1`, { value: light, unit: 'cm-1' }, { value: difference, unit: 'cm-1' }, reference),
+      operationLine(`KIE = exp[hc(ν_L - ν_H)/2k_BT], T = ${quantityText(T)} K`, { value: difference, unit: 'cm-1' }, { value: kie }, reference, {
+        constant: radiationConstantText,
         assumption: 'this vibration is lost in the transition state, all others are unchanged; no tunnelling',
       }),
-      operationLine('KIE = exp[hc(ν_L - ν_H)/2k_BT]', { value: T, unit: 'K' }, { value: kie }, 'Bigeleisen and Mayer, J. Chem. Phys. 15 (1947) 261'),
     ],
   };
 }

@@ -1,6 +1,6 @@
 import { R } from './constants.ts';
-import { operationLine, type DerivationLine } from './derivation.ts';
-import { reducedWavenumber, requireWavenumber, secondRadiationConstant } from './kie-wavenumber.ts';
+import { operationLine, quantityText, references, type DerivationLine } from './derivation.ts';
+import { radiationConstantText, reducedWavenumber, requireWavenumber, secondRadiationConstant } from './kie-wavenumber.ts';
 import { KineticsError, requireNonNegative, requirePositive, requireTemperature } from './kinetics-error.ts';
 
 /** Models of the tunnelling factor. */
@@ -17,8 +17,8 @@ const sources: Record<TunnellingModel, string> = {
 
 const formulas: Record<TunnellingModel, string> = {
   wigner: 'κ = 1 + u²/24',
-  'bell-1935': 'κ = e^α/(β - α) [β e^-α - α e^-β]',
-  'bell-1959': 'κ = (u/2)/sin(u/2) - Σ (-1)^n α e^(α - nβ)/(α - nβ)',
+  'bell-1935': 'κ = e^α/(β - α) [β e^-α - α e^-β], α = E/RT, β = 2πα/u',
+  'bell-1959': 'κ = (u/2)/sin(u/2) - Σ (-1)^n α e^(α - nβ)/(α - nβ), α = E/RT, β = 2πα/u',
 };
 
 /**
@@ -160,9 +160,9 @@ export function tunnellingFactor(input: TunnellingInput): TunnellingResult {
   const u = reducedWavenumber(wavenumber, T);
   if (!(u <= greatestU)) throw new KineticsError('temperatureK', `u = hν/k_BT = ${u.toPrecision(4)} is too large for a tunnelling factor: it must not exceed ${greatestU.toFixed(0)}`, 'out-of-range', T);
   const crossoverTemperatureK = (secondRadiationConstant * wavenumber) / (2 * Math.PI);
-  const line = (kappa: number, assumption?: string): DerivationLine[] => [
-    operationLine('Reduce the imaginary wavenumber: u = hcν/k_BT', { value: wavenumber, unit: 'cm-1' }, { value: u }, 'CODATA 2022'),
-    operationLine(formulas[model], { value: u }, { value: kappa }, sources[model], { assumption }),
+  const line = (kappa: number, barrier = '', assumption?: string): DerivationLine[] => [
+    operationLine(`u = hcν/k_BT, T = ${quantityText(T)} K`, { value: wavenumber, unit: 'cm-1' }, { value: u }, references.codata, { constant: radiationConstantText }),
+    operationLine(`${formulas[model]}${barrier}`, { value: u }, { value: kappa }, sources[model], { assumption }),
   ];
   if (model === 'wigner') {
     const kappa = wignerFactor(u);
@@ -174,7 +174,7 @@ export function tunnellingFactor(input: TunnellingInput): TunnellingResult {
   const beta = (2 * Math.PI * alpha) / u;
   const kappa = model === 'bell-1935' ? bell1935Factor(u, alpha) : bell1959Factor(u, alpha);
   if (!(kappa > 0 && kappa < Infinity)) throw new KineticsError('temperatureK', `the tunnelling factor leaves the range of double precision: E/RT = ${alpha.toPrecision(4)}, 2πE/hν = ${beta.toPrecision(4)}`, 'out-of-range', T);
-  return { kappa, u, crossoverTemperatureK, alpha, beta, warnings: warningsOf(model, u, beta), derivation: line(kappa, `parabolic barrier of ${energy} kJ/mol`) };
+  return { kappa, u, crossoverTemperatureK, alpha, beta, warnings: warningsOf(model, u, beta), derivation: line(kappa, `, α = ${quantityText(alpha)}, β = ${quantityText(beta)}`, `parabolic barrier, E = ${quantityText(energy)} kJ/mol, R = ${R} J mol-1 K-1`) };
 }
 
 /** Input of `tunnellingKie`. */
@@ -231,6 +231,6 @@ export function tunnellingKie(input: TunnellingKieInput): TunnellingKie {
     kappaLight: light.kappa,
     kappaHeavy: heavy.kappa,
     warnings: [...light.warnings.map((text) => `Light: ${text}`), ...heavy.warnings.map((text) => `Heavy: ${text}`)],
-    derivation: [...light.derivation, ...heavy.derivation, operationLine('κ_L/κ_H', { value: light.kappa }, { value: kie }, sources[input.model])],
+    derivation: [...light.derivation, ...heavy.derivation, operationLine(`κ_L/κ_H, κ_H = ${quantityText(heavy.kappa)}`, { value: light.kappa }, { value: kie }, sources[input.model])],
   };
 }
