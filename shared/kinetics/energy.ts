@@ -56,16 +56,23 @@ function fromUnit(unit: Unit): EnergyUnit | null {
 /** The energy units that the calculators name. */
 export const energyUnits = ['J/mol', 'kJ/mol', 'cal/mol', 'kcal/mol', 'eV', 'meV', 'hartree', 'rydberg', 'K', 'cm-1', 'Btu_IT/lbmol', 'Btu_th/lbmol'] as const;
 
+const found = new WeakMap<Unit, EnergyUnit | null>();
+
 /** Reads the unit of a molar energy: `K` means E/R, `cm-1` means E/hc, eV and hartree are per particle; null when it is none. */
 export function findEnergyUnit(text: string): EnergyUnit | null {
   const unit = findUnit(text);
-  return unit === null ? null : fromUnit(unit);
+  if (unit === null) return null;
+  const known = found.get(unit);
+  if (known !== undefined) return known;
+  const energy = fromUnit(unit);
+  found.set(unit, energy);
+  return energy;
 }
 
 /** The same, or an error that names the unit. */
 export function requireEnergyUnit(text: string, path: string): EnergyUnit {
-  const found = findEnergyUnit(text);
-  if (found) return found;
+  const energy = findEnergyUnit(text);
+  if (energy) return energy;
   const unit = findUnit(text);
   if (unit === null) throw new KineticsError(path, `unknown unit ${JSON.stringify(text)}: expected an energy unit such as kJ/mol`, 'unknown-unit', text);
   const bare = unit.dimension.energy === 1 && unit.dimension.amount === 0;

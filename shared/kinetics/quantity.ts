@@ -167,6 +167,7 @@ function readingText(printed: PrintedValue, unit: string): string {
 
 /** Multiplies by a factor; a power of ten moves the decimal point and rounds nothing. */
 function timesDecimal(value: number, factor: number): number {
+  if (factor === 1) return value;
   const [mantissa, power] = factor.toExponential().split('e');
   if (mantissa !== '1') return value * factor;
   const [digits, exponent] = value.toExponential().split('e');

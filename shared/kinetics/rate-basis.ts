@@ -23,7 +23,9 @@ export interface RateBasis {
   omittedMolecule: number;
 }
 
-function tidy(value: number): number {
+/** Takes rounding off an exponent; whole ones, which nearly all are, stay as they are. */
+export function tidy(value: number): number {
+  if (Number.isInteger(value)) return value + 0;
   const rounded = Number(value.toPrecision(12));
   return Math.abs(rounded) < 1e-9 ? 0 : rounded;
 }

@@ -1,7 +1,7 @@
 import { N_A, R } from './constants.ts';
 import { operationLine, quantityText, references, type DerivationLine } from './derivation.ts';
 import { KineticsError, requireFinite, requireNonNegative, requirePositive, requireTemperature } from './kinetics-error.ts';
-import { basisScale, isAmbiguousArea, omissionCandidates, rateBasisOf, unitOfBasis, type RateBasis } from './rate-basis.ts';
+import { basisScale, isAmbiguousArea, omissionCandidates, rateBasisOf, tidy, unitOfBasis, type RateBasis } from './rate-basis.ts';
 import { dimensionText, findUnit, unitConstants, type Unit } from './units.ts';
 
 /** Reads a unit or throws an error that names it. */
@@ -51,7 +51,7 @@ export function siConstants(unit: Unit, omittedMolecule: number): string | undef
 }
 
 function order(basis: RateBasis): number {
-  return Number((basis.gasConcentration + basis.gasPressure).toPrecision(12));
+  return tidy(basis.gasConcentration + basis.gasPressure);
 }
 
 function compatible(a: RateBasis, b: RateBasis): boolean {
@@ -117,7 +117,7 @@ function walk(input: RateConstantInput, value: number, u: number | null, from: U
   derivation.push(
     operationLine(`SI unit of ${from.symbol}`, { value, unit: from.symbol }, current, references.sp811, { constant: siConstants(from, bases.from.omittedMolecule) }),
   );
-  const toConcentration = Number((bases.to.gasConcentration - bases.from.gasConcentration).toPrecision(12));
+  const toConcentration = tidy(bases.to.gasConcentration - bases.from.gasConcentration);
   if (toConcentration !== 0) {
     if (input.temperatureK == null) {
       throw new KineticsError('temperatureK', `temperatureK is needed to convert ${from.symbol} to ${to.symbol}: k_c = k_p (RT)^g`, 'missing-input');
@@ -137,7 +137,7 @@ function walk(input: RateConstantInput, value: number, u: number | null, from: U
     );
     current = next;
   }
-  const toSite = Number((bases.from.areal - bases.to.areal).toPrecision(12));
+  const toSite = tidy(bases.from.areal - bases.to.areal);
   if (toSite !== 0) {
     if (input.siteDensityPerM2 == null) {
       throw new KineticsError('siteDensityPerM2', `siteDensityPerM2 is needed to convert ${from.symbol} to ${to.symbol}`, 'missing-input');

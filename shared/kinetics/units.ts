@@ -92,14 +92,23 @@ export function findUnit(text: string): Unit | null {
 
 const siSymbols: Record<DimensionName, string> = { length: 'm', amount: 'mol', mass: 'kg', pressure: 'Pa', coverage: 'ML', energy: 'J', temperature: 'K', time: 's' };
 
+const siUnits = new Map<string, Unit>();
+
 /** The SI unit of a dimension, in the one printed form. */
 export function siUnit(dimension: Partial<Record<DimensionName, number>>): Unit {
+  let key = '';
+  for (const name of dimensionNames) key += `${dimension[name] ?? 0} `;
+  const known = siUnits.get(key);
+  if (known !== undefined) return known;
   const factors: UnitFactor[] = [];
   for (const name of dimensionNames) {
     const exponent = dimension[name] ?? 0;
     if (exponent !== 0) factors.push({ token: findToken(siSymbols[name]) as UnitToken, exponent });
   }
-  return buildUnit(factors);
+  const unit = buildUnit(factors);
+  if (siUnits.size > 2000) siUnits.clear();
+  siUnits.set(key, unit);
+  return unit;
 }
 
 /** True when two units differ by a number only. */
@@ -120,6 +129,8 @@ export function dimensionText(dimension: Dimension): string {
   return parts.length === 0 ? 'dimensionless' : parts.join(' ');
 }
 
+const constantsOf = new WeakMap<Unit, string>();
+
 function factorConstant({ token }: UnitFactor): string[] {
   if (token.particle || token.site) return [`N_A = ${quantityText(N_A)} mol-1`];
   if (token.numerator === token.denominator) return [];
@@ -135,7 +146,11 @@ function factorConstant({ token }: UnitFactor): string[] {
  * @example unitConstants(findUnit('Torr-1 min-1')) // '1 Torr = 101325/760 Pa, 1 min = 60 s'
  */
 export function unitConstants(unit: Unit): string | undefined {
-  return [...new Set(unit.factors.flatMap(factorConstant))].join(', ') || undefined;
+  const known = constantsOf.get(unit);
+  if (known !== undefined) return known || undefined;
+  const text = [...new Set(unit.factors.flatMap(factorConstant))].join(', ');
+  constantsOf.set(unit, text);
+  return text || undefined;
 }
 
 /** Kinds of unit that a picker offers. */
