@@ -1,12 +1,15 @@
 import { arrheniusCalculator } from './arrhenius.ts';
 import type { Calculator } from './calculator.ts';
 import { changeBasisCalculator } from './change-basis.ts';
+import { collisionCalculator } from './collision.ts';
 import { energyCalculator } from './energy.ts';
 import { eyringCalculator } from './eyring.ts';
 import { fitCalculator } from './fit.ts';
 import { kieCalculator } from './kie.ts';
 import { parseStepCalculator } from './parse-step.ts';
 import { parseValueCalculator } from './parse-value.ts';
+import { profileCalculator } from './profile.ts';
+import { poolCalculator } from './pool.ts';
 import { rateConstantCalculator } from './rate-constant.ts';
 import { siteDensityCalculator } from './site-density.ts';
 import { twoTemperatureCalculator } from './two-temperature.ts';
@@ -24,8 +27,10 @@ export const calculators: readonly Calculator[] = [
   twoTemperatureCalculator,
   eyringCalculator,
   fitCalculator,
+  collisionCalculator,
   kieCalculator,
   tunnellingCalculator,
   siteDensityCalculator,
   uncertaintyCalculator,
+  profileCalculator,
 ];
