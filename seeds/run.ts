@@ -14,9 +14,10 @@ export const demonstrationFolder = 'seeds/demo';
 const begun = 'demonstration-begun';
 const loaded = 'demonstration-loaded';
 
-/** Loads the vocabulary; running it again changes nothing. */
+/** Loads the vocabulary, and makes search rows anew where an older version of the product made them; running it again changes nothing. */
 export async function loadVocabulary(services: Services): Promise<void> {
   await services.vocabulary.load(readVocabulary().map(({ kind, code, label, synonyms, data }) => ({ list: kind, code, label, synonyms, data: data as Record<string, unknown> })));
+  await services.search.renew();
 }
 
 /** Whether the demonstration data is in the database; `broken` when a load was cut off. */

@@ -3,12 +3,13 @@ import { term } from '#shared/contracts/vocabulary.ts';
 import { methodClasses, structures } from '#shared/domain/kinds.ts';
 import facets from './facets.json' with { type: 'json' };
 import metals from './metals.json' with { type: 'json' };
+import species from './species.json' with { type: 'json' };
 import stepClasses from './step-classes.json' with { type: 'json' };
 import supports from './supports.json' with { type: 'json' };
 import techniques from './techniques.json' with { type: 'json' };
 
 /** The controlled lists that a fresh deployment begins with; facts of the trade, nothing invented. */
-export const vocabularyKinds = ['metal', 'facet', 'technique', 'support', 'step-class'] as const;
+export const vocabularyKinds = ['metal', 'facet', 'technique', 'support', 'step-class', 'species'] as const;
 
 /** One of `vocabularyKinds`. */
 export type VocabularyKind = (typeof vocabularyKinds)[number];
@@ -24,9 +25,10 @@ const dataOf = {
   facet: sourced.extend({
     structures: z.array(z.enum(structures)).min(1), surface: z.enum(['flat', 'open', 'stepped', 'kinked']), idealAtomDensity: z.boolean(),
   }),
-  technique: sourced.extend({ class: z.enum(methodClasses), family: z.string().optional(), functional: z.string().optional() }),
+  technique: sourced.extend({ class: z.enum(methodClasses), family: z.string().min(1), functional: z.string().optional() }),
   support: sourced,
   'step-class': sourced,
+  species: sourced.extend({ also: z.array(z.string().min(1)).optional() }),
 } as const;
 
 function listOf<K extends VocabularyKind>(kind: K) {
@@ -43,7 +45,7 @@ export type MetalTerm = z.infer<typeof term> & { kind: 'metal'; data: z.infer<ty
 export type VocabularyTerm = z.infer<typeof term> & { kind: VocabularyKind };
 
 /**
- * Reads the five lists and holds each against its schema.
+ * Reads the six lists and holds each against its schema.
  *
  * @throws ZodError naming the list's term and field that is not right
  * @example readVocabulary().filter((word) => word.kind === 'metal')[0]?.code // 'Ru'
@@ -55,6 +57,7 @@ export function readVocabulary(): VocabularyTerm[] {
     ...listOf('technique').parse(techniques).terms,
     ...listOf('support').parse(supports).terms,
     ...listOf('step-class').parse(stepClasses).terms,
+    ...listOf('species').parse(species).terms,
   ];
 }
 

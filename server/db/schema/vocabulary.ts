@@ -4,7 +4,7 @@ import { sampleTypes, siteTypes, structures } from '../../../shared/domain/kinds
 import { oneOf } from './checks.ts';
 import { code, id, instant, real } from './columns.ts';
 
-export const termLists = ['metal', 'facet', 'technique', 'support', 'step-class'] as const;
+export const termLists = ['metal', 'facet', 'technique', 'support', 'step-class', 'species'] as const;
 
 export const vocabularyTerms = pgTable('vocabulary_terms', {
   list: code('list').notNull(),

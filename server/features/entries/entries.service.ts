@@ -18,7 +18,7 @@ import { maySee } from './entries.policy.ts';
 import { actionsFor, presentAssessed, presentDraft, presentRecord, presentStep, revisionTag } from './entries.present.ts';
 import * as repository from './entries.repository.ts';
 import type { EntryHead, RevisionRow } from './entries.repository.ts';
-import { unlistSearchRow } from './search-rows.repository.ts';
+import { makeSearchRows } from './make-search-rows.service.ts';
 import { freezeRevision } from './freeze.ts';
 import { checkAgainstStore } from './store-checks.ts';
 import { describeStanding } from './standing.ts';
@@ -209,6 +209,7 @@ export function createEntriesService(context: Context, sources: SourcesService) 
         const submissionId = await repository.insertSubmission(tx, {
           entryId: head.id, revisionId: revision.id, round, previousId: last?.submission.id ?? null, submittedBy: actor.userId, submittedAt: at,
         });
+        await makeSearchRows(tx, [revision.id]);
         await appendEvents(tx, [{ at, actorId: actor.userId, action: 'revision.submitted', subjectType: 'revision', subjectId: revision.id, payload: { submission: submissionId, round, input: row.inputHash } }]);
         return row;
       });
@@ -242,7 +243,6 @@ export function createEntriesService(context: Context, sources: SourcesService) 
       const at = clock();
       await db.transaction(async (tx) => {
         if (!await repository.updateRevision(tx, revision, { state: 'retracted', notice: reason, changedAt: at, endedAt: at })) throw stale(revision);
-        await unlistSearchRow(tx, revision.id);
         await appendEvents(tx, [{ at, actorId: actor.userId, action: 'revision.retracted', subjectType: 'revision', subjectId: revision.id, payload: { version: revision.version } }]);
       });
       return { accession: head.accession, state: 'retracted' };

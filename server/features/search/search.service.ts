@@ -2,6 +2,7 @@ import type * as z from 'zod';
 import type { Actor } from '#server/actor.ts';
 import type { Context } from '#server/context.ts';
 import { readCursor, writeCursor } from '#server/db/keyset.ts';
+import { renewSearchRows } from '#server/features/entries/make-search-rows.service.ts';
 import type { EntryRecordsService } from '#server/features/entries/records.service.ts';
 import { Refusal } from '#server/refusal.ts';
 import type { EntryFilter, EntrySearch, FilterCounts, searchEntries, SearchSummary } from '#shared/contracts/entry-search.ts';
@@ -58,6 +59,9 @@ export function createSearchService({ db }: Context, records: EntryRecordsServic
   }
 
   return {
+    /** Makes search rows anew that an older version of the product made, and gives how many. */
+    renew: (): Promise<number> => renewSearchRows(db),
+
     async search(actor: Actor, { T, sort, counts: withCounts, limit, cursor, ...asked }: EntrySearch): Promise<z.infer<NonNullable<typeof searchEntries.response>>> {
       const filter = toSearchFilter(asked);
       const conditions = repository.filterConditions(filter);

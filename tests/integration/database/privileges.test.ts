@@ -80,7 +80,8 @@ describe('what the database refuses the application', () => {
         if (may === 'all' || may?.includes(column)) continue;
         wanted.push(`${table}.${column}`);
         const code = await app.query(`update ${table} set "${column}" = null where false`).then(() => 'done', (error: pg.DatabaseError) => error.code);
-        if (code === '42501') refused.push(`${table}.${column}`);
+        // 428C9: a column that the database computes, which nobody can set.
+        if (code === '42501' || code === '428C9') refused.push(`${table}.${column}`);
       }
     }
     expect(wanted.length).toBeGreaterThan(100);
