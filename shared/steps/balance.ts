@@ -20,10 +20,15 @@ function amount(value: number): string {
   return String(Number(value.toPrecision(6)));
 }
 
+/** Elements and isotopes by the letters people write. */
+function nameOf(what: string): string {
+  return what === '2H' ? 'D' : what === '3H' ? 'T' : what;
+}
+
 function sentence(what: string, left: number, right: number): string {
   const more = Math.abs(right - left);
   const side = right > left ? 'right' : 'left';
-  const name = what === 'site' ? (more === 1 ? 'site' : 'sites') : what === 'charge' ? 'of charge' : what;
+  const name = what === 'site' ? (more === 1 ? 'site' : 'sites') : what === 'charge' ? 'of charge' : nameOf(what);
   return `${amount(more)} ${name} more on the ${side} (${amount(left)} left, ${amount(right)} right)`;
 }
 

@@ -1,4 +1,5 @@
 import { bondBetween } from './bonds.ts';
+import { netSides } from './net-sides.ts';
 import type { Species, Term } from './species.ts';
 
 /** Classes of elementary steps; `overall` for a reaction that is none. */
@@ -96,6 +97,11 @@ function exchange(left: [string, string], right: [string, string]): Classificati
   return result(left[0] === left[1] || right[0] === right[1] ? 'disproportionation' : 'association');
 }
 
+/** Sites under adsorbed species: a change of it is a change of how a species is bound. */
+function sitesHeld(terms: readonly Term[]): number {
+  return terms.filter(({ species }) => species.phase === 'adsorbed').reduce((sum, { coefficient, species }) => sum + coefficient * species.sites, 0);
+}
+
 /** Formulas with one hydrogen less at one place. */
 function withoutHydrogen(formula: string): string[] {
   const list: string[] = [];
@@ -107,9 +113,9 @@ function withoutHydrogen(formula: string): string[] {
   return list;
 }
 
-function onSurface(reactants: string[], products: string[]): Classification {
+function onSurface(reactants: string[], products: string[], sitesKept = true): Classification {
   const [left, right] = withoutCommon(reactants, products);
-  if (left.length === 0 && right.length === 0) return result(reactants.length > 1 ? 'overall' : 'diffusion');
+  if (left.length === 0 && right.length === 0) return result(reactants.length > 1 ? 'overall' : sitesKept ? 'diffusion' : 'isomerisation');
   if (left.length === 1 && right.length === 1) return result('isomerisation');
   if (left.length === 1 && right.length === 2) {
     const broken = bondBetween(left[0] as string, right[0] as string, right[1] as string);
@@ -142,7 +148,8 @@ function ontoSurface(gas: string[], reactants: string[], products: string[], who
 }
 
 /** Reads the class of a step from its equation, in the direction typed. */
-export function classify(reactants: readonly Term[], products: readonly Term[]): Classification {
+export function classify(typedReactants: readonly Term[], typedProducts: readonly Term[]): Classification {
+  const [reactants, products] = netSides(typedReactants, typedProducts);
   const terms = [...reactants, ...products];
   if (terms.every(({ species }) => species.phase === 'gas') || terms.some(({ species }) => species.formula === 'e')) return result('overall');
   const gasIn = molecules(reactants, 'gas');
@@ -150,7 +157,7 @@ export function classify(reactants: readonly Term[], products: readonly Term[]):
   const adsorbedIn = molecules(reactants, 'adsorbed');
   const adsorbedOut = molecules(products, 'adsorbed');
   const whole = terms.every(({ coefficient }) => Number.isInteger(coefficient));
-  if (gasIn.length === 0 && gasOut.length === 0) return onSurface(adsorbedIn, adsorbedOut);
+  if (gasIn.length === 0 && gasOut.length === 0) return onSurface(adsorbedIn, adsorbedOut, sitesHeld(reactants) === sitesHeld(products));
   if (gasOut.length === 0) return ontoSurface(gasIn, adsorbedIn, adsorbedOut, whole);
   if (gasIn.length === 0) return fromSurface(gasOut, adsorbedIn, adsorbedOut, whole);
   if (gasIn.length !== 1 || gasOut.length !== 1 || adsorbedIn.length === 0) return result('overall');

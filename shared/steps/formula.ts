@@ -75,6 +75,11 @@ class Reader {
       this.at += 1;
       return { element: null, mass: null, count: this.count(), inner };
     }
+    const alone = this.take(/\[([A-Z][a-z]?)\]/y);
+    if (alone) {
+      const element = this.known(alone[1] as string, 1);
+      return element === null ? null : { element, mass: null, count: this.count(), inner: [] };
+    }
     const labelled = this.take(/\[\^?(\d{1,3})([A-Z][a-z]?)(\d{0,3})\]/y) ?? this.take(/\^\{?(\d{1,3})\}?([A-Z][a-z]?)/y);
     if (labelled) {
       const element = this.known(labelled[2] as string, labelled[0].endsWith(']') ? 1 : 0);
@@ -144,6 +149,8 @@ const otherSpellings: Record<string, string> = {
   HCO: 'CHO', OCH: 'CHO', HOC: 'COH', OCO: 'CO2', CHOO: 'HCOO', OCHO: 'HCOO', HCO2: 'HCOO', HOCO: 'COOH', OCOH: 'COOH', CO2H: 'COOH', HNC: 'CNH', NCH: 'HCN', OCN: 'NCO', HOO: 'OOH', HO2: 'OOH',
   NNH: 'N2H', HNN: 'N2H', HN2: 'N2H', NHNH: 'N2H2', HNNH: 'N2H2', NH2NH2: 'N2H4', H2NNH2: 'N2H4', NHNH2: 'N2H3', NH2NH: 'N2H3', H2CO: 'CH2O', HCHO: 'CH2O', OCH2: 'CH2O', H2COH: 'CH2OH', HOCH2: 'CH2OH',
   H3CO: 'CH3O', OCH3: 'CH3O', H3COH: 'CH3OH', HOCH3: 'CH3OH', CH3CH3: 'C2H6', H3CCH3: 'C2H6', CH2CH2: 'C2H4', H2CCH2: 'C2H4', CHCH: 'C2H2', HCCH: 'C2H2', CH3CH2: 'C2H5', CH2CH3: 'C2H5', ON: 'NO', ONO: 'NO2', NNO: 'N2O', HON: 'NOH', ONH: 'HNO',
+  HCOH: 'CHOH', HOCH: 'CHOH', OOCH: 'HCOO', CHOOH: 'HCOOH', HCO2H: 'HCOOH', HOOC: 'COOH', HOOH: 'H2O2', HONO: 'HNO2', H2NN: 'NNH2', NH2N: 'NNH2', HNNH2: 'N2H3', H2NNH: 'N2H3', H2NOH: 'NH2OH', HONH2: 'NH2OH', HNOH: 'NHOH', HONH: 'NHOH', H2CN: 'CH2N', HCNH: 'CHNH',
+  H2CCH: 'CHCH2', CH2CH: 'CHCH2', H3CC: 'CCH3', CH3C: 'CCH3', H2CC: 'CCH2', CH2C: 'CCH2', HCC: 'CCH', C2H: 'CCH', C2H5OH: 'CH3CH2OH', C2H5O: 'CH3CH2O', CH3CO2: 'CH3COO', CH3CO2H: 'CH3COOH', H3CCO: 'CH3CO',
 };
 
 function single(element: string, count: number): string {
@@ -188,6 +195,11 @@ function labelledSpelling(formula: string, isotopes: Record<string, number>): st
     .join('');
 }
 
+/** Cobalt, nobelium and holmium are printed in brackets: without them they are taken for slips of CO, NO and OH. */
+function markSlips(formula: string): string {
+  return formula.replace(/(?<!\[)(?:Co|No|Ho)/g, '[$&]');
+}
+
 const prefixPattern = /^(?:cis|trans|iso|sec|tert|anti|syn|n|i|t)-/;
 
 /**
@@ -206,8 +218,11 @@ export function readFormula(text: string): Formula | FormulaFault {
   const composition: Record<string, number> = {};
   const isotopes: Record<string, number> = {};
   countAtoms(pieces, 1, composition, isotopes);
+  const tritium = text.slice(prefix.length).search(/T(?![a-z])/);
+  if (tritium >= 0 && Object.keys(composition).some((element) => !['H', 'C', 'N', 'O', 'S'].includes(element))) return { at: prefix.length + Math.max(0, tritium - 1), expected: 'an element symbol (T is tritium)' };
   const typed = print(merge(pieces, false));
   const formula = prefix + oneSpelling(typed, composition);
   const labelled = Object.keys(isotopes).length > 0;
-  return { formula, spelling: labelled ? (labelledSpelling(formula, isotopes) ?? prefix + print(merge(pieces, true))) : formula, composition, isotopes };
+  const spelling = labelled ? (labelledSpelling(formula, isotopes) ?? prefix + print(merge(pieces, true))) : formula;
+  return { formula: markSlips(formula), spelling: markSlips(spelling), composition, isotopes };
 }

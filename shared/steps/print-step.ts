@@ -1,3 +1,4 @@
+import { isNuclide } from './nuclides.ts';
 import type { Species, Term } from './species.ts';
 
 /** Writes a coefficient: nothing for 1, a fraction with a small denominator, else the number; a fraction is followed by a space. */
@@ -24,9 +25,16 @@ export function printSpecies(species: Species): string {
   return `${species.spelling}${printCharge(species.charge)}${'*'.repeat(species.sites)}${site}`;
 }
 
+/** Writes a coefficient before a species; with a blank where together they would read as a nuclide: `15 N*`. */
+export function printCounted(coefficient: number, name: string): string {
+  const printed = printCoefficient(coefficient);
+  const symbol = /^[A-Z][a-z]?/.exec(name)?.[0] ?? '';
+  return isNuclide(`${printed}${symbol}`) ? `${printed} ${name}` : `${printed}${name}`;
+}
+
 /** Writes a term in ASCII: `2N*`, `1/2 N2`. */
 export function printTerm(term: Term): string {
-  return `${printCoefficient(term.coefficient)}${printSpecies(term.species)}`;
+  return printCounted(term.coefficient, printSpecies(term.species));
 }
 
 /** Writes one side, in the order of its terms. */

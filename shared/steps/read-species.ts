@@ -1,90 +1,160 @@
-import { readFormula } from './formula.ts';
+import { takeCharge } from './charge.ts';
+import { takeCoefficient } from './coefficient.ts';
+import { readFormula, type Formula, type FormulaFault } from './formula.ts';
+import { raiseMassNumbers } from './nuclides.ts';
+import { placeSpecies, type Placement } from './placement.ts';
+import type { PlainText } from './plain-text.ts';
+import type { Choices } from './readings.ts';
+import { starSites, type SiteMarks } from './site-marks.ts';
 import type { Species, Term } from './species.ts';
 import { StepError } from './step-error.ts';
-import type { Slice } from './step-text.ts';
 
-const siteWords = 'fcc|hcp|top|atop|ontop|bridge|br|hollow|fourfold|4f|3f|long|short|edge|step|kink|terrace|corner|defect|B5|f4|s|t|b|h|u|l|subsurface|sub|upper|lower';
-const coefficientPattern = /^(\d+(?:\.\d+)?)(?:\s?\/\s?(\d+))?\s*(?=\D|$)/;
+/** How one equation is read: its marks of the surface, and its decisions on what can be read in two ways. */
+export interface TermContext {
+  marks: SiteMarks;
+  /** Whether some term has a bare `a` for adsorbed, as in `COa`. */
+  bareA: boolean;
+  choices: Choices;
+}
 
-function fail(slice: Slice, expected: string, offset = 0): StepError {
+function fail(slice: PlainText, expected: string, offset = 0): StepError {
   return new StepError('unreadable', `cannot read ${JSON.stringify(slice.text)}: expected ${expected}`, { position: slice.positions[Math.min(Math.max(0, offset), slice.text.length)] });
 }
+
+/** Names that a free site bears because it is free. */
+const vacant = new Set(['v', 'vac', 'vacant', 'free', 'empty', '0']);
 
 function freeSite(siteType: string | undefined): Species {
   return { formula: '*', spelling: '*', composition: {}, phase: 'free-site', sites: 1, ...(siteType ? { siteType } : {}) };
 }
 
-interface Placement {
-  core: string;
-  phase: 'gas' | 'adsorbed' | null;
-  sites: number;
-  siteType?: string;
+function isFault(formula: Formula | FormulaFault): formula is FormulaFault {
+  return 'at' in formula;
 }
 
-/** Takes the marks of phase, sites and site type off a species. */
-function place(text: string): Placement {
-  const stars = new RegExp(String.raw`^(.*?)(\*+)(?:_\{?([A-Za-z0-9][A-Za-z0-9-]*)\}?|\{([A-Za-z0-9][A-Za-z0-9-]*)\}|\(([A-Za-z0-9][A-Za-z0-9-]*)\))?$`).exec(text);
-  if (stars) {
-    const siteType = stars[3] ?? stars[4] ?? stars[5];
-    return { core: stars[1] as string, phase: 'adsorbed', sites: (stars[2] as string).length, ...(siteType ? { siteType } : {}) };
-  }
-  const prefix = new RegExp(String.raw`^(\*+)([^*]+?)(?:_\{?(${siteWords})\}?)?$`).exec(text);
-  if (prefix && !/^[_({]/.test(prefix[2] as string)) return { core: prefix[2] as string, phase: 'adsorbed', sites: (prefix[1] as string).length, ...(prefix[3] ? { siteType: prefix[3] } : {}) };
-  const ads = /^(.*?)\s?(?:\((?:ads|ad|a)(?:[,; ]\s?([A-Za-z0-9-]+))?\)|[_,]\s?\{?(?:ads|ad|a)(?:[,; ]\s?([A-Za-z0-9-]+))?\}?)$/i.exec(text);
-  if (ads) {
-    const siteType = ads[2] ?? ads[3];
-    return { core: ads[1] as string, phase: 'adsorbed', sites: 1, ...(siteType ? { siteType } : {}) };
-  }
-  const gas = /^(.*?)\s?(?:\((?:g|gas)\)|_\{?(?:g|gas)\}?)$/i.exec(text);
-  if (gas) return { core: gas[1] as string, phase: 'gas', sites: 0 };
-  const named = new RegExp(String.raw`^(.*?)_\{?(${siteWords})\}?$`).exec(text);
-  if (named) return { core: named[1] as string, phase: 'adsorbed', sites: 1, siteType: named[2] };
-  return { core: text, phase: null, sites: 0 };
+/** Species that a slip of the shift key turns into an element: Co for CO, No for NO, Ho for OH. */
+const slips = new Set(['CO', 'CO2', 'CO3', 'HCO', 'COH', 'CHO', 'COOH', 'HCOO', 'NO', 'NO2', 'NO3', 'HNO', 'NOH', 'HO', 'HO2', 'HOO', 'HOCO']);
+const elementNames: Record<string, string> = { Co: 'cobalt', No: 'nobelium', Ho: 'holmium' };
+
+function refuseSlip(slice: PlainText, core: string): void {
+  const symbol = /^[^[]*?(Co|No|Ho)(?![\]])/.exec(core)?.[1];
+  if (!symbol || !slips.has(core.toUpperCase()) || !slips.has(core.replace(symbol, symbol.toUpperCase()))) return;
+  const readings = [slice.text.replace(symbol, symbol.toUpperCase()), slice.text.replace(symbol, `[${symbol}]`)];
+  throw new StepError('ambiguous', `${JSON.stringify(slice.text)} can be ${core.toUpperCase()} or hold ${elementNames[symbol]}: write ${readings[0]} or ${readings[1]}`, { position: slice.positions[0], readings });
 }
 
-function takeCharge(text: string): { core: string; charge: number } {
-  const written = /^(.*?)\^\{?(\d*)([+-])\}?$/.exec(text);
-  if (written) return { core: written[1] as string, charge: (written[3] === '+' ? 1 : -1) * (written[2] ? Number(written[2]) : 1) };
-  const bare = /^(.*[A-Za-z0-9)\]])([+-])$/.exec(text);
-  return bare ? { core: bare[1] as string, charge: bare[2] === '+' ? 1 : -1 } : { core: text, charge: 0 };
+/** What was probably meant by letters that are no formula. */
+function hint(core: string): string {
+  if (/^[a-z]+\d*$/.test(core)) {
+    const upper = core.toUpperCase();
+    const capital = core.charAt(0).toUpperCase() + core.slice(1);
+    const likely = [...new Set([upper, capital])].filter((text) => !isFault(readFormula(text)));
+    if (likely.length > 0) return `; in capitals it is ${likely.join(' or ')}`;
+  }
+  const metal = core.charAt(0) + core.slice(1).toLowerCase();
+  return /^[A-Z]{2}$/.test(core) && !isFault(readFormula(metal)) ? `; the element is ${metal}` : '';
+}
+
+/** Hapticity, denticity and mode of binding written before a formula: `η2-C2H4`, `κ2-HCOO`, `di-σ-C2H4`, `π-C2H4`, `μ3-CO`. */
+function takeBinding(core: string): { core: string; sites: number | null; siteType: string | null } {
+  const count = /^(?:η|κ|eta|kappa)\s?\^?\{?(\d)\}?[-\s(]+/.exec(core);
+  if (count) return { core: core.slice(count[0].length).replace(/\)$/, core.includes('(') && count[0].endsWith('(') ? '' : ')'), sites: Number(count[1]), siteType: null };
+  const sigma = /^(?:di-?\s?(?:σ|sigma))-?/.exec(core);
+  if (sigma) return { core: core.slice(sigma[0].length), sites: 2, siteType: null };
+  const dentate = /^(mono|bi)dentate[-\s]/.exec(core);
+  if (dentate) return { core: core.slice(dentate[0].length), sites: dentate[1] === 'bi' ? 2 : 1, siteType: null };
+  const pi = /^(?:π|pi)-/.exec(core);
+  if (pi) return { core: core.slice(pi[0].length), sites: null, siteType: 'pi' };
+  const bridging = /^μ\s?\^?\d?-/.exec(core);
+  return bridging ? { core: core.slice(bridging[0].length), sites: null, siteType: null } : { core, sites: null, siteType: null };
+}
+
+/** Brackets around a whole formula hold nothing but it: `(CO)*`, `[NO]^-`; those of a nuclide or of one element stay. */
+function withoutBrackets(core: string): string {
+  if (/^\[[A-Z][a-z]\]$/.test(core)) return core;
+  const inner = /^\(([^()]+)\)$/.exec(core)?.[1] ?? /^\[((?!\^?\d+[A-Z][a-z]?\d*\])[^[\]]+)\]$/.exec(core)?.[1];
+  return inner ?? core;
+}
+
+interface Bare {
+  formula: Formula | FormulaFault;
+  phase: Placement['phase'];
+}
+
+const looseTail = /^(.*[A-Za-z0-9)\]])(ads|ad|a|gas|g)$/;
+
+/** Whether a term ends in an `a` that can only mean adsorbed. */
+export function endsInBareA(text: string): boolean {
+  const tail = /^([A-Z][A-Za-z0-9]*)a$/.exec(text);
+  return tail !== null && isFault(readFormula(text)) && !isFault(readFormula(tail[1] as string));
+}
+
+/** Reads a formula that bears no mark; `COads`, `COa` and `N2g` are read where no element makes another sense of the letters. */
+function readBare(core: string, { choices, bareA }: TermContext): Bare {
+  const formula = readFormula(core);
+  const tail = looseTail.exec(core);
+  if (!tail) return { formula, phase: null };
+  const rest = readFormula(tail[1] as string);
+  if (isFault(rest)) return { formula, phase: null };
+  const placed: Bare = { formula: rest, phase: (tail[2] as string).startsWith('g') ? 'gas' : 'adsorbed' };
+  if (isFault(formula)) return placed;
+  return tail[2] === 'a' && bareA && choices.pick('letter-a', ['adsorbed', 'element']) === 'adsorbed' ? placed : { formula, phase: null };
+}
+
+function refuseFormula(slice: PlainText, placement: Placement, core: string, offset: number, fault: FormulaFault): StepError {
+  const at = offset + placement.at + Math.min(fault.at, placement.core.length);
+  const condensed = /^(.*?)\s?[_,]?[({]?(aq|l|liq|s)[)}]?$/i.exec(core);
+  if (placement.core.includes('*')) return fail(slice, 'one mark of adsorption, before or after the formula', at);
+  if (condensed && /[({_,]/.test(core) && condensed[2]?.toLowerCase() === 's') return fail(slice, `${fault.expected}; write ${condensed[1]}* for an adsorbed species`, at);
+  if (condensed && /[({_,]/.test(core)) return fail(slice, `a gas, an adsorbed species or a free site; leave (${condensed[2]}) out: ${condensed[1]}`, at);
+  return fail(slice, `${fault.expected}${hint(core)}`, at);
 }
 
 /** Reads one term: coefficient, species, phase, sites. Throws a `StepError` with its position. */
-export function readTerm(slice: Slice): Term {
-  let text = slice.text;
-  let coefficient = 1;
-  const match = coefficientPattern.exec(text);
-  if (match) {
-    coefficient = Number(match[1]) / Number(match[2] ?? 1);
-    if (!(coefficient > 0) || !Number.isFinite(coefficient) || coefficient > 1000) throw fail(slice, 'a coefficient above 0 and up to 1000');
-    text = text.slice(match[0].length);
-  }
-  const offset = slice.text.length - text.length;
-  if (text === '') throw fail(slice, 'a species after the coefficient', slice.text.length);
-  if (/^\[?\(?\*\)?\]?$/.test(text)) return { coefficient, species: freeSite(undefined) };
-  const placement = place(text);
-  if (/\s/.test(placement.core)) throw fail(slice, 'one species without spaces; put + between species', offset + placement.core.search(/\s/));
-  if (placement.core === '' && placement.phase === 'adsorbed' && text.includes('*')) {
-    return { coefficient: coefficient * placement.sites, species: freeSite(placement.siteType) };
-  }
-  if (placement.core === '') throw fail(slice, 'a formula', offset);
-  const { core, charge } = takeCharge(placement.core);
-  if (core === 'e' && charge === -1) return { coefficient, species: { formula: 'e', spelling: 'e', composition: {}, phase: 'gas', sites: 0, charge } };
-  const formula = readFormula(core);
-  if ('at' in formula) {
-    const star = placement.core.includes('*') ? 'one mark of adsorption, before or after the formula' : formula.expected;
-    const solid = /\(s\)$/i.test(text) ? `${formula.expected}; write ${core.replace(/\(s\)$/i, '')}* for an adsorbed species` : star;
-    throw fail(slice, solid, offset + formula.at);
-  }
+export function readTerm(slice: PlainText, context: TermContext): Term {
+  const { choices } = context;
+  const counted = takeCoefficient(slice, choices);
+  const { coefficient } = counted;
+  if (!(coefficient > 0) || !Number.isFinite(coefficient) || coefficient > 1000) throw fail(slice, 'a coefficient above 0 and up to 1000');
+  if (counted.rest.text === '') throw fail(slice, 'a species after the coefficient', slice.text.length);
+  const inner = /^[([{]([^()[\]{}]*\*[^()[\]{}]*)[)\]}]$/.exec(counted.rest.text)?.[1];
+  const rest = starSites(inner && inner !== '*' ? { text: inner, positions: counted.rest.positions.slice(1) } : counted.rest, context.marks);
+  const where = (offset: number): number => {
+    const position = rest.positions[Math.min(Math.max(0, offset), rest.text.length)] as number;
+    const found = slice.positions.findIndex((at) => at >= position);
+    return found < 0 ? slice.text.length : found;
+  };
+  const placement = placeSpecies(rest.text, choices, context.marks.numbered);
+  if (placement.fault) throw fail(slice, placement.fault);
+  const typed = placement.core.trim();
+  if (/\s/.test(typed)) throw fail(slice, 'one species without spaces; put + between species', where(placement.at + placement.core.search(/\S\s/) + 1));
+  if (typed === '' && placement.phase === 'adsorbed') return { coefficient: coefficient * placement.sites, species: freeSite(vacant.has(placement.siteType ?? '') ? undefined : placement.siteType) };
+  if (typed === '') throw fail(slice, 'a formula', where(0));
+  // A line before the asterisk is a bond to the surface or a charge.
+  const bonded = placement.phase === 'adsorbed' && /[A-Za-z0-9)\]][-=≡]$/.test(typed) && /[-=≡]\*/.test(rest.text) && (/[=≡]$/.test(typed) || choices.pick('line-before-asterisk', ['charge', 'bond']) === 'bond');
+  const { core: neutral, charge } = takeCharge(bonded ? typed.slice(0, -1) : typed, choices);
+  if (neutral === 'e' && charge === -1 && placement.phase !== 'adsorbed') return { coefficient, species: { formula: 'e', spelling: 'e', composition: {}, phase: 'gas', sites: 0, charge } };
+  const binding = takeBinding(neutral);
+  const core = raiseMassNumbers(withoutBrackets(binding.core.replace(/(?<=[A-Za-z0-9)\]])·$/, '')));
+  const bare: Bare = placement.phase === null && charge === 0 ? readBare(core, context) : { formula: readFormula(core), phase: null };
+  const { formula } = bare;
+  if (isFault(formula)) throw refuseFormula(slice, placement, core, where(placement.at) - placement.at, formula);
+  refuseSlip(slice, core);
+  const phase = placement.phase ?? bare.phase ?? (binding.sites ? 'adsorbed' : 'gas');
+  if (binding.sites && phase === 'gas') throw fail(slice, 'either an adsorbed species or a gas (g), not both');
+  // η2-C2H4* takes as many sites as it has asterisks or points of binding: the balance tells.
+  const asterisks = placement.phase === 'adsorbed' && rest.text.includes('*') ? placement.sites : null;
+  const sites = binding.sites === null || binding.sites === asterisks ? (asterisks ?? 1) : asterisks === null || choices.pick('points-of-binding', ['asterisks', 'number']) === 'number' ? binding.sites : asterisks;
+  const siteType = placement.siteType ?? binding.siteType ?? undefined;
   return {
     coefficient,
     species: {
       formula: formula.formula,
       spelling: formula.spelling,
       composition: formula.composition,
-      phase: placement.phase ?? 'gas',
-      sites: placement.sites,
-      ...(placement.siteType ? { siteType: placement.siteType } : {}),
+      phase,
+      sites: phase === 'gas' ? 0 : sites,
+      ...(siteType && phase === 'adsorbed' ? { siteType } : {}),
       ...(Object.keys(formula.isotopes).length > 0 ? { isotopes: formula.isotopes } : {}),
       ...(charge !== 0 ? { charge } : {}),
     },

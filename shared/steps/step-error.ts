@@ -1,5 +1,5 @@
 /** Codes of an elementary step that can't be taken. */
-export const stepErrorCodes = ['unreadable', 'no-arrow', 'empty-side', 'unbalanced', 'no-change'] as const;
+export const stepErrorCodes = ['unreadable', 'no-arrow', 'empty-side', 'ambiguous', 'unbalanced', 'no-change'] as const;
 
 /** One of `stepErrorCodes`. */
 export type StepErrorCode = (typeof stepErrorCodes)[number];
@@ -20,13 +20,16 @@ export class StepError extends Error {
   readonly imbalance?: Imbalance[];
   /** The equation with the missing free sites. */
   readonly suggestion?: string;
+  /** What an ambiguous text can mean, each in a spelling that means it alone. */
+  readonly readings?: string[];
 
-  constructor(code: StepErrorCode, message: string, detail: { position?: number; imbalance?: Imbalance[]; suggestion?: string } = {}) {
+  constructor(code: StepErrorCode, message: string, detail: { position?: number; imbalance?: Imbalance[]; suggestion?: string; readings?: string[] } = {}) {
     super(message);
     this.name = 'StepError';
     this.code = code;
     this.position = detail.position;
     this.imbalance = detail.imbalance;
     this.suggestion = detail.suggestion;
+    this.readings = detail.readings;
   }
 }

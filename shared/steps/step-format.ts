@@ -16,7 +16,7 @@ function formulaTokens(spelling: string): StepToken[] {
     if (last && last.kind === kind && kind === 'text') last.text += text;
     else tokens.push({ kind, text });
   };
-  for (const match of spelling.matchAll(/\[(\d+)([A-Z][a-z]?)\]|(\d+)|([^\d[\]]+)/g)) {
+  for (const match of spelling.matchAll(/\[(\d+)([A-Z][a-z]?)\]|(\d+)|(\[[A-Z][a-z]\]|[^\d[\]]+)/g)) {
     if (match[1]) {
       put('sup', match[1]);
       put('text', match[2] as string);
@@ -78,7 +78,7 @@ function spokenTerm({ coefficient, species }: Term): string {
   if (species.phase === 'free-site') return coefficient === 1 ? `a free${site} site` : `${count}free${site} sites`;
   if (species.formula === 'e') return `${count}${coefficient === 1 ? 'electron' : 'electrons'}`;
   const charge = species.charge ? ` ${Math.abs(species.charge) === 1 ? '' : `${Math.abs(species.charge)} `}${species.charge > 0 ? 'plus' : 'minus'}` : '';
-  const where = species.phase === 'gas' ? ' gas' : ` adsorbed${species.sites > 1 ? ` on ${numbers[species.sites] ?? species.sites} sites` : ''}${species.siteType ? ` at ${species.siteType}` : ''}`;
+  const where = species.phase === 'gas' ? (species.charge ? '' : ' gas') : ` adsorbed${species.sites > 1 ? ` on ${numbers[species.sites] ?? species.sites} sites` : ''}${species.siteType ? ` at ${species.siteType}` : ''}`;
   return `${count}${spokenFormula(species.spelling)}${charge}${where}`;
 }
 

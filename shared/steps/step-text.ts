@@ -1,137 +1,79 @@
+import { plainEquation } from './markup.ts';
+import { slicePlain, type PlainText } from './plain-text.ts';
+import { Choices } from './readings.ts';
 import { StepError } from './step-error.ts';
-
-/** A piece of the typed text with where it stands. */
-export interface Slice {
-  text: string;
-  /** Position in the typed text of each character, and of what follows the last. */
-  positions: number[];
-}
 
 /** The two sides of an equation, split into terms. */
 export interface SplitEquation {
-  left: Slice[];
-  right: Slice[];
+  left: PlainText[];
+  right: PlainText[];
 }
 
-const one: Record<string, string> = {
-  '∗': '*', '＊': '*', '⁎': '*', '✱': '*', '﹡': '*', '□': '*', '☐': '*', '◻': '*', '−': '-', '–': '-', '‐': '-', '\u2011': '-', '\u00a0': ' ', '\u2009': ' ', '\u202f': ' ', '\t': ' ', '\n': ' ', '\r': ' ', '⁺': '^+', '⁻': '^-',
-  '→': '->', '⟶': '->', '⇒': '->', '➔': '->', '➝': '->', '⟹': '->', '⇌': '<->', '⇋': '<->', '⇄': '<->', '⇆': '<->', '↔': '<->', '⟷': '<->', '⇔': '<->', '⟺': '<->', '←': '<-', '⟵': '<-', '½': '1/2 ', '¼': '1/4 ', '¾': '3/4 ', '⅓': '1/3 ', '⅔': '2/3 ', '＋': '+', '﹢': '+', '$': '', '\u200b': '', '\ufeff': '',
-};
-const lowered = '₀₁₂₃₄₅₆₇₈₉';
-const raised = '⁰¹²³⁴⁵⁶⁷⁸⁹';
-const raisedOf: Record<string, string> = { '⁰': '0', '¹': '1', '²': '2', '³': '3', '⁴': '4', '⁵': '5', '⁶': '6', '⁷': '7', '⁸': '8', '⁹': '9' };
+const arrow = /<[-=]+>{1,2}|<<=+>|[-=]+>|<-+|<=+/g;
 
-interface Mapped {
-  text: string;
-  positions: number[];
+/** Where the arrow stands. An equals sign is one when nothing else is; between letters it may be a double bond, so one with room about it goes first. */
+function findArrows(text: string): RegExpMatchArray[] {
+  const arrows = [...text.matchAll(arrow)];
+  if (arrows.length > 0) return arrows;
+  const equals = [...text.matchAll(/=+/g)];
+  const apart = equals.filter((match) => /\s/.test(text[match.index - 1] ?? ' ') && /\s/.test(text[match.index + match[0].length] ?? ' '));
+  return apart.length === 1 ? apart : equals;
 }
 
-function toPlain(original: string): Mapped {
-  let text = '';
-  const positions: number[] = [];
-  let inRaised = false;
-  const put = (characters: string, position: number): void => {
-    text += characters;
-    for (let i = 0; i < characters.length; i += 1) positions.push(position);
-  };
-  for (let i = 0; i < original.length; i += 1) {
-    const character = original[i] as string;
-    if (raised.includes(character)) {
-      put(inRaised ? (raisedOf[character] as string) : `^${raisedOf[character]}`, i);
-      inRaised = true;
-      continue;
-    }
-    if (inRaised && (character === '⁺' || character === '⁻')) put(character === '⁺' ? '+' : '-', i);
-    else if (lowered.includes(character)) put(String(lowered.indexOf(character)), i);
-    else if (character === '½' && /\d$/.test(text)) put('.5', i);
-    else put(one[character] ?? character, i);
-    inRaised = false;
-  }
-  positions.push(original.length);
-  return { text, positions };
-}
-
-/** Replaces matches and keeps the positions of what stays. */
-function replaceMapped(mapped: Mapped, pattern: RegExp, replacement: (match: RegExpExecArray) => string): Mapped {
-  let text = '';
-  const positions: number[] = [];
-  let last = 0;
-  const copy = (from: number, to: number): void => {
-    text += mapped.text.slice(from, to);
-    for (let i = from; i < to; i += 1) positions.push(mapped.positions[i] as number);
-  };
-  for (const match of mapped.text.matchAll(pattern)) {
-    copy(last, match.index);
-    const added = replacement(match as unknown as RegExpExecArray);
-    text += added;
-    for (let i = 0; i < added.length; i += 1) positions.push(mapped.positions[match.index] as number);
-    last = match.index + match[0].length;
-  }
-  copy(last, mapped.text.length);
-  positions.push(mapped.positions.at(-1) as number);
-  return { text, positions };
-}
-
-const commands: [RegExp, string][] = [
-  [/\\(?:rightleftharpoons|leftrightarrows?|leftrightharpoons)(?![a-z])/g, '<->'],
-  [/\\(?:long)?(?:rightarrow|to)(?![a-z])/g, '->'],
-  [/\\(?:ast|star)(?![a-z])/g, '*'],
-];
-
-function clean(original: string): Mapped {
-  let mapped = toPlain(original);
-  for (const [pattern, text] of commands) mapped = replaceMapped(mapped, pattern, () => text);
-  mapped = replaceMapped(mapped, /\\(?:mathrm|text|ce)\{([^{}]*)\}/g, (match) => match[1] as string);
-  mapped = replaceMapped(mapped, /\^\{?\s?(\*+)\s?\}?/g, (match) => match[1] as string);
-  return replaceMapped(mapped, /_(?:(\d+)|\{(\d+)\})/g, (match) => (match[1] ?? match[2]) as string);
-}
-
-const arrow = /<[-=]+>|[-=]+>|<-+|<=+/g;
+/** A label before the equation, as tables have it: `R1:`, `(R12)`, `(3)`, `4)`. */
+const label = /^\s*(?:\(\s*R?\s?\d{1,3}[a-z]?\s*\)[.:]?|R\s?\d{1,3}[a-z]?\s*[.:)]|\d{1,3}[a-z]?\s*[:)])\s+(?=\S)/i;
 
 /** Splits an equation at its arrow and its plus signs. Throws a `StepError` when there is no arrow, more than one, or nothing on a side. */
-export function splitEquation(original: string): SplitEquation {
+export function splitEquation(original: string, choices: Choices = new Choices()): SplitEquation {
   if (original.length > 400) throw new StepError('unreadable', 'an equation has at most 400 characters', { position: 400 });
-  const mapped = clean(original);
-  let found = [...mapped.text.matchAll(arrow)];
-  if (found.length === 0) found = [...mapped.text.matchAll(/=+/g)];
+  const whole = plainEquation(original);
+  const before = label.exec(whole.text)?.[0] ?? '';
+  // (2) before an equation is its number, or the coefficient of the first species.
+  const start = /^\s*\(\d+\)\s/.test(before) && choices.pick('number-in-brackets', ['label', 'coefficient']) === 'coefficient' ? 0 : before.length;
+  const end = whole.text.length - (/[\s.,;]*$/.exec(whole.text)?.[0].length ?? 0);
+  const plain = start > 0 || end < whole.text.length ? { text: whole.text.slice(start, Math.max(start, end)), positions: whole.positions.slice(start) } : whole;
+  const found = findArrows(plain.text);
   const first = found[0];
   if (!first) throw new StepError('no-arrow', 'no arrow: write -> between reactants and products', { position: original.length });
   if (found.length > 1) {
-    throw new StepError('unreadable', 'more than one arrow: write one elementary step at a time', { position: mapped.positions[(found[1] as RegExpMatchArray).index as number] });
+    throw new StepError('unreadable', 'more than one arrow: write one elementary step at a time', { position: plain.positions[(found[1] as RegExpMatchArray).index as number] });
   }
   const at = first.index as number;
-  const left = splitSide(mapped, 0, at);
-  const right = splitSide(mapped, at + first[0].length, mapped.text.length);
+  const left = splitSide(plain, 0, at);
+  const right = splitSide(plain, at + first[0].length, plain.text.length);
   const backwards = first[0].startsWith('<') && !first[0].endsWith('>');
   return backwards ? { left: right, right: left } : { left, right };
 }
 
-/** A plus belongs to a charge when it is raised, or stands on a species and another plus, a bracket or the end follows. */
-function isCharge(text: string, at: number, end: number): boolean {
-  const before = text.slice(0, at);
-  if (/\^\{?\d*$/.test(before)) return true;
+/** A plus belongs to a charge when it is raised, or stands on a species and another plus, a phase or the end follows. */
+function isCharge(text: string, at: number, end: number, second: boolean): boolean {
+  if (/\^\{?\d*$/.test(text.slice(Math.max(0, at - 6), at))) return true;
+  const rest = text.slice(at + 1, end);
+  if (second) return /^\s*(?:\+|$)/.test(rest);
   const touches = at > 0 && /[A-Za-z0-9)\]]/.test(text[at - 1] as string);
-  return touches && /^\s*(?:\+|$|\((?:g|gas|aq|a|ads)\))/.test(text.slice(at + 1, end)) && !/^\s+\+?\s*$/.test(text.slice(at + 1, end));
+  return touches && /^\s*(?:\+|$|\((?:g|gas|aq|a|ads|ad)\))/.test(rest);
 }
 
-function splitSide(mapped: Mapped, start: number, end: number): Slice[] {
-  const slices: Slice[] = [];
+function splitSide(plain: PlainText, start: number, end: number): PlainText[] {
+  const slices: PlainText[] = [];
   let from = start;
   let depth = 0;
+  let charged = -2;
   const close = (to: number): void => {
-    const raw = mapped.text.slice(from, to);
-    const text = raw.trim();
-    const begin = from + raw.length - raw.trimStart().length;
-    if (text === '') throw new StepError('empty-side', 'a species is missing here', { position: mapped.positions[begin] });
-    slices.push({ text, positions: mapped.positions.slice(begin, begin + text.length + 1) });
+    const slice = slicePlain(plain, from, to);
+    if (slice.text === '') throw new StepError('empty-side', 'a species is missing here', { position: slice.positions[0] });
+    slices.push(slice);
   };
   for (let i = start; i < end; i += 1) {
-    const character = mapped.text[i];
-    if (character === '(' || character === '[') depth += 1;
-    else if (character === ')' || character === ']') depth = Math.max(0, depth - 1);
-    else if (character === '+' && depth === 0 && !isCharge(mapped.text, i, end)) {
-      close(i);
-      from = i + 1;
+    const character = plain.text[i] as string;
+    if ('([{'.includes(character)) depth += 1;
+    else if (')]}'.includes(character)) depth = Math.max(0, depth - 1);
+    else if (character === '+' && depth === 0) {
+      if (isCharge(plain.text, i, end, charged === i - 1)) charged = i;
+      else {
+        close(i);
+        from = i + 1;
+      }
     }
   }
   close(end);

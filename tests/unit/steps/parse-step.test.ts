@@ -166,7 +166,7 @@ describe('balance', () => {
   it.each([
     ['N2 + 2* -> N*', [{ what: 'N', by: -1 }, { what: 'site', by: -1 }], /1 N more on the left \(2 left, 1 right\); 1 site more on the left/],
     ['CO* + * -> C* + N*', [{ what: 'O', by: -1 }, { what: 'N', by: 1 }], /1 O more on the left \(1 left, 0 right\); 1 N more on the right/],
-    ['H2 + 2* -> 2D*', [{ what: '2H', by: 2 }], /2 2H more on the right/],
+    ['H2 + 2* -> 2D*', [{ what: '2H', by: 2 }], /2 D more on the right/],
     ['H^+ + * -> H*', [{ what: 'charge', by: -1 }], /1 of charge more on the left/],
     ['2NH3 -> N2 + 2H2', [{ what: 'H', by: -2 }], /2 H more on the left \(6 left, 4 right\)/],
   ])('says what is wrong with %s', (text, imbalance, message) => {

@@ -27,7 +27,7 @@ describe('words for a screen reader', () => {
     ['3/2 H2 + N* -> NH3 + *', 'three halves H2 gas and N adsorbed to N H3 gas and a free site'],
     ['[13C]O + * -> [13C]O*', '13 C O gas and a free site to 13 C O adsorbed'],
     ['C2H4 + 2* -> C2H4**', 'C2 H4 gas and two free sites to C2 H4 adsorbed on two sites'],
-    ['H^+ + e- + * -> H*', 'H plus gas and electron and a free site to H adsorbed'],
+    ['H^+ + e- + * -> H*', 'H plus and electron and a free site to H adsorbed'],
     ['O2* + 2e- -> O2^2-*', 'O2 adsorbed and two electrons to O2 2 minus adsorbed'],
     ['(CH3)2CO + * -> (CH3)2CO*', '(C H3)2 C O gas and a free site to (C H3)2 C O adsorbed'],
     ['12H* -> 6H2 + 12*', '12 H adsorbed to six H2 gas and 12 free sites'],
