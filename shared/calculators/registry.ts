@@ -32,5 +32,6 @@ export const calculators: readonly Calculator[] = [
   tunnellingCalculator,
   siteDensityCalculator,
   uncertaintyCalculator,
+  poolCalculator,
   profileCalculator,
 ];
