@@ -1,4 +1,5 @@
 import { arrheniusCalculator } from './arrhenius.ts';
+import { bondOrderCalculator } from './bond-order.ts';
 import type { Calculator } from './calculator.ts';
 import { changeBasisCalculator } from './change-basis.ts';
 import { collisionCalculator } from './collision.ts';
@@ -32,6 +33,7 @@ export const calculators: readonly Calculator[] = [
   tunnellingCalculator,
   siteDensityCalculator,
   uncertaintyCalculator,
+  bondOrderCalculator,
   poolCalculator,
   profileCalculator,
 ];
