@@ -23,6 +23,7 @@ import { RatePlot } from '#client/features/entries/components/rate-plot.tsx';
 import { RelatedEntries } from '#client/features/entries/components/related-entries.tsx';
 import { SourceCard } from '#client/features/entries/components/source-card.tsx';
 import { SurfaceLabel } from '#client/ui/surface-label.tsx';
+import { Collect } from '#client/routes/collections/collect.tsx';
 
 /** One entry: what is printed, what it became and how, under which conditions, from where. */
 export function Component() {
@@ -55,7 +56,7 @@ function EntryPage({ accession, version }: { accession: string; version: number 
     <article>
       <Head entry={entry} />
       <EntryNotices entry={entry} />
-      <EntryActions entry={entry} />
+      <EntryActions entry={entry}>{entry.version !== null && <Collect accessions={[entry.accession]} />}</EntryActions>
       <div className="grid gap-x-10 gap-y-9 wide:grid-cols-[minmax(0,1fr)_minmax(0,29rem)]">
         <div className="flex min-w-0 flex-col gap-9">
           <EntryQuantities entry={entry} unit={unit} />

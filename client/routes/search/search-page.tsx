@@ -17,6 +17,7 @@ import { ResultTable } from '#client/features/entries/components/result-table.ts
 import { SearchBox } from '#client/features/entries/components/search-box.tsx';
 import { SummaryLine } from '#client/features/entries/components/summary-line.tsx';
 import { statedRangeWords, ZeroResults } from '#client/features/entries/components/zero-results.tsx';
+import { Collect } from '#client/routes/collections/collect.tsx';
 
 /** The search: a question as a sentence, and the entries that answer it. */
 export function Component() {
@@ -90,7 +91,7 @@ export function Component() {
               />
             </>
           )}
-      <ChosenTray />
+      <ChosenTray>{(accessions) => <Collect accessions={accessions} />}</ChosenTray>
     </>
   );
 }

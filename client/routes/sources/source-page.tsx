@@ -16,6 +16,7 @@ import { ResultTable } from '#client/features/entries/components/result-table.ts
 import { sourceOptions } from '#client/features/sources/api.ts';
 import { CitationCard } from '#client/features/sources/components/citation-card.tsx';
 import { SourceNotice, SourceStatus } from '#client/features/sources/components/source-status.tsx';
+import { Collect } from '#client/routes/collections/collect.tsx';
 
 /** One source: how to cite it, its notice, and the accepted entries taken from it. */
 export function Component() {
@@ -53,7 +54,7 @@ export function Component() {
         </section>
       </div>
       <EntriesOf source={source} />
-      <ChosenTray />
+      <ChosenTray>{(accessions) => <Collect accessions={accessions} />}</ChosenTray>
     </>
   );
 }

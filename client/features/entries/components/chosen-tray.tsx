@@ -1,5 +1,5 @@
 import { useQueryClient } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { getSource } from '#shared/contracts/sources.ts';
 import { announce } from '#client/lib/announce.ts';
 import { call } from '#client/lib/api-client.ts';
@@ -9,8 +9,8 @@ import { Tray } from '#client/ui/tray.tsx';
 import { canExportChosen, exportAddress } from '../api.ts';
 import { clearChosen, useChosen } from '../chosen.ts';
 
-/** The bar at the foot while rows are chosen: their export and their citations. */
-export function ChosenTray() {
+/** The bar at the foot while rows are chosen: their export and their citations, and what the page adds. */
+export function ChosenTray({ children }: { children?: (accessions: readonly string[]) => ReactNode }) {
   const chosen = useChosen();
   const { temperatureK } = useInstrument();
   const accessions = [...chosen.keys()];
@@ -21,6 +21,7 @@ export function ChosenTray() {
         ? <a className="button" href={exportAddress('zip', temperatureK, { accession: accessions })} download>Export CSV + BibTeX</a>
         : <span>Too many for one file of chosen rows; export the whole search, or choose fewer.</span>}
       <CopyCitations sources={sources} />
+      {children?.(accessions)}
     </Tray>
   );
 }

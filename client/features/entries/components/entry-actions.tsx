@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { retractEntry, reviseEntry, withdrawEntry, type EntryDetail } from '#shared/contracts/entries.ts';
 import { call } from '#client/lib/api-client.ts';
@@ -9,17 +9,18 @@ import { Dialog } from '#client/ui/dialog.tsx';
 import { TextareaField } from '#client/ui/field.tsx';
 import { EntryLinks } from './source-card.tsx';
 
-/** What the viewer may do with this revision; nothing where there is nothing. */
-export function EntryActions({ entry }: { entry: EntryDetail }) {
+/** What the viewer may do with this revision, and what the page adds; nothing where there is nothing. */
+export function EntryActions({ entry, children }: { entry: EntryDetail; children?: ReactNode }) {
   const { actions } = entry;
   const any = actions.some((action) => action !== 'export' && action !== 'submit');
-  if (!any) return null;
+  if (!any && !children) return null;
   return (
     <div className="flex flex-wrap gap-3 pb-6 no-print">
       <EntryLinks entry={entry} />
       {actions.includes('revise') && <Revise accession={entry.accession} />}
       {actions.includes('withdraw') && <Withdraw accession={entry.accession} />}
       {actions.includes('retract') && <Retract accession={entry.accession} />}
+      {children}
     </div>
   );
 }
