@@ -42,10 +42,14 @@ function withSites(terms: readonly Term[], count: number): Term[] {
 /** The most species one elementary step is written with. */
 export const mostTerms = 24;
 
+function sameSides(reactants: readonly Term[], products: readonly Term[]): boolean {
+  const list = (terms: readonly Term[]): string => terms.map(({ coefficient, species }) => `${coefficient} ${printSpecies(species)}`).sort().join('|');
+  return list(reactants) === list(products);
+}
+
 /** Whether both sides are the same and nothing of it is adsorbed: free sites and gases that only stand there. */
 export function nothingHappens(reactants: readonly Term[], products: readonly Term[]): boolean {
-  const list = (terms: readonly Term[]): string => terms.map(({ coefficient, species }) => `${coefficient} ${printSpecies(species)}`).sort().join('|');
-  return list(reactants) === list(products) && reactants.every(({ species }) => species.phase !== 'adsorbed');
+  return sameSides(reactants, products) && reactants.every(({ species }) => species.phase !== 'adsorbed');
 }
 
 /**
@@ -73,7 +77,7 @@ export function requireBalance(reactants: readonly Term[], products: readonly Te
   if (imbalance.length === 1 && only.what === 'site') {
     const fixedLeft = only.by > 0 ? withSites(reactants, only.by) : reactants;
     const fixedRight = only.by < 0 ? withSites(products, -only.by) : products;
-    if (!nothingHappens(fixedLeft, fixedRight) && fixedLeft.length + fixedRight.length <= mostTerms) suggestion = printEquation(fixedLeft, fixedRight);
+    if (!sameSides(fixedLeft, fixedRight) && fixedLeft.length + fixedRight.length <= mostTerms) suggestion = printEquation(fixedLeft, fixedRight);
     if (suggestion) addition = `; add ${printTerm({ coefficient: Math.abs(only.by), species: withSites([], 1)[0]?.species as Term['species'] })} on the ${only.by > 0 ? 'left' : 'right'}`;
   }
   throw new StepError('unbalanced', `not balanced: ${sentences.join('; ')}${addition}`, { imbalance, ...(suggestion ? { suggestion } : {}) });

@@ -76,7 +76,10 @@ function exchange(left: [string, string], right: [string, string]): Classificati
       const lostHydrogen = bondBetween(donor, rest, 'H');
       if (grownHydrogen !== null && lostHydrogen !== null && hydrogenCount(grown) === hydrogenCount(acceptor) + 1 && hydrogenCount(donor) === hydrogenCount(rest) + 1) {
         if (left[0] === left[1] || right[0] === right[1]) return result('disproportionation', lostHydrogen, grownHydrogen);
-        return result(hydrogenCount(donor) > hydrogenCount(acceptor) ? 'dehydrogenation' : 'hydrogenation', lostHydrogen, grownHydrogen);
+        // Adsorbed O and OH take hydrogen off the other species, OH and H2O give it.
+        const takes = ['O', 'OH'].includes(acceptor) && !['OH', 'H2O'].includes(donor);
+        const gives = ['OH', 'H2O'].includes(donor) && !['O', 'OH'].includes(acceptor);
+        return result(takes || (!gives && hydrogenCount(donor) > hydrogenCount(acceptor)) ? 'dehydrogenation' : 'hydrogenation', lostHydrogen, grownHydrogen);
       }
     }
   }

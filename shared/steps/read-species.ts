@@ -98,7 +98,9 @@ function readBare(core: string, { choices, bareA }: TermContext): Bare {
   if (isFault(rest)) return { formula, phase: null };
   const placed: Bare = { formula: rest, phase: (tail[2] as string).startsWith('g') ? 'gas' : 'adsorbed' };
   if (isFault(formula)) return placed;
-  return tail[2] === 'a' && bareA && choices.pick('letter-a', ['adsorbed', 'element']) === 'adsorbed' ? placed : { formula, phase: null };
+  // OHg is OH as a gas or with mercury; Na in company of Ha is adsorbed N or sodium.
+  const marked = tail[2] === 'g' ? choices.pick('letter-g', ['element', 'gas']) === 'gas' : tail[2] === 'a' && bareA && choices.pick('letter-a', ['adsorbed', 'element']) === 'adsorbed';
+  return marked ? placed : { formula, phase: null };
 }
 
 function refuseFormula(slice: PlainText, placement: Placement, core: string, offset: number, fault: FormulaFault): StepError {

@@ -64,7 +64,7 @@ export function starSites(slice: PlainText, { letter, attached, solid }: SiteMar
   const put = (pattern: RegExp, mark: string | ((match: RegExpMatchArray) => string)): void => {
     if (pattern.test(plain.text)) plain = replacePlain(plain, new RegExp(pattern, 'g'), typeof mark === 'string' ? () => mark : mark);
   };
-  put(/^[[({]\s?[\])}]$/, '*');
+  put(/^(?:[[({]\s?[\])}]|\((?:ads?|a|surf)\))$/, '*');
   if (/^θ_?\{?[A-Z]/.test(plain.text)) throw new StepError('unreadable', `${JSON.stringify(slice.text)} is a coverage: write the species, such as CO*, and * for a free site`, { position: slice.positions[0] });
   put(/^[θσ](?:_?\{?(?:v|0|\*|free|vac|vacant|e)\}?)?$/, '*');
   put(/[-·]?[θσ]$/, '*');
@@ -84,7 +84,7 @@ export function starSites(slice: PlainText, { letter, attached, solid }: SiteMar
   put(/\s?[[({]\*[\])}]$/, '*');
   put(/\s+(?=\*+(?:$|[_({]))/, '');
   put(/·(?=\*)/, '');
-  put(/^(\*+)[-·=≡]+(?=[A-Z([^])/, (match) => match[1] as string);
+  put(/^(\*+)\s?[-·=≡]+\s?(?=[A-Z([^])/, (match) => match[1] as string);
   put(/\*?@\{?([A-Za-z0-9-]{1,24})\}?$/, (match) => `*_{${match[1]}}`);
   return plain;
 }

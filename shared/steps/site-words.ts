@@ -38,15 +38,15 @@ export const siteWordPattern = escaped.join('|');
 export const adsorbedWords = ['a', 'ad', 'ads', 'adsorbed', 'surf', 'surface', 'chem', 'chemisorbed', 'chemi'];
 
 /** Words that say a species is a gas. */
-export const gasWords = ['g', 'gas', 'vap', 'vapour', 'vapor'];
+export const gasWords = ['g', 'gas', 'gas phase', 'gas-phase', 'vap', 'vapour', 'vapor'];
 
 /**
- * One spelling of a kind of site: `atop` and `top` are `top`; an unknown name is kept; a number becomes `site2`, since `*2` could mean two sites.
+ * One spelling of a kind of site: `atop` and `top` are `top`; an unknown name is kept; a digit becomes `site2`, since `*2` could mean two sites.
  *
  * @example siteName('4-fold') // 'fourfold'
  */
 export function siteName(typed: string): string {
   const known = byName.get(typed.toLowerCase().replace(/\s+/g, '-'));
   if (known) return known;
-  return /^\d+$/.test(typed) ? `site${typed}` : typed.replace(/\s+/g, '-');
+  return /^\d$/.test(typed) ? `site${typed}` : typed.replace(/\s+/g, '-');
 }

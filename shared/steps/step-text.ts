@@ -9,7 +9,7 @@ export interface SplitEquation {
   right: PlainText[];
 }
 
-const arrow = /<[-=]+>{1,2}|<<=+>|[-=]+>|<-+|<=+/g;
+const arrow = /<[-=]+>{1,2}|<<=+>|[-=]+>{1,2}|<-+|<=+/g;
 
 /** Where the arrow stands. An equals sign is one when nothing else is; between letters it may be a double bond, so one with room about it goes first. */
 function findArrows(text: string): RegExpMatchArray[] {
@@ -20,8 +20,8 @@ function findArrows(text: string): RegExpMatchArray[] {
   return apart.length === 1 ? apart : equals;
 }
 
-/** A label before the equation, as tables have it: `R1:`, `(R12)`, `(3)`, `4)`. */
-const label = /^\s*(?:\(\s*R?\s?\d{1,3}[a-z]?\s*\)[.:]?|R\s?\d{1,3}[a-z]?\s*[.:)]|\d{1,3}[a-z]?\s*[:)])\s+(?=\S)/i;
+/** What tables have before an equation: a quotation mark, `R1:`, `(R12)`, `(3)`, `4)`. */
+const label = /^\s*["'`“‘]?(?:(?:\(\s*R?\s?\d{1,3}[a-z]?\s*\)[.:]?|R\s?\d{1,3}[a-z]?\s*[.:)]|\d{1,3}[a-z]?\s*[:)])\s+(?=\S))?/i;
 
 /** Splits an equation at its arrow and its plus signs. Throws a `StepError` when there is no arrow, more than one, or nothing on a side. */
 export function splitEquation(original: string, choices: Choices = new Choices()): SplitEquation {
@@ -30,7 +30,7 @@ export function splitEquation(original: string, choices: Choices = new Choices()
   const before = label.exec(whole.text)?.[0] ?? '';
   // (2) before an equation is its number, or the coefficient of the first species.
   const start = /^\s*\(\d+\)\s/.test(before) && choices.pick('number-in-brackets', ['label', 'coefficient']) === 'coefficient' ? 0 : before.length;
-  const end = whole.text.length - (/[\s.,;]*$/.exec(whole.text)?.[0].length ?? 0);
+  const end = whole.text.length - (/(?:\s+\(R?\d{1,3}[a-z]?\))?[\s.,;"'`”’]*$/i.exec(whole.text)?.[0].length ?? 0);
   const plain = start > 0 || end < whole.text.length ? { text: whole.text.slice(start, Math.max(start, end)), positions: whole.positions.slice(start) } : whole;
   const found = findArrows(plain.text);
   const first = found[0];
@@ -38,9 +38,10 @@ export function splitEquation(original: string, choices: Choices = new Choices()
   if (found.length > 1) {
     throw new StepError('unreadable', 'more than one arrow: write one elementary step at a time', { position: plain.positions[(found[1] as RegExpMatchArray).index as number] });
   }
-  const at = first.index as number;
+  // e--> is an electron and an arrow.
+  const at = (first.index as number) + (/(?:^|[\s+\d])e$/.test(plain.text.slice(0, first.index)) && first[0].startsWith('--') ? 1 : 0);
   const left = splitSide(plain, 0, at);
-  const right = splitSide(plain, at + first[0].length, plain.text.length);
+  const right = splitSide(plain, (first.index as number) + first[0].length, plain.text.length);
   const backwards = first[0].startsWith('<') && !first[0].endsWith('>');
   return backwards ? { left: right, right: left } : { left, right };
 }

@@ -195,7 +195,7 @@ describe('what is no step', () => {
     ['1/0 N2 -> N2', 'unreadable', 0],
     ['9999 N2 -> N2', 'unreadable', 0],
     ['2 -> N2', 'unreadable', 1],
-    ['(ads) -> N2', 'unreadable', 0],
+    ['(g) -> N2', 'unreadable', 0],
     ['(CO -> CO', 'unreadable', 3],
     ['C0* -> C*', 'unreadable', 2],
     ['()* -> C*', 'unreadable', 1],

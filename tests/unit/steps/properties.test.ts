@@ -22,13 +22,19 @@ const step = fc.record({ split: fc.constantFrom(...splits), times: fc.integer({ 
 });
 
 type Style = (part: Part) => string;
+const count = (coefficient: number, mark = ''): string => (coefficient === 1 ? '' : `${coefficient}${mark}`);
+const marked = (mark: string, free: string, gas: string): Style => ({ coefficient, name, star }) => `${count(coefficient, ' ')}${name === '' ? free : `${name}${star ? mark : gas}`}`;
 const styles: Style[] = [
-  ({ coefficient, name, star }) => `${coefficient === 1 ? '' : coefficient}${name}${star ? '*' : ''}`,
-  ({ coefficient, name, star }) => `${coefficient === 1 ? '' : `${coefficient} `}${star && name ? '*' : ''}${name}${star && !name ? '*' : ''}`,
+  ({ coefficient, name, star }) => `${count(coefficient)}${name}${star ? '*' : ''}`,
+  ({ coefficient, name, star }) => `${count(coefficient, ' ')}${star && name ? '*' : ''}${name}${star && !name ? '*' : ''}`,
   ({ coefficient, name, star }) => `${coefficient} ${name || '*'}${star && name ? '(ads)' : ''}${star ? '' : '(g)'}`,
   ({ coefficient, name, star }) => Array.from({ length: coefficient }, () => `${name}${star ? '∗' : ''}`).join(' + '),
+  ({ coefficient, name, star }) => `${count(coefficient, '×')}${name.replace(/\d/g, (digit) => '₀₁₂₃₄₅₆₇₈₉'[Number(digit)] as string)}${star ? '*' : ''}`,
+  ({ coefficient, name, star }) => `${count(coefficient)}\\mathrm{${name.replace(/(\d)/g, '_{$1}') || '{}'}}${star ? '^{\\ast}' : ''}`,
+  ({ coefficient, name, star }) => `${count(coefficient)}${name.replace(/(\d)/g, '<sub>$1</sub>')}${star ? '<sup>*</sup>' : ''}`,
+  marked('_ads', '*', '_g'), marked('ads', '*', 'g'), marked('(a)', '□', ' (g)'), marked('(S)', 'RH(S)', ''), marked('·θ', 'θ', '(g)'), marked('-M', 'M', '(g)'), marked('X', 'X', ''),
 ];
-const arrows = ['->', '→', '⇌', '<->', '=', '=>'];
+const arrows = ['->', '→', '⇌', '<->', '=', '=>', '-->', '<=>', '\\rightarrow ', '&rarr;'];
 
 const write = (left: Part[], right: Part[], style: Style, arrow: string): string => `${left.map(style).join(' + ')} ${arrow} ${right.map(style).join(' + ')}`;
 
@@ -58,7 +64,7 @@ describe('elementary steps', () => {
   });
 
   it('throws nothing but its own error, on any text', () => {
-    const piece = fc.constantFrom('N', 'H', 'CO', 'NH3', '*', '**', '2', '1/2', '½', ' + ', '+', ' -> ', '=', '<-', '⇌', '(g)', '(ads)', '_fcc', '_', '^', '{', '}', '[13C]', '[', ']', '(', ')', 'D', 'e-', '-', ' ', '²', '⁺', '\\to', '$', 'x');
+    const piece = fc.constantFrom('N', 'H', 'CO', 'NH3', '*', '**', '2', '1/2', '½', ' + ', '+', ' -> ', '=', '<-', '⇌', '(g)', '(ads)', '_fcc', '_', '^', '{', '}', '[13C]', '[', ']', '(', ')', 'D', 'e-', '-', ' ', '²', '⁺', '\\to', '$', 'x', '\\ce{', '\\mathrm{', 'η2-', '(S)', '(s)', 'M', 'X', 'S', '-', '13', '15N', '^2-', '<sub>', '</sub>', '@', '·', 'Co', 'a', 'ads', 'T', 'θ', '*2', '*1', 'Pt', '[ ]', '(1) ', 'R2: ', '--', 'C18O', ',', '&rarr;');
     fc.assert(
       fc.property(fc.oneof(fc.string({ maxLength: 80 }), fc.array(piece, { maxLength: 20 }).map((pieces) => pieces.join(''))), (text) => {
         try {
@@ -75,9 +81,25 @@ describe('elementary steps', () => {
             expect(error.position).toBeLessThanOrEqual(text.length);
           }
           if (error.suggestion !== undefined) expect(() => readStep(error.suggestion as string)).not.toThrow();
+          if (error.code === 'ambiguous' && error.readings) expect(error.readings.length).toBeGreaterThan(1);
         }
       }),
       { numRuns: 4000 },
+    );
+  });
+
+  it('turns its sign with the direction, and keeps its key with isotopes and kinds of site', () => {
+    const labels = fc.constantFrom<[string, string]>(['H', 'D'], ['N', '[15N]'], ['C', '^{13}C'], ['O', '¹⁸O'], ['*', '*_fcc'], ['*', '*{step}'], ['*', '*@B5']);
+    fc.assert(
+      fc.property(step, labels, ({ left, right }, [from, to]) => {
+        const [there, back] = [write(left, right, styles[0] as Style, '->'), write(right, left, styles[0] as Style, '->')];
+        const label = (text: string) => text.replaceAll(new RegExp(from === '*' ? '\\*' : `${from}(?![a-z])`, 'g'), to);
+        const [plain, labelled, turned] = [readStep(there), readStep(label(there)), readStep(label(back))];
+        expect([labelled.key, turned.key]).toEqual([plain.key, plain.key]);
+        expect(labelled.variantKey).toBe(turned.variantKey);
+        expect(labelled.direction).toBe(-turned.direction);
+        expect(readStep(labelled.variantKey).variantKey).toBe(labelled.variantKey);
+      }),
     );
   });
 
@@ -92,7 +114,7 @@ describe('elementary steps', () => {
 
   it('does not hang on hostile text', () => {
     const start = performance.now();
-    for (const text of ['('.repeat(400), '*'.repeat(400), '+'.repeat(400), '='.repeat(400), '<-'.repeat(200), '_{'.repeat(200), `${'C'.repeat(380)}->C`, `${'1'.repeat(380)}->C`, 'H9999*'.repeat(60), `${'(C)9'.repeat(90)} -> C`]) {
+    for (const text of ['('.repeat(400), '*'.repeat(400), '+'.repeat(400), '='.repeat(400), '<-'.repeat(200), '_{'.repeat(200), `${'C'.repeat(380)}->C`, `${'1'.repeat(380)}->C`, 'H9999*'.repeat(60), '\\ce{'.repeat(80), '<sub>'.repeat(80), '->[k]'.repeat(80), `${'O2- + '.repeat(20)}O2- -> O2*`, ' '.repeat(400), `N2 ${' '.repeat(380)}-> N2`, '(1) '.repeat(100), `${'*-'.repeat(190)}C -> C`, 'η2-'.repeat(130), `${'[('.repeat(190)}->`, '_{(ads'.repeat(60), '&rarr;'.repeat(60), `${'H·S + '.repeat(20)}S -> S`, `C${'18'.repeat(190)}O -> C`, `${'(C)9'.repeat(90)} -> C`]) {
       try {
         readStep(text);
       } catch (error) {
