@@ -12,6 +12,7 @@ import { parseValueCalculator } from './parse-value.ts';
 import { profileCalculator } from './profile.ts';
 import { poolCalculator } from './pool.ts';
 import { rateConstantCalculator } from './rate-constant.ts';
+import { reverseCalculator } from './reverse.ts';
 import { siteDensityCalculator } from './site-density.ts';
 import { twoTemperatureCalculator } from './two-temperature.ts';
 import { uncertaintyCalculator } from './uncertainty.ts';
@@ -33,6 +34,7 @@ export const calculators: readonly Calculator[] = [
   tunnellingCalculator,
   siteDensityCalculator,
   uncertaintyCalculator,
+  reverseCalculator,
   bondOrderCalculator,
   poolCalculator,
   profileCalculator,
