@@ -32,7 +32,7 @@ function chain(formula: string): Group[] {
 }
 
 function bond(a: string, b: string): string {
-  return [a, b].sort((x, y) => (x === 'H' ? 1 : y === 'H' ? -1 : x < y ? -1 : 1)).join('-');
+  return a === 'H' || (b !== 'H' && a > b) ? `${b}-${a}` : `${a}-${b}`;
 }
 
 function sameElements(a: readonly Group[], b: readonly Group[]): boolean {
@@ -50,6 +50,19 @@ function hydrogenBond(parent: string, fragment: string): string | null {
   const changed = whole.filter((group, i) => group.hydrogens !== (rest[i] as Group).hydrogens);
   const lost = whole.reduce((sum, group, i) => sum + group.hydrogens - (rest[i] as Group).hydrogens, 0);
   return changed.length === 1 && lost === 1 ? bond((changed[0] as Group).element, 'H') : null;
+}
+
+function sameGroups(a: readonly Group[], b: readonly Group[]): boolean {
+  return sameElements(a, b) && a.every((group, i) => group.hydrogens === (b[i] as Group).hydrogens);
+}
+
+/** Whether a molecule falls into two fragments with every hydrogen where it was: CH2O into CH2 and O, not into CH and OH. */
+export function splitsInto(parent: string, a: string, b: string): boolean {
+  const whole = chain(parent);
+  const turned = [...whole].reverse();
+  const parts = [...chain(a), ...chain(b)];
+  const swapped = [...chain(b), ...chain(a)];
+  return [whole, turned].some((groups) => sameGroups(groups, parts) || sameGroups(groups, swapped));
 }
 
 /**

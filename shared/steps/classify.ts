@@ -1,4 +1,4 @@
-import { bondBetween } from './bonds.ts';
+import { bondBetween, splitsInto } from './bonds.ts';
 import { netSides } from './net-sides.ts';
 import type { Species, Term } from './species.ts';
 
@@ -88,13 +88,13 @@ function exchange(left: [string, string], right: [string, string]): Classificati
     if (at < 0) continue;
     const parent = hydrogenSide[1 - at] as string;
     const fragments = hydrogenSide === left ? right : left;
-    for (const [grown, other] of [fragments, [fragments[1], fragments[0]]] as [string, string][]) {
-      for (const bare of withoutHydrogen(grown)) {
-        const heavy = bondBetween(parent, bare, other);
-        const hydrogen = bondBetween(grown, bare, 'H');
-        if (!isHeavyBond(heavy) || hydrogen === null) continue;
-        return hydrogenSide === left ? result('dissociation', heavy, hydrogen, 'hydrogen-assisted') : result('association', hydrogen, heavy);
-      }
+    const ways = ([fragments, [fragments[1], fragments[0]]] as [string, string][]).flatMap(([grown, other]) => withoutHydrogen(grown).map((bare) => ({ grown, other, bare })));
+    // Where the hydrogens of the parent stay in place the hydrogen that came is the other one.
+    for (const { grown, other, bare } of [...ways.filter((way) => splitsInto(parent, way.bare, way.other)), ...ways]) {
+      const heavy = bondBetween(parent, bare, other);
+      const hydrogen = bondBetween(grown, bare, 'H');
+      if (!isHeavyBond(heavy) || hydrogen === null) continue;
+      return hydrogenSide === left ? result('dissociation', heavy, hydrogen, 'hydrogen-assisted') : result('association', hydrogen, heavy);
     }
   }
   return result(left[0] === left[1] || right[0] === right[1] ? 'disproportionation' : 'association');
@@ -134,19 +134,19 @@ function onSurface(reactants: string[], products: string[], sitesKept = true): C
   return result('overall');
 }
 
-function ontoSurface(gas: string[], reactants: string[], products: string[], whole: boolean): Classification {
+function ontoSurface(gas: string[], reactants: string[], products: string[]): Classification {
   if (gas.length !== 1) return result('overall');
   if (reactants.length > 0) {
     const [kept, made] = withoutCommon(reactants, products);
-    if (kept.length === 0) return ontoSurface(gas, [], made, whole);
+    if (kept.length === 0) return ontoSurface(gas, [], made);
     const formed = kept.length === 1 && made.length === 1 ? bondBetween(made[0] as string, kept[0] as string, gas[0] as string) : null;
     return result('eley-rideal', null, formed);
   }
   if (products.length === 1 && products[0] === gas[0]) return result('adsorption');
-  if (products.length === 1 && whole) return result('overall');
+  if (products.length === 1) return result('overall');
   if (products.length > 3) return result('overall');
-  const [a, b] = products as [string, string | undefined];
-  const broken = products.length <= 2 ? bondBetween(gas[0] as string, a, b ?? a) : null;
+  const [a, b] = products as [string, string];
+  const broken = products.length <= 2 ? bondBetween(gas[0] as string, a, b) : null;
   return result('dissociative-adsorption', broken, null, direct(broken));
 }
 
@@ -159,22 +159,21 @@ export function classify(typedReactants: readonly Term[], typedProducts: readonl
   const gasOut = molecules(products, 'gas');
   const adsorbedIn = molecules(reactants, 'adsorbed');
   const adsorbedOut = molecules(products, 'adsorbed');
-  const whole = terms.every(({ coefficient }) => Number.isInteger(coefficient));
   if (gasIn.length === 0 && gasOut.length === 0) return onSurface(adsorbedIn, adsorbedOut, sitesHeld(reactants) === sitesHeld(products));
-  if (gasOut.length === 0) return ontoSurface(gasIn, adsorbedIn, adsorbedOut, whole);
-  if (gasIn.length === 0) return fromSurface(gasOut, adsorbedIn, adsorbedOut, whole);
+  if (gasOut.length === 0) return ontoSurface(gasIn, adsorbedIn, adsorbedOut);
+  if (gasIn.length === 0) return fromSurface(gasOut, adsorbedIn, adsorbedOut);
   if (gasIn.length !== 1 || gasOut.length !== 1 || adsorbedIn.length === 0) return result('overall');
   const formed = adsorbedIn.length === 1 && adsorbedOut.length === 0 ? bondBetween(gasOut[0] as string, gasIn[0] as string, adsorbedIn[0] as string) : null;
   return result('eley-rideal', null, formed);
 }
 
-function fromSurface(gas: string[], reactants: string[], products: string[], whole: boolean): Classification {
+function fromSurface(gas: string[], reactants: string[], products: string[]): Classification {
   if (products.length > 0) {
     const [left, right] = withoutCommon(reactants, products);
-    if (right.length === 0) return fromSurface(gas, left, [], whole);
+    if (right.length === 0) return fromSurface(gas, left, []);
     return onSurface(left, [...right, ...gas]);
   }
-  const back = ontoSurface(gas, [], reactants, whole);
+  const back = ontoSurface(gas, [], reactants);
   if (back.class === 'adsorption') return result('desorption');
   if (back.class === 'dissociative-adsorption') return result('associative-desorption', null, back.bond.broken);
   return result('overall');

@@ -21,7 +21,7 @@ export function takeCoefficient(slice: PlainText, choices: Choices): Counted {
   const cut = (length: number): PlainText => ({ text: text.slice(length), positions: slice.positions.slice(length) });
   const found = mixed.exec(text) ?? fraction.exec(text) ?? decimal.exec(text) ?? whole.exec(text);
   if (!found) return { coefficient: 1, rest: slice };
-  const after = times.exec(text.slice(found[0].length))?.[0] ?? '';
+  const after = (times.exec(text.slice(found[0].length)) as RegExpExecArray)[0];
   const rest = cut(found[0].length + after.length);
   if (mixed.test(text)) return { coefficient: Number(found[1]) + Number(found[2]) / Number(found[3]), rest: massNumber(rest) };
   if (fraction.test(text)) return { coefficient: Number(found[1]) / Number(found[2]), rest: massNumber(rest) };

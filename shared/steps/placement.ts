@@ -69,7 +69,7 @@ export function placeSpecies(typed: string, choices: Choices, numberedSites: boo
     return { core: stars[1] as string, at: 0, phase: 'adsorbed', sites: (stars[2] as string).length, ...named(typedName) };
   }
   const prefix = starFirst.exec(text);
-  if (prefix && !/^[_({]/.test(prefix[2] as string)) {
+  if (prefix && !/^[_{]/.test(prefix[2] as string)) {
     // *CO(ads) says the same twice; *CO(g) contradicts itself.
     const again = adsorbedTail.exec(prefix[2] as string);
     const fault = gasTail.test(prefix[2] as string) ? { fault: 'either an adsorbed species (*) or a gas (g), not both' } : {};

@@ -123,15 +123,13 @@ export function readTerm(slice: PlainText, context: TermContext): Term {
   const rest = starSites(inner && inner !== '*' ? { text: inner, positions: counted.rest.positions.slice(1) } : counted.rest, context.marks);
   const where = (offset: number): number => {
     const position = rest.positions[Math.min(Math.max(0, offset), rest.text.length)] as number;
-    const found = slice.positions.findIndex((at) => at >= position);
-    return found < 0 ? slice.text.length : found;
+    return slice.positions.findIndex((at) => at >= position);
   };
   const placement = placeSpecies(rest.text, choices, context.marks.numbered);
   if (placement.fault) throw fail(slice, placement.fault);
   const typed = placement.core.trim();
   if (/\s/.test(typed)) throw fail(slice, 'one species without spaces; put + between species', where(placement.at + placement.core.search(/\S\s/) + 1));
-  if (typed === '' && placement.phase === 'adsorbed') return { coefficient: coefficient * placement.sites, species: freeSite(vacant.has(placement.siteType ?? '') ? undefined : placement.siteType) };
-  if (typed === '') throw fail(slice, 'a formula', where(0));
+  if (typed === '') return { coefficient: coefficient * placement.sites, species: freeSite(vacant.has(placement.siteType ?? '') ? undefined : placement.siteType) };
   // A line before the asterisk is a bond to the surface or a charge.
   const bonded = placement.phase === 'adsorbed' && /[A-Za-z0-9)\]][-=≡]$/.test(typed) && /[-=≡]\*/.test(rest.text) && (/[=≡]$/.test(typed) || choices.pick('line-before-asterisk', ['charge', 'bond']) === 'bond');
   const { core: neutral, charge } = takeCharge(bonded ? typed.slice(0, -1) : typed, choices);

@@ -78,7 +78,7 @@ export function starSites(slice: PlainText, { letter, attached, solid }: SiteMar
     if (attached) put(new RegExp(`(?<=[A-Za-z0-9)\\]])${name}$`), '*');
   }
   const alone = /^([A-Z][A-Za-z]?)\([sS]\)$/.exec(plain.text);
-  if (alone && metalOf(alone[1] as string) && (solid || alone[0].endsWith('(S)'))) put(/^.*$/, '*');
+  if (alone && metalOf(alone[1] as string)) put(/^.*$/, '*');
   put(/^[([][sS][)\]]$/, '*');
   if (!plain.text.includes('*')) put(solid ? /\s?\([sS]\)$/ : /\s?\(S\)$/, '*');
   put(/\s?[[({]\*[\])}]$/, '*');

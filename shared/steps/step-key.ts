@@ -49,7 +49,7 @@ function withoutFreeSites(side: Side): Side {
 
 /** Species in alphabetical order, free sites last. */
 function text(side: Side): string {
-  return [...side].sort(([a], [b]) => Number(isFreeSite(a)) - Number(isFreeSite(b)) || (a < b ? -1 : a > b ? 1 : 0)).map(([name, coefficient]) => printCounted(round(coefficient), name)).join(' + ');
+  return [...side].sort(([a], [b]) => Number(isFreeSite(a)) - Number(isFreeSite(b)) || (a < b ? -1 : 1)).map(([name, coefficient]) => printCounted(round(coefficient), name)).join(' + ');
 }
 
 function sides(reactants: readonly Term[], products: readonly Term[], view: (species: Species) => Species): [string, string] {

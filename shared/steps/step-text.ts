@@ -27,10 +27,10 @@ const label = /^\s*["'`“‘]?(?:(?:\(\s*R?\s?\d{1,3}[a-z]?\s*\)[.:]?|R\s?\d{1,
 export function splitEquation(original: string, choices: Choices = new Choices()): SplitEquation {
   if (original.length > 400) throw new StepError('unreadable', 'an equation has at most 400 characters', { position: 400 });
   const whole = plainEquation(original);
-  const before = label.exec(whole.text)?.[0] ?? '';
+  const before = (label.exec(whole.text) as RegExpExecArray)[0];
   // (2) before an equation is its number, or the coefficient of the first species.
   const start = /^\s*\(\d+\)\s/.test(before) && choices.pick('number-in-brackets', ['label', 'coefficient']) === 'coefficient' ? 0 : before.length;
-  const end = whole.text.length - (/(?:\s+\(R?\d{1,3}[a-z]?\))?[\s.,;"'`”’]*$/i.exec(whole.text)?.[0].length ?? 0);
+  const end = whole.text.length - (/(?:\s+\(R?\d{1,3}[a-z]?\))?[\s.,;"'`”’]*$/i.exec(whole.text) as RegExpExecArray)[0].length;
   const plain = start > 0 || end < whole.text.length ? { text: whole.text.slice(start, Math.max(start, end)), positions: whole.positions.slice(start) } : whole;
   const found = findArrows(plain.text);
   const first = found[0];

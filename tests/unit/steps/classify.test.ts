@@ -57,6 +57,28 @@ describe('class of a step', () => {
     ['HD* + D* -> D2* + H*', 'overall', null, null, null],
     ['NH3* + 3* -> N* + 3H*', 'overall', null, null, null],
     ['2H2O* -> 2H2 + O2 + 2*', 'overall', null, null, null],
+    ['2N2 + 4* -> 4N*', 'dissociative-adsorption', 'N-N', null, 'direct'],
+    ['2CO* + 2* -> 2C* + 2O*', 'dissociation', 'C-O', null, 'direct'],
+    ['0.37 N2 + 0.74 * -> 0.74 N*', 'overall', null, null, null],
+    ['HCOO** -> HCOO* + *', 'isomerisation', null, null, null],
+    ['HCN + * -> CNH*', 'overall', null, null, null],
+    ['N2 + O*_fcc + *_hcp -> N2*_fcc + O*_hcp', 'adsorption', null, null, null],
+    ['N2*_fcc + O*_hcp -> N2 + O*_fcc + *_hcp', 'desorption', null, null, null],
+    ['CO + [13C]O* -> [13C]O + CO*', 'eley-rideal', null, null, null],
+    ['COOH* + OH* -> CO2* + H2O*', 'dehydrogenation', 'O-H', 'O-H', null],
+    ['NH* + H2O* -> NH2* + OH*', 'hydrogenation', 'O-H', 'N-H', null],
+    ['CH4* + OH* -> CH3* + H2O*', 'dehydrogenation', 'C-H', 'O-H', null],
+    ['CH3* + OH* -> CH4* + O*', 'hydrogenation', 'O-H', 'C-H', null],
+    ['NO* + H* -> N* + OH*', 'dissociation', 'N-O', 'O-H', 'hydrogen-assisted'],
+    ['CO* + H* + * -> CH* + O* + *', 'dissociation', 'C-O', 'C-H', 'hydrogen-assisted'],
+    ['CH2O* + H* -> CH2* + OH*', 'dissociation', 'C-O', 'O-H', 'hydrogen-assisted'],
+    ['NH2OH* + H* -> NH2* + H2O*', 'dissociation', 'N-O', 'O-H', 'hydrogen-assisted'],
+    ['CH2CO* + H* -> CH3* + CO*', 'dissociation', 'C-C', 'C-H', 'hydrogen-assisted'],
+    ['N2H* + H* -> 2NH*', 'dissociation', 'N-N', 'N-H', 'hydrogen-assisted'],
+    ['CO2* + H* -> CO* + OH*', 'dissociation', 'C-O', 'O-H', 'hydrogen-assisted'],
+    ['N2* + H* -> N2H* + *', 'hydrogenation', null, 'N-H', null],
+    ['NaOH* + H* -> Na* + H2O*', 'dissociation', 'Na-O', 'O-H', 'hydrogen-assisted'],
+    ['H2* + H* -> H* + H2*', 'overall', null, null, null],
     ['CO* + N* -> CN* + O*', 'association', null, null, null],
     ['2CO + O2 + 2* -> 2CO2 + 2*', 'overall', null, null, null],
   ])('%s', (text, stepClass, broken, formed, assistance) => {
@@ -69,7 +91,7 @@ describe('class of a step', () => {
 describe('bonds', () => {
   it.each([
     ['CO2', 'CO', 'O', 'C-O'], ['NO2', 'NO', 'O', 'N-O'], ['N2H4', 'NH2', 'NH2', 'N-N'], ['CH3CHO', 'CH3', 'CHO', 'C-C'], ['CHO', 'CO', 'H', 'C-H'], ['COH', 'H', 'CO', 'O-H'],
-    ['CH3CHO', 'CO', 'C', 'C-C'], ['CH3CHO', 'CN', 'C', null], ['HCl', 'H', 'Cl', 'Cl-H'], ['CH3CH2OH', 'CH2CH2O', 'H', null], ['H3', 'H2', 'H', null], ['CCO', 'OC', 'C', 'C-C'],
+    ['CH3CHO', 'CO', 'C', 'C-C'], ['CH3CHO', 'CN', 'C', null], ['HCl', 'H', 'Cl', 'Cl-H'], ['CH3CH2OH', 'CH2CH2O', 'H', null], ['H3', 'H2', 'H', null], ['CCO', 'OC', 'C', 'C-C'], ['CO', 'H2', 'O', null], ['CO', 'C', 'H2O2', null],
   ])('%s from %s and %s', (parent, a, b, bond) => {
     expect(bondBetween(parent, a, b)).toBe(bond);
   });
