@@ -27,3 +27,5 @@ export async function renewSearchRows(db: Db, most = 200): Promise<number> {
     if (made === 0) return renewed;
   }
 }
+export { promoterWord, readPromoters } from './promoters.ts';
+export { speciesIn } from './search-row.ts';

@@ -30,6 +30,9 @@ function readEquation(equation: string): { species: string[]; cleavage: string |
   }
 }
 
+/** Formulas of the species in an equation. */
+export const speciesIn = (equation: string): string[] => readEquation(equation).species;
+
 /** ln of the pre-exponential factor, per site where it could be brought there. */
 function factorOf(held: readonly { symbol: QuantitySymbol; value: number | null; low: number | null; high: number | null; unit: string; siteValue: number | null; siteUnit: string | null }[]) {
   const factor = held.find(({ symbol }) => symbol === 'preExponential');

@@ -8,7 +8,7 @@ import type { Actor } from '#server/actor.ts';
 import type { Context } from '#server/context.ts';
 import type { DbOrTx } from '#server/db/pool.ts';
 import { presentRecord } from '#server/features/entries/records.service.ts';
-import { toSearchFilter, type SearchFilter } from '#server/features/search/search.service.ts';
+import { readExportFilter, type SearchFilter } from '#server/features/search/search.service.ts';
 import { Refusal } from '#server/refusal.ts';
 import type { EntryFilter } from '#shared/contracts/entry-search.ts';
 import { CONSTANTS_VERSION, CORE_VERSION } from '#shared/kinetics/constants.ts';
@@ -27,7 +27,7 @@ interface Tally {
   sources: Map<string, string>;
 }
 
-export function createExportsService({ exportPool, clock, publicUrl, version, demonstration }: Context) {
+export function createExportsService({ db, exportPool, clock, publicUrl, version, demonstration }: Context) {
   async function* csvLines(db: DbOrTx, filter: SearchFilter, temperatureK: number | null, tally: Tally): AsyncGenerator<string> {
     yield csvHeader();
     for await (const records of walkEntries(db, filter)) {
@@ -93,9 +93,9 @@ export function createExportsService({ exportPool, clock, publicUrl, version, de
 
   return {
     /** Streams the filtered set; `begin` is called once the answer is certain to start. */
-    async write(_actor: Actor, request: ExportRequest, out: Writable, begin: () => void): Promise<void> {
+    async write(actor: Actor, request: ExportRequest, out: Writable, begin: () => void): Promise<void> {
       const { format, T, accession, ...asked } = request;
-      const filter = { ...toSearchFilter(asked), accession };
+      const filter = { ...await readExportFilter(db, actor, asked), accession };
       let client: pg.PoolClient;
       try {
         client = await exportPool.connect();

@@ -6,6 +6,7 @@ import type { SearchService } from './search.service.ts';
 export function searchRoutes(search: SearchService): Router {
   const router = Router();
   route(router, contract.searchEntries, ({ actor, query }) => search.search(actor, query));
-  route(router, contract.summariseEntries, ({ query }) => search.summarise(query));
+  route(router, contract.summariseEntries, ({ actor, query }) => search.summarise(actor, query));
+  route(router, contract.groupEntries, ({ actor, query }) => search.groups(actor, query));
   return router;
 }
