@@ -1,7 +1,18 @@
 import * as z from 'zod';
 import { printedLine } from '../kinetics/derivation.ts';
-import { readPrintedValue } from '../kinetics/printed-value.ts';
+import { KineticsError } from '../kinetics/kinetics-error.ts';
+import { PrintedValueError, readPrintedValue, type PrintedValue } from '../kinetics/printed-value.ts';
 import { calculator } from './calculator.ts';
+
+/** The reader calls its text `asPrinted`, as an entry does; here the input is `text`. */
+function reading(text: string, unit: string | undefined): PrintedValue {
+  try {
+    return readPrintedValue(text, unit);
+  } catch (error) {
+    if (error instanceof PrintedValueError) throw new KineticsError('text', error.message, error.code, text);
+    throw error;
+  }
+}
 
 export const parseValueCalculator = calculator({
   name: 'parse-value',
@@ -18,7 +29,7 @@ export const parseValueCalculator = calculator({
     significantDigits: z.number().nullable(), unit: z.string().nullable(),
   }),
   calculate: ({ text, unit }) => {
-    const value = readPrintedValue(text, unit);
+    const value = reading(text, unit);
     return { ...value, derivation: [printedLine(text, value.unit, String(value.value ?? value.low ?? value.high))] };
   },
 });
