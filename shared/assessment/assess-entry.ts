@@ -1,6 +1,8 @@
 import type { Check, EntryInput, Fault } from '../contracts/entries.ts';
 import { primarySymbol, symbolWords } from '../domain/kinds.ts';
 import { describeSurface, SurfaceError, type Surface } from '../domain/surface.ts';
+import { molarMass } from '../kinetics/atomic-weights.ts';
+import { isotopeLimits, type IsotopeLimits } from '../kinetics/isotope-limits.ts';
 import { KineticsError } from '../kinetics/kinetics-error.ts';
 import { convertQuantity, type ConvertedQuantity } from '../kinetics/quantity.ts';
 import type { QuantityContext } from '../kinetics/quantity-symbols.ts';
@@ -122,6 +124,28 @@ function requireParts(input: EntryInput, faults: Fault[]): void {
   }
 }
 
+/** The limits of an isotope effect: by the isotopes named, else by the labels of the step. */
+function isotopesOf(input: EntryInput, step: ElementaryStep | null): IsotopeLimits {
+  const species = [...(step?.reactants ?? []), ...(step?.products ?? [])].map((term) => term.species);
+  return isotopeLimits({
+    isotopes: input.conditions?.isotopes, labels: [...new Set(species.flatMap(({ isotopes = {} }) => Object.keys(isotopes)))],
+    bond: step?.bond.broken ?? step?.bond.formed, temperatureK: input.conditions?.temperatureK, validRange: input.validRange,
+  });
+}
+
+/** Molar mass [g mol-1] of the one gas molecule that a step takes up; null for none, for several, or where an atom has no standard weight. */
+function gasMolarMass(step: ElementaryStep): number | null {
+  const gases = step.reactants.filter(({ species }) => species.phase === 'gas' && species.formula !== 'e');
+  const [gas] = gases;
+  if (!gas || gases.length > 1 || gas.coefficient !== 1) return null;
+  try {
+    return molarMass(gas.species.composition, gas.species.isotopes);
+  } catch (error) {
+    if (error instanceof KineticsError) return null;
+    throw error;
+  }
+}
+
 /**
  * Reads, balances, converts and checks what a contributor typed.
  * @param input everything typed so far; all of it may be missing.
@@ -136,7 +160,8 @@ export function assessEntry(input: EntryInput): Assessment {
   const raised = recordChecks({
     quantities, scope: input.scope ?? null, stepClass: step?.class ?? null, gasOrder: step?.gasOrder, surfaceOrder: step?.surfaceOrder,
     methodClass: input.method?.class ?? null, validRange: input.validRange ?? null, endStateReference: input.conditions?.endStateReference,
-    temperatureK: input.conditions?.temperatureK,
+    temperatureK: input.conditions?.temperatureK, kieDirection: input.conditions?.kieDirection, ...isotopesOf(input, step),
+    siteDensityPerM2: input.conditions?.siteDensityPerM2, gasMolarMassGPerMol: step && gasMolarMass(step),
   }).map((check) => ({ ...check, message: sentence(check.message) }));
   for (const { code, message, path } of raised.filter(({ severity }) => severity === 'blocking')) faults.push({ path, message, code });
   const checks: Check[] = raised.filter(({ severity }) => severity !== 'blocking').map(({ code, severity, message }) => ({ code, severity, message }));

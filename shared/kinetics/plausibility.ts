@@ -142,10 +142,30 @@ export function checkUncertainty(quantity: {
   return checks;
 }
 
-/** Warns of a kinetic isotope effect beyond the semiclassical limit given, or outside 0.9 to 1.15 for a heavy-atom isotope. */
-export function checkKie(value: number, limits: { semiclassicalLimit?: number; heavyAtom?: boolean }): Check[] {
-  if (limits.heavyAtom && (value < 0.9 || value > 1.15)) return [check('kie-unusual', 'warning', `the heavy-atom isotope effect ${value} is outside 0.9 to 1.15`)];
-  if (limits.semiclassicalLimit !== undefined && value > limits.semiclassicalLimit) return [check('kie-unusual', 'warning', `the isotope effect ${value} is above the semiclassical limit ${limits.semiclassicalLimit.toFixed(1)}`)];
+/** The limits that an isotope effect is judged by. */
+export interface KieLimits {
+  /** Largest hydrogen isotope effect of zero-point energies alone, at the temperature of the value. */
+  semiclassicalLimit?: number;
+  /** The stretch and temperature behind that limit, in words. */
+  semiclassicalLimitWords?: string;
+  /** True for 13C, 15N and 18O against the common isotope. */
+  heavyAtom?: boolean;
+}
+
+/**
+ * Warns of a kinetic isotope effect k_light/k_heavy beyond the semiclassical limit given, either way, or outside 0.9 to 1.15 for a heavy-atom isotope.
+ *
+ * Source: zero-point factor of Bigeleisen and Mayer, J. Chem. Phys. 15 (1947) 261; the range of heavy atoms is common practice.
+ */
+export function checkKie(value: number, limits: KieLimits): Check[] {
+  if (limits.heavyAtom) {
+    return value < 0.9 || value > 1.15 ? [check('kie-unusual', 'warning', `the heavy-atom isotope effect ${value} is outside 0.9 to 1.15`)] : [];
+  }
+  const { semiclassicalLimit: limit, semiclassicalLimitWords: words } = limits;
+  if (limit === undefined) return [];
+  const why = words === undefined ? '' : ` (${words})`;
+  if (value > limit) return [check('kie-unusual', 'warning', `the isotope effect ${value} is above the semiclassical limit ${limit.toFixed(1)}${why}: tunnelling, or several bonds at once, would explain it`)];
+  if (value < 1 / limit) return [check('kie-unusual', 'warning', `the isotope effect ${value} is inverse beyond the semiclassical limit 1/${limit.toFixed(1)}${why}: is it printed as heavy over light?`)];
   return [];
 }
 

@@ -3,6 +3,7 @@ import {
   checkUncertainty, checkValidRange, factorKindOf, type Check,
 } from './plausibility.ts';
 import type { QuantitySymbol } from './quantity-symbols.ts';
+import { collisionLimit } from './sticking.ts';
 import type { UncertaintyKind } from './uncertainty.ts';
 import { findUnit, scaleBetween } from './units.ts';
 
@@ -37,10 +38,18 @@ export interface RecordFacts {
   validRange: { min?: number | null; max?: number | null } | null;
   endStateReference?: string | null;
   temperatureK?: number | null;
-  /** Largest semiclassical isotope effect, where the bond is known. */
+  /** Largest semiclassical isotope effect, from `isotopeLimits`. */
   semiclassicalLimit?: number | null;
+  /** The stretch and temperature behind it, in words. */
+  semiclassicalLimitWords?: string;
   /** True for a 13C, 15N or 18O isotope effect. */
   heavyAtomIsotope?: boolean;
+  /** How the isotope effect is printed; light over heavy when absent. */
+  kieDirection?: 'light/heavy' | 'heavy/light' | null;
+  /** Γ [m-2], for the collision limit of an adsorption constant. */
+  siteDensityPerM2?: number | null;
+  /** Molar mass of the one gas molecule that the step takes up [g mol-1]; null for none or several. */
+  gasMolarMassGPerMol?: number | null;
 }
 
 /** A check with the place in the record that raised it. */
@@ -63,6 +72,29 @@ function factorFor(quantity: CheckedQuantity, stepClass: string): Check[] {
   return from && to ? checkPreExponential(kind, scaleBetween(quantity.value, from, to)) : [];
 }
 
+const perSiteAndPressure = 'Pa-1 s-1';
+
+/** The collision limit at the temperature of the gas [Pa-1 s-1]; undefined where something it needs is not known. */
+function collisionLimitOf({ siteDensityPerM2, gasMolarMassGPerMol: molarMassGPerMol, temperatureK, validRange }: RecordFacts): number | undefined {
+  // The limit falls with temperature: where only a range is known its lower end gives the largest.
+  const T = temperatureK ?? validRange?.min;
+  if (!siteDensityPerM2 || !molarMassGPerMol || !T || T < 0) return undefined;
+  return collisionLimit({ molarMassGPerMol, temperatureK: T, siteDensityPerM2 });
+}
+
+/** A first-order constant against its ceiling, an adsorption constant per site and pressure against the collision limit. */
+function rateChecks(quantity: CheckedQuantity, value: number, facts: RecordFacts): Check[] {
+  if (quantity.siteUnit === perSiteAndPressure && quantity.siteValue != null) return checkRateConstant(quantity.siteValue, perSiteAndPressure, collisionLimitOf(facts));
+  return checkRateConstant(value, quantity.unit, quantity.unit === perSiteAndPressure ? collisionLimitOf(facts) : undefined);
+}
+
+/** An isotope effect, turned to light over heavy, against its limits. */
+function kieChecks(value: number, facts: RecordFacts): Check[] {
+  return checkKie(facts.kieDirection === 'heavy/light' ? 1 / value : value, {
+    semiclassicalLimit: facts.semiclassicalLimit ?? undefined, semiclassicalLimitWords: facts.semiclassicalLimitWords, heavyAtom: facts.heavyAtomIsotope,
+  });
+}
+
 function checksOf(quantity: CheckedQuantity, facts: RecordFacts): Check[] {
   const value = quantity.value ?? quantity.low ?? quantity.high ?? null;
   const checks: Check[] = [...checkUncertainty(quantity)];
@@ -82,11 +114,11 @@ function checksOf(quantity: CheckedQuantity, facts: RecordFacts): Check[] {
       if (facts.stepClass !== null && facts.scope !== 'apparent') checks.push(...factorFor(quantity, facts.stepClass));
       break;
     case 'rateConstant':
-      checks.push(...checkNotNegative('the rate constant', value), ...checkRateConstant(value, quantity.unit));
+      checks.push(...checkNotNegative('the rate constant', value), ...rateChecks(quantity, value, facts));
       break;
     case 'kie':
       checks.push(...checkNotNegative('the kinetic isotope effect', value));
-      checks.push(...checkKie(value, { semiclassicalLimit: facts.semiclassicalLimit ?? undefined, heavyAtom: facts.heavyAtomIsotope }));
+      if (value > 0) checks.push(...kieChecks(value, facts));
       break;
     case 'stickingCoefficient':
       checks.push(...[quantity.value, quantity.low, quantity.high].filter((number) => number != null).slice(0, 2).flatMap(checkStickingCoefficient).slice(0, 1));

@@ -1,11 +1,14 @@
 import { describe, expect, it } from 'vitest';
 import { collisionCalculator } from '#shared/calculators/collision.ts';
 import { runCalculator } from '#shared/calculators/calculator.ts';
+import { assessEntry } from '#shared/assessment/assess-entry.ts';
+import type { EntryInput } from '#shared/contracts/entries.ts';
 import { rateAt } from '#shared/kinetics/arrhenius.ts';
 import { isotopeMasses, molarMass, standardAtomicWeights } from '#shared/kinetics/atomic-weights.ts';
 import { collisionFlux, fluxPerPressure, langmuirExposure, meanSpeed, monolayerTime, numberDensity } from '#shared/kinetics/collision.ts';
 import { N_A, R } from '#shared/kinetics/constants.ts';
 import { KineticsError } from '#shared/kinetics/kinetics-error.ts';
+import { recordChecks, type CheckedQuantity, type RecordFacts } from '#shared/kinetics/record-checks.ts';
 import { activatedSticking, adsorptionConstant, collisionLimit, stickingFromRateConstant } from '#shared/kinetics/sticking.ts';
 import { expectClose, referenceCases, type ReferenceCase } from './reference.ts';
 
@@ -190,5 +193,50 @@ describe('the calculator', () => {
     [{ beamEnergyEV: 1 }, ''],
   ])('refuses %j at %s', (input, path) => {
     expect(run(input).fault).toBe(path);
+  });
+});
+
+describe('adsorption constants against the collision limit', () => {
+  // 1.5e19 sites per m2: the limit of CO at 300 K is 1532.94/0.8 = 1916 Pa-1 s-1 (reference case G019).
+  const entry: EntryInput = {
+    kind: 'rate-constant', scope: 'elementary', provenance: 'measured', step: { equation: 'CO + * -> CO*' }, surface: { metal: 'Ni', facet: '111' }, locator: 'Table 1',
+    method: { class: 'measured' }, quantities: [{ symbol: 'rateConstant', asPrinted: '2000', unitAsPrinted: 'Pa-1 s-1' }], conditions: { temperatureK: 300, siteDensityPerM2: 1.5e19 },
+  };
+  const k = (asPrinted: string, unitAsPrinted: string): Partial<EntryInput> => ({ quantities: [{ symbol: 'rateConstant', asPrinted, unitAsPrinted }] });
+  it.each<[string, Partial<EntryInput>, boolean]>([
+    ['above it', {}, true],
+    ['below it', k('1900', 'Pa-1 s-1'), false],
+    ['above it, printed per bar', k('2.0e8', 'bar-1 s-1'), true],
+    ['below it, printed per bar', k('1.9e8', 'bar-1 s-1'), false],
+    ['above it, on concentration', k('5.0e6', 'm3 mol-1 s-1'), true],
+    ['below it, on concentration', k('4.7e6', 'm3 mol-1 s-1'), false],
+    ['of no known site density', { conditions: { temperatureK: 300 } }, false],
+    ['of no known temperature', { conditions: { siteDensityPerM2: 1.5e19 } }, false],
+    ['at the lower end of its range', { conditions: { siteDensityPerM2: 1.5e19 }, validRange: { min: 300, max: 400 } }, true],
+    ['of a gas without a standard weight', { step: { equation: 'Rn + * -> Rn*' } }, false],
+    ['of deuterium, heavier than hydrogen', { ...k('6000', 'Pa-1 s-1'), step: { equation: 'D2 + 2* -> 2D*' } }, true],
+    ['of hydrogen', { ...k('6000', 'Pa-1 s-1'), step: { equation: 'H2 + 2* -> 2H*' } }, false],
+    ['of half a molecule', { step: { equation: '1/2 N2 + * -> N*' } }, false],
+    ['of a step without a gas', { ...k('2000', 's-1'), step: { equation: 'CO* -> CO + *' } }, false],
+    ['of a step that cannot be read', { step: { equation: 'CO + * ->' } }, false],
+  ])('%s', (_what, change, flagged) => {
+    expect(assessEntry({ ...entry, ...change }).checks.some(({ code }) => code === 'rate-above-limit')).toBe(flagged);
+  });
+
+  const facts: RecordFacts = { quantities: [], scope: null, stepClass: 'adsorption', methodClass: null, validRange: null, temperatureK: 300, siteDensityPerM2: 1.5e19, gasMolarMassGPerMol: 28.01 };
+  const plain = { symbol: 'rateConstant', standardUncertainty: null, reportedUncertainty: null, uncertaintyKind: 'none', uncertaintyScale: 'linear' } as const;
+  it.each<[Partial<CheckedQuantity>, Partial<RecordFacts>, number]>([
+    [{ value: 2000, unit: 'Pa-1 s-1' }, {}, 1],
+    [{ value: null, low: 2000, high: 3000, unit: 'Pa-1 s-1' }, {}, 1],
+    [{ value: 5, unit: 'm s-1', siteValue: 2000, siteUnit: 'Pa-1 s-1' }, {}, 1],
+    [{ value: 5, unit: 'm s-1', siteValue: null, siteUnit: 'Pa-1 s-1' }, {}, 0],
+    [{ value: 1e17, unit: 's-1' }, {}, 1],
+    [{ value: 2000, unit: 'Pa-1 s-1' }, { gasMolarMassGPerMol: null }, 0],
+    [{ value: 2000, unit: 'Pa-1 s-1' }, { temperatureK: null }, 0],
+    [{ value: 2000, unit: 'Pa-1 s-1' }, { temperatureK: -300 }, 0],
+    [{ value: 2000, unit: 'Pa-1 s-1' }, { siteDensityPerM2: null }, 0],
+  ])('%j, %j: %i', (quantity, change, count) => {
+    const checks = recordChecks({ ...facts, ...change, quantities: [{ ...plain, ...quantity } as CheckedQuantity] });
+    expect(checks.filter(({ code }) => code === 'rate-above-limit')).toHaveLength(count);
   });
 });

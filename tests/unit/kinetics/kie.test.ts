@@ -3,8 +3,15 @@ import { describe, expect, it } from 'vitest';
 import { kieCalculator } from '#shared/calculators/kie.ts';
 import { runCalculator } from '#shared/calculators/calculator.ts';
 import { bigeleisenMayer, type BigeleisenMayerInput } from '#shared/kinetics/bigeleisen-mayer.ts';
+import { assessEntry } from '#shared/assessment/assess-entry.ts';
+import type { EntryInput } from '#shared/contracts/entries.ts';
+import { isotopeLimits, type IsotopeFacts } from '#shared/kinetics/isotope-limits.ts';
+import { readIsotopePair } from '#shared/kinetics/isotope-pair.ts';
+import { bondStretches, semiclassicalLimit } from '#shared/kinetics/isotope-stretches.ts';
 import { KineticsError } from '#shared/kinetics/kinetics-error.ts';
 import { kieFromArrheniusPair, kieFromZeroPoint, kieLineFromTwoTemperatures } from '#shared/kinetics/kie.ts';
+import { checkKie } from '#shared/kinetics/plausibility.ts';
+import { recordChecks } from '#shared/kinetics/record-checks.ts';
 import { swainSchaad, swainSchaadFromDT } from '#shared/kinetics/kie-swain-schaad.ts';
 import { tunnellingKie } from '#shared/kinetics/tunnelling.ts';
 import { expectClose, referenceCases } from './reference.ts';
@@ -212,5 +219,106 @@ describe('the calculator', () => {
   ])('refuses %j at %s', (input, path) => {
     const outcome = run(input);
     expect('faults' in outcome && outcome.faults[0]?.path).toBe(path);
+  });
+});
+
+const deuterium = { element: 'H', light: 1, heavy: 2 };
+
+describe('the isotopes that a text compares', () => {
+  it.each<[string, string | null]>([
+    ['H/D', '1-2 H'], ['H2/D2', '1-2 H'], ['NH3 and ND3', '1-2 H'], ['CH4 vs CD4', '1-2 H'], ['D', '1-2 H'], ['D₂O against H₂O', '1-2 H'], ['1H/2H', '1-2 H'], ['[2H]', '1-2 H'],
+    ['protium and deuterium', '1-2 H'], ['deuterated methanol', '1-2 H'], ['H/T', '1-3 H'], ['tritium', '1-3 H'], ['1H/3H', '1-3 H'], ['D/T', '2-3 H'], ['H/D at T = 500 K', '1-2 H'],
+    ['H/D by DFT, TS of the step', '1-2 H'], ['CD3OH', '1-2 H'],
+    ['14N/15N', '14-15 N'], ['¹⁵N', '14-15 N'], ['15N2/14N2', '14-15 N'], ['12C vs 13C', '12-13 C'], ['[13C]O', '12-13 C'], ['C-13', '12-13 C'], ['16O/18O', '16-18 O'], ['34S', '32-34 S'], ['37Cl', '35-37 Cl'],
+    ['', null], ['not stated', null], ['H2', null], ['12C', null], ['H/D/T', null], ['13C and D', null], ['13C and 15N', null], ['Cd, Os and Tb', null],
+  ])('%s: %s', (text, expected) => {
+    const pair = readIsotopePair(text);
+    expect(pair && `${pair.light}-${pair.heavy} ${pair.element}`).toBe(expected);
+  });
+});
+
+describe('the semiclassical limit', () => {
+  // exp[hc(ν_L - ν_H)/2k_BT] of one stretch, as for the zero-point estimate.
+  it.each(bondStretches)('is the zero-point estimate of the $bond stretch', ({ bond, lightPerCm, heavyPerCm }) => {
+    const estimate = kieFromZeroPoint({ wavenumberLightPerCm: lightPerCm, wavenumberHeavyPerCm: heavyPerCm, temperatureK: 350 }).kie;
+    expectClose(semiclassicalLimit({ bond, temperatureK: 350, pair: deuterium })?.limit, estimate, 1e-13);
+  });
+
+  it('goes to tritium by the Swain–Schaad exponents', () => {
+    const at = (light: number, heavy: number) => semiclassicalLimit({ bond: 'C-H', temperatureK: 300, pair: { element: 'H', light, heavy } })?.limit as number;
+    expectClose(at(1, 3), at(1, 2) ** 1.442, 1e-12);
+    expectClose(at(1, 2) * at(2, 3), at(1, 3), 1e-12);
+  });
+
+  it('takes the largest stretch where the bond is not tabulated, and is for hydrogen alone', () => {
+    const unknown = semiclassicalLimit({ bond: null, temperatureK: 300, pair: deuterium });
+    expect(unknown).toMatchObject({ limit: semiclassicalLimit({ bond: 'O-H', temperatureK: 300, pair: deuterium })?.limit, words: expect.stringContaining('largest') });
+    expect(semiclassicalLimit({ bond: 'C-H', temperatureK: 300, pair: { element: 'N', light: 14, heavy: 15 } })).toBeNull();
+    expect(pathOf(() => semiclassicalLimit({ bond: null, temperatureK: 0, pair: deuterium }))).toBe('temperatureK');
+  });
+
+  it.each<[IsotopeFacts, number | undefined, boolean]>([
+    [{ isotopes: 'H/D', bond: 'C-H', temperatureK: 298.15 }, 7.025702725851153, false],
+    [{ isotopes: null, labels: ['2H'], bond: 'C-H', temperatureK: 298.15 }, 7.025702725851153, false],
+    [{ isotopes: 'not stated', labels: ['2H'], bond: 'C-H', validRange: { min: 298.15, max: 500 } }, 7.025702725851153, false],
+    [{ isotopes: 'H/D', bond: 'C-H' }, undefined, false],
+    [{ isotopes: 'H/D', temperatureK: -5 }, undefined, false],
+    [{ isotopes: '14N/15N', temperatureK: 500 }, undefined, true],
+    [{ labels: ['18O'] }, undefined, true],
+    [{ isotopes: '37Cl' }, undefined, false],
+    [{ labels: [] }, undefined, false],
+    [{}, undefined, false],
+  ])('%j', (facts, limit, heavyAtomIsotope) => {
+    const limits = isotopeLimits(facts);
+    expect(limits.heavyAtomIsotope).toBe(heavyAtomIsotope);
+    if (limit === undefined) expect(limits.semiclassicalLimit).toBeUndefined();
+    else expectClose(limits.semiclassicalLimit, limit, 1e-12);
+  });
+});
+
+describe('isotope effects in the checks', () => {
+  it.each<[number, Parameters<typeof checkKie>[1], RegExp | null]>([
+    [8, { semiclassicalLimit: 7, semiclassicalLimitWords: 'C-H stretch' }, /above the semiclassical limit 7\.0 \(C-H stretch\)/],
+    [0.1, { semiclassicalLimit: 7 }, /heavy over light/],
+    [1 / 7, { semiclassicalLimit: 7 }, null],
+    [7, { semiclassicalLimit: 7 }, null],
+    [0.89, { heavyAtom: true, semiclassicalLimit: 7 }, /outside 0\.9 to 1\.15/],
+    [1.16, { heavyAtom: true }, /outside 0\.9 to 1\.15/],
+    [1.15, { heavyAtom: true }, null],
+    [1e6, {}, null],
+  ])('%d against %j', (value, limits, message) => {
+    const checks = checkKie(value, limits);
+    if (message === null) expect(checks).toEqual([]);
+    else expect(checks).toMatchObject([{ code: 'kie-unusual', severity: 'warning', message: expect.stringMatching(message) }]);
+  });
+
+  const entry: EntryInput = {
+    kind: 'kie', scope: 'elementary', provenance: 'measured', step: { equation: 'CH4 + 2* -> CH3* + H*' }, surface: { metal: 'Ni', facet: '111' }, locator: 'Table 1',
+    method: { class: 'measured' }, quantities: [{ symbol: 'kie', asPrinted: '20', unitAsPrinted: '' }], conditions: { temperatureK: 600, isotopes: 'CH4/CD4', kieDirection: 'light/heavy' },
+  };
+  const codes = (change: Partial<EntryInput>): string[] => assessEntry({ ...entry, ...change }).checks.map(({ code }) => code);
+  const kie = (asPrinted: string): Partial<EntryInput> => ({ quantities: [{ symbol: 'kie', asPrinted, unitAsPrinted: '' }] });
+
+  it.each<[string, Partial<EntryInput>, string[]]>([
+    ['beyond the stretch at its temperature', {}, ['kie-unusual']],
+    ['within it', kie('2.1'), []],
+    ['beyond it for a lower temperature only', { ...kie('5'), conditions: { ...entry.conditions, temperatureK: 250 } }, []],
+    ['beyond it for a higher one', { ...kie('5'), conditions: { ...entry.conditions, temperatureK: 800 } }, ['kie-unusual']],
+    ['printed the other way round', { ...kie('0.05'), conditions: { ...entry.conditions, kieDirection: 'heavy/light' } }, ['kie-unusual']],
+    ['printed the other way round, within it', { ...kie('0.5'), conditions: { ...entry.conditions, kieDirection: 'heavy/light' } }, []],
+    ['of isotopes that the step alone labels', { step: { equation: 'CD4 + 2* -> CD3* + D*' }, conditions: { temperatureK: 600 } }, ['kie-unusual']],
+    ['of isotopes that nothing names', { conditions: { temperatureK: 600 } }, []],
+    ['of a heavy atom', { ...kie('1.3'), conditions: { temperatureK: 600, isotopes: '12C/13C' } }, ['kie-unusual']],
+    ['of no step', { step: undefined }, ['kie-unusual']],
+    ['of nothing', kie('0'), []],
+  ])('%s', (_what, change, expected) => {
+    expect(codes(change)).toEqual(expected);
+  });
+
+  it('says which stretch and which temperature, and does not stand in the way', () => {
+    const { checks, faults } = assessEntry(entry);
+    expect(checks[0]?.message).toMatch(/C-H stretch 2917\/2109 cm-1 of CH4\/CD4, at 600 K/);
+    expect(faults).toEqual([]);
+    expect(recordChecks({ quantities: [], scope: null, stepClass: null, methodClass: null, validRange: null })).toEqual([]);
   });
 });
