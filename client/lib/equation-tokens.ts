@@ -1,3 +1,4 @@
+import { isNuclide } from '#shared/steps/nuclides.ts';
 import { StepError } from '#shared/steps/step-error.ts';
 import { speakStep, stepTokens, type StepToken } from '#shared/steps/step-format.ts';
 
@@ -19,6 +20,11 @@ const patterns: readonly [EquationToken['kind'] | 'space', RegExp][] = [
   ['text', /^[A-Z][a-z]?/],
 ];
 
+/** A count keeps its blank where the number would make a fraction of the formula, or a nuclide: `1/2 N2`, `15 N*`. */
+function spaced(count: string, next: string): string {
+  return count.includes('/') || isNuclide(`${count}${/^[A-Z][a-z]?/.exec(next)?.[0] ?? ''}`) ? `${count} ` : count;
+}
+
 /**
  * Cuts an equation, in the one spelling the program prints, into the pieces that are set differently.
  * What it does not know is text: an equation somebody is still typing is set as far as it goes.
@@ -31,8 +37,8 @@ export function equationTokens(equation: string): EquationToken[] {
   while (rest) {
     const digits = /^(?:\d+(?:[./]\d+)?|[½¼¾])/.exec(rest)?.[0];
     if (digits) {
-      tokens.push({ kind: inside ? 'index' : 'count', text: digits });
       rest = rest.slice(digits.length);
+      tokens.push({ kind: inside ? 'index' : 'count', text: inside ? digits : spaced(digits, rest.trimStart()) });
       continue;
     }
     if (/^\+(?=\s|$)/.test(rest) || (rest.startsWith('+') && !inside)) {
@@ -61,11 +67,12 @@ export function equationTokens(equation: string): EquationToken[] {
   return tokens;
 }
 
-const kindOf: Readonly<Record<Exclude<StepToken['kind'], 'sup'>, EquationToken['kind']>> = {
-  'text': 'text', 'sub': 'index', 'site': 'star', 'site-type': 'site', 'coefficient': 'count', 'plus': 'plus', 'arrow': 'arrow',
+const kindOf: Readonly<Record<Exclude<StepToken['kind'], 'sup' | 'coefficient'>, EquationToken['kind']>> = {
+  'text': 'text', 'sub': 'index', 'site': 'star', 'site-type': 'site', 'plus': 'plus', 'arrow': 'arrow',
 };
 
-function fromStepToken({ kind, text }: StepToken): EquationToken {
+function fromStepToken({ kind, text }: StepToken, index: number, all: readonly StepToken[]): EquationToken {
+  if (kind === 'coefficient') return { kind: 'count', text: spaced(text, all[index + 1]?.text ?? '') };
   if (kind === 'sup') return /^\d+$/.test(text) ? { kind: 'isotope', text } : { kind: 'charge', text: `^${text}` };
   return { kind: kindOf[kind], text: kind === 'site-type' ? `_${text}` : text };
 }
@@ -81,8 +88,8 @@ function afterIsotope(token: EquationToken, index: number, all: readonly Equatio
 export function readEquation(equation: string): { tokens: EquationToken[]; spoken: string } {
   try {
     const spoken = speakStep(equation);
-    // The reader of equations keeps one arrow; an equilibrium and a phase that were printed are set as printed.
-    const plain = /<->|<=>|[⇌↔]|\([a-z]+\)/.test(equation);
+    // The reader of equations keeps one arrow; an equilibrium and a phase that were printed are set as printed, unless with markup.
+    const plain = /<->|<=>|[⇌↔]|\([a-z]+\)/.test(equation) && /^[\w\s*+<>=⇌↔→()[\]^/.,½¼¾-]+$/.test(equation) && !/&|<\/|[_^]\{|_ads?\b|\^\*/.test(equation);
     return { tokens: plain ? equationTokens(equation) : stepTokens(equation).map(fromStepToken).flatMap(afterIsotope), spoken };
   } catch (error) {
     if (error instanceof StepError) return { tokens: equationTokens(equation), spoken: equation };

@@ -9,17 +9,24 @@ interface EquationProps {
   display?: boolean;
 }
 
-function setToken(token: EquationToken): ReactNode {
+/** A charge is set with a true minus sign and copied with the one that is typed. */
+function setCharge(charge: string): ReactNode {
+  return <><span className="plain-spelling">{charge}</span><sup className="equation-charge" data-set={charge.slice(1).replace('-', '\u2212')} /></>;
+}
+
+function setToken(token: EquationToken, before: EquationToken | undefined): ReactNode {
   switch (token.kind) {
     case 'index': return <sub>{token.text}</sub>;
     case 'isotope': return <><span className="plain-spelling">[</span><sup>{token.text}</sup></>;
-    case 'charge': return <><span className="plain-spelling">^</span><sup>{token.text.slice(1).replace('-', '\u2212')}</sup></>;
+    case 'charge': return setCharge(token.text.replace('\u2212', '-'));
     case 'site': return <><span className="plain-spelling">_</span><sub className="equation-site">{token.text.slice(1)}</sub></>;
     case 'star': return <span className="equation-star">{token.text}</span>;
     case 'phase': return <span className="equation-phase">{token.text}</span>;
     case 'plus': return <span className="equation-plus">{' + '}</span>;
     case 'arrow': return <>{' '}<Sign of="->" className="equation-arrow" />{' '}</>;
     case 'equilibrium': return <>{' '}<Sign of="<->" className="equation-arrow" />{' '}</>;
+    // The bracket of a nuclide ends with its symbol.
+    case 'text': return before?.kind === 'isotope' ? <>{token.text}<span className="plain-spelling">]</span></> : token.text;
     default: return token.text;
   }
 }
@@ -32,9 +39,8 @@ export const Equation = memo(function Equation({ equation, display = false }: Eq
       {tokens.map((token, index) => {
         const before = tokens[index - 1];
         // A hair of room after a count of species, so that "2 N*" is not read as "2N".
-        const gap = before?.kind === 'count' && token.kind !== 'star' ? <span className="equation-gap" /> : null;
-        const close = before?.kind === 'text' && tokens[index - 2]?.kind === 'isotope' ? <span className="plain-spelling">]</span> : null;
-        return <span key={index}>{close}{gap}{setToken(token)}</span>;
+        const gap = before?.kind === 'count' && token.kind !== 'star' && !before.text.endsWith(' ') ? <span className="equation-gap" /> : null;
+        return <span key={index}>{gap}{setToken(token, before)}</span>;
       })}
     </span>
   );

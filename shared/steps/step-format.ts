@@ -69,7 +69,7 @@ function spokenCoefficient(coefficient: number): string {
 }
 
 function spokenFormula(spelling: string): string {
-  return spelling.replace(/\[(\d+)([A-Z][a-z]?)\]/g, ' $1 $2 ').replace(/([A-Z][a-z]?)(?=[A-Z(])/g, '$1 ').replace(/(\))(?=[A-Z(])/g, '$1 ').replace(/(\d)(?=[A-Z(])/g, '$1 ').replace(/\s+/g, ' ').trim();
+  return spelling.replace(/\[(\d+)([A-Z][a-z]?)\]/g, ' $1 $2 ').replace(/\[([A-Z][a-z])\]/g, '$1').replace(/([A-Z][a-z]?)(?=[A-Z(])/g, '$1 ').replace(/(\))(?=[A-Z(])/g, '$1 ').replace(/(\d)(?=[A-Z(])/g, '$1 ').replace(/\s+/g, ' ').trim();
 }
 
 function spokenTerm({ coefficient, species }: Term): string {
