@@ -64,3 +64,11 @@ export async function listEntries(db: DbOrTx, collectionId: string) {
     .from(collectionEntries).innerJoin(entries, eq(entries.id, collectionEntries.entryId))
     .where(eq(collectionEntries.collectionId, collectionId)).orderBy(asc(collectionEntries.addedAt), asc(entries.accession));
 }
+
+/** Accessions of the entries in some of a person's kept collections. */
+export async function listAccessions(db: DbOrTx, ownerId: string, ids: readonly string[]): Promise<string[]> {
+  const rows = await db.selectDistinct({ accession: entries.accession }).from(collections)
+    .innerJoin(collectionEntries, eq(collectionEntries.collectionId, collections.id)).innerJoin(entries, eq(entries.id, collectionEntries.entryId))
+    .where(and(eq(collections.ownerId, ownerId), inArray(collections.id, [...ids]), isNull(collections.discardedAt)));
+  return rows.map(({ accession }) => accession);
+}

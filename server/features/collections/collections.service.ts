@@ -10,6 +10,12 @@ import * as repository from './collections.repository.ts';
 
 const isId = (text: string): boolean => /^[0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12}$/i.test(text);
 
+/** Accessions of the entries in the collections named, as far as they are the actor's own; nothing of anybody else's. */
+export async function accessionsCollected(db: DbOrTx, actor: Actor, ids: readonly string[]): Promise<string[]> {
+  const own = ids.filter(isId);
+  return actor.userId === null || own.length === 0 ? [] : repository.listAccessions(db, actor.userId, own);
+}
+
 /** A reader's own lists of entries. A list of somebody else does not exist for anybody but its owner. */
 export function createCollectionsService({ db, clock }: Context) {
   const missing = () => notFound('This collection');

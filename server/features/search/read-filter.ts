@@ -44,7 +44,7 @@ export function readFilter(asked: EntryFilter, names: VocabularyNames): FilterRe
     if (names.all(list).length > 0) note(filter, value, false, `“${value}” is no ${what} of the vocabulary.`);
     return [value];
   };
-  const { step, methodFamily, state: _state, ...rest } = asked;
+  const { step, methodFamily, state: _state, collection: _collection, ...rest } = asked;
   const filter: SearchFilter = {
     ...rest,
     metal: each(asked.metal, codes('metal', 'metal', 'metal')),

@@ -73,6 +73,7 @@ export function filterConditions(filter: SearchFilter): Map<FilterName, SQL> {
   anyOf('scope', rows.scope, filter.scope);
   anyOf('sampleType', rows.sampleType, filter.sampleType);
   anyOf('accession', rows.accession, filter.accession);
+  anyOf('collection', rows.accession, filter.collection);
   list('source', filter.source, (some) => {
     const ids = some.filter(isId);
     return or(inArray(rows.doi, some.map((text) => text.toLowerCase())), ids.length > 0 ? inArray(rows.sourceId, ids) : undefined);

@@ -16,6 +16,8 @@ export interface SearchFilter extends Omit<EntryFilter, 'step' | 'state' | 'meth
   /** Techniques of the families asked for, in lower case. */
   methodFamily?: readonly string[] | undefined;
   accession?: string[] | undefined;
+  /** Accessions of the entries in the collections asked for. */
+  collection?: string[] | undefined;
 }
 
 export type FilterName = keyof SearchFilter;

@@ -2,6 +2,7 @@ import type { Actor } from '#server/actor.ts';
 import type { Context } from '#server/context.ts';
 import { readCursor, writeCursor } from '#server/db/keyset.ts';
 import type { DbOrTx } from '#server/db/pool.ts';
+import { accessionsCollected } from '#server/features/collections/collections.service.ts';
 import { renewSearchRows, speciesIn } from '#server/features/entries/make-search-rows.service.ts';
 import type { EntryRecordsService } from '#server/features/entries/records.service.ts';
 import { Refusal } from '#server/refusal.ts';
@@ -32,7 +33,8 @@ interface Reading {
 /** A filter as asked by somebody, brought to what the engine compares. Near spellings are those of the accepted entries, so they are looked for among these only. */
 async function readQuestion(db: DbOrTx, engine: SearchEngine, actor: Actor, asked: EntryFilter): Promise<Reading> {
   const names = await readVocabularyNames(db);
-  const { filter, notes } = readFilter(asked, names);
+  const { filter: read, notes } = readFilter(asked, names);
+  const filter = asked.collection?.length ? { ...read, collection: await accessionsCollected(db, actor, asked.collection) } : read;
   const visible = visibilityOf(actor, asked.state);
   const acceptedOnly = visible.states.every((state) => state === 'accepted');
   const showingResultsFor = filter.q && acceptedOnly ? await nearSpelling(engine, filter.q) : null;

@@ -71,6 +71,28 @@ describe('a collection', () => {
   });
 });
 
+describe('a collection as a search', () => {
+  const found = async (client: Client, query: string) => (okBody(await client.get(`/entries?${query}`)).items as { accession: string }[]).map(({ accession }) => accession).sort();
+
+  it('finds, counts, summarises and exports what it holds, and what further filters leave of it', async () => {
+    const { id } = await started({ name: 'searched', accessions: accepted.slice(0, 2) });
+    expect(await found(reader.client, `collection=${id}`)).toEqual(accepted.slice(0, 2).sort());
+    expect(await found(reader.client, `collection=${id}&metal=Au`)).toEqual([]);
+    expect(okBody(await reader.client.get(`/entries?collection=${id}&metal=Au`)).emptiedBy).toEqual([{ filter: 'metal', totalWithout: 2 }, { filter: 'collection', totalWithout: 0 }].filter(({ totalWithout }) => totalWithout > 0));
+    expect(okBody(await reader.client.get(`/entries/summary?collection=${id}`)).points).toHaveLength(2);
+    const csv = await reader.client.get(`/entries/export?format=csv&collection=${id}`);
+    expect(csv.text.trim().split('\r\n')).toHaveLength(3);
+  });
+
+  it('finds nothing for anybody else, nor when it is discarded', async () => {
+    const { id } = await started({ name: 'private', accessions: accepted });
+    for (const client of [other.client, visitor]) expect(await found(client, `collection=${id}`)).toEqual([]);
+    await reader.client.post(`/collections/${id}/discard`);
+    expect(await found(reader.client, `collection=${id}`)).toEqual([]);
+    expect(await found(reader.client, 'collection=not-an-id')).toEqual([]);
+  });
+});
+
 describe('what is refused', () => {
   it.each<[string, object, string]>([
     ['no name', { name: ' ' }, 'invalid-input'],
