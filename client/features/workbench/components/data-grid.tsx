@@ -154,7 +154,9 @@ export function DataGrid({ label, columns, rows, onChange, faults = [], minRows 
                     );
                   })}
                   <td className="data-grid-remove">
-                    <Button look="quiet" small aria-label={`Remove row ${row + 1}`} onClick={() => removeRow(row)}>Remove</Button>
+                    {(row >= minRows || cells.some((cell) => cell !== '')) && (
+                      <Button look="quiet" small aria-label={`Remove row ${row + 1}`} onClick={() => removeRow(row)}>Remove</Button>
+                    )}
                   </td>
                 </tr>,
                 wrong.length > 0 && (

@@ -1,0 +1,39 @@
+import { uncertaintyCalculator } from '#shared/calculators/uncertainty.ts';
+import { sheet } from '../sheet.ts';
+
+const of = (...kinds: string[]) => ({ kind: kinds });
+
+export const uncertaintySheet = sheet({
+  calculator: uncertaintyCalculator,
+  fields: [
+    {
+      kind: 'choice', key: 'kind', label: 'What the source states', usual: 'expanded', look: 'list',
+      choices: [
+        { value: 'expanded', label: 'expanded uncertainty', hint: 'A multiple of the standard uncertainty, such as two standard deviations.' },
+        { value: 'confidence', label: 'confidence interval', hint: 'A half-width with its level.' },
+        { value: 'rectangular', label: 'limits, all values between them alike' },
+        { value: 'triangular', label: 'limits, the middle likeliest' },
+        { value: 'factor', label: 'factor', hint: '"Within a factor of 3": the uncertainty of the logarithm.' },
+      ],
+    },
+    { kind: 'number', key: 'value', label: 'Expanded uncertainty', symbol: 'U', only: of('expanded') },
+    { kind: 'number', key: 'coverageFactor', label: 'Coverage factor', symbol: 'k', only: of('expanded') },
+    { kind: 'number', key: 'halfWidth', label: 'Half-width', symbol: 'a', only: of('confidence', 'rectangular', 'triangular'), hint: 'The figure after the ±.' },
+    { kind: 'number', key: 'factor', label: 'Factor', symbol: 'f', only: of('factor') },
+    { kind: 'number', key: 'level', label: 'Level, two-sided', symbol: 'p', only: of('confidence', 'factor'), hint: '0.95 for 95 %.' },
+    { kind: 'number', key: 'degreesOfFreedom', label: 'Degrees of freedom', symbol: 'ν', only: of('confidence'), optional: true, hint: 'Without them the normal distribution.' },
+    { kind: 'text', key: 'unit', param: 'of', label: 'Unit', own: true, usual: '', most: 80, only: of('expanded', 'confidence', 'rectangular', 'triangular'), suggestions: ['kJ/mol', 'kcal/mol', 'eV'], hint: 'Shown with the result.' },
+  ],
+  example: { values: { value: '3', coverageFactor: '2', of: 'kJ/mol' } },
+  empty: 'Choose what the source states and give its figures.',
+  outcome: ({ result, own }) => ({
+    main: [{
+      label: result.scale === 'ln' ? 'Standard uncertainty of the natural logarithm' : 'Standard uncertainty', symbol: result.scale === 'ln' ? 'u(ln x)' : 'u',
+      value: result.standardUncertainty, unit: result.scale === 'ln' ? '' : own.unit ?? '',
+    }],
+    facts: [
+      { label: 'Divided by', value: result.divisor, digits: 6 },
+      ...(result.scale === 'ln' ? [{ label: 'As a factor of one standard uncertainty', value: Math.exp(result.standardUncertainty) }] : []),
+    ],
+  }),
+});
