@@ -29,7 +29,9 @@ const particleWords: Record<string, [operation: string, constant: string]> = {
   eV: ['Electronvolt per particle, × e N_A', 'e = 1.602176634e-19 C, N_A = 6.02214076e23 mol-1'],
   meV: ['Millielectronvolt per particle, × e N_A / 1000', 'e = 1.602176634e-19 C, N_A = 6.02214076e23 mol-1'],
   hartree: ['Hartree per particle, × E_h N_A', 'E_h = 4.3597447222060e-18 J, N_A = 6.02214076e23 mol-1'],
+  mhartree: ['Millihartree per particle, × E_h N_A / 1000', 'E_h = 4.3597447222060e-18 J, N_A = 6.02214076e23 mol-1'],
   rydberg: ['Rydberg per particle, × E_h N_A / 2', 'E_h = 4.3597447222060e-18 J, N_A = 6.02214076e23 mol-1'],
+  mrydberg: ['Millirydberg per particle, × E_h N_A / 2000', 'E_h = 4.3597447222060e-18 J, N_A = 6.02214076e23 mol-1'],
 };
 
 function fromUnit(unit: Unit): EnergyUnit | null {

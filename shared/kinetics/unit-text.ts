@@ -6,7 +6,7 @@ export interface UnitFactor {
   exponent: number;
 }
 
-const raised: Record<string, string> = { '⁰': '0', '¹': '1', '²': '2', '³': '3', '⁴': '4', '⁵': '5', '⁶': '6', '⁷': '7', '⁸': '8', '⁹': '9', '⁻': '-', '⁺': '', '˙': '.' };
+const raised: Record<string, string> = { '⁰': '0', '¹': '1', '²': '2', '³': '3', '⁴': '4', '⁵': '5', '⁶': '6', '⁷': '7', '⁸': '8', '⁹': '9', '⁻': '-', '⁺': '', '⁄': '/', 'ᐟ': '/', '·': '.', '˙': '.', '⋅': '.' };
 
 /** Brings the many ways of writing a unit to letters, `^`, digits, `/`, brackets and spaces. */
 function tidy(text: string): string {
@@ -15,11 +15,13 @@ function tidy(text: string): string {
     .replace(/\^\{\s?([+\u2212-]?[\d.]+)\s?\}/g, '^$1')
     .replace(/\\(?:mathrm|text|rm)\s?\{([^{}]*)\}/g, '$1')
     .replace(/\\[,;:! ]|\\cdot|\\times|[$~]/g, ' ')
-    .replace(/[⁰¹²³⁴⁵⁶⁷⁸⁹⁻⁺]+/g, (run) => `^${[...run].map((character) => raised[character]).join('')}`)
+    .replace(/[⁰¹²³⁴⁵⁶⁷⁸⁹⁻⁺]+(?:[⁄ᐟ·˙⋅][⁰¹²³⁴⁵⁶⁷⁸⁹]+)?/g, (run) => `^${[...run].map((character) => raised[character]).join('')}`)
     .replace(/[\u2212\u2010\u2011\u2013\uFE63\uFF0D]/g, '-')
+    .replace(/\^?(-?)½/g, '^$10.5')
     .replace(/[µμ]/g, 'u')
     .replace(/\u212B/g, 'Å')
-    .replace(/\u2215|÷/g, '/')
+    .replace(/[\u2215\u2044÷]/g, '/')
+    .replace(/(?:° ?|\bdeg )K\b/g, 'K')
     .replace(/[·⋅•∙×\u00a0\u2009\u202f\s]+/g, ' ')
     .replace(/\*\*/g, '^')
     .replace(/\*/g, ' ')
@@ -27,19 +29,25 @@ function tidy(text: string): string {
     .replace(/\bper (?:surface |active |adsorption )?site\b/gi, ' site-1')
     .replace(/(?<=\S )per\b/gi, '/')
     .replace(/^\s*per\b/i, '1/')
-    .replace(/\bmm Hg\b/g, 'mmHg')
-    .replace(/\bmolec\.(?=\W|$)/g, 'molec')
+    .replace(/\bmm[.-]? ?Hg\b/g, 'mmHg')
+    .replace(/\b(molec|at|sec|hr|min|atm)\.(?=\W|$)/g, '$1')
     .replace(/\be\.\s?u\.?(?![A-Za-z])/gi, 'eu')
     .replace(/\ba\.\s?u\.(?![A-Za-z])/g, 'hartree')
     .replace(/\b(lb|g|kg)-mol(e?)(?![A-Za-z])/g, '$1mol$2')
+    .replace(/\/ ?(lb|g|kg) mol(e?)(?![A-Za-z])/g, '/$1mol$2')
     .replace(/\b([km]?g)[ _-]?(?:\{cat\.?\}|\(cat\.?\)|cat\b\.?|catalyst\b)/g, '$1')
     .replace(/\bBtu ?\(?_?(IT|th)\)?/gi, (_, table: string) => `Btu_${table.toLowerCase() === 'th' ? 'th' : 'IT'}`)
-    .replace(/([A-Za-zÅ0-9)])\.(?=[A-Za-zÅ])/g, '$1 ')
+    .replace(/([A-Za-zÅ0-9)])[.-](?=[A-Za-zÅ])/g, '$1 ')
+    .replace(/[.,;\s]+$/, '')
+    .replace(/^\s*\/ ?(?=[A-Za-zÅ(])/, '1/')
     .trim();
 }
 
 const nameAt = /[A-Za-zÅåöÖ_ℓ]+|%/y;
-const exponentAt = /\^? ?(?:\{ ?([+-]?[\d.]+(?: ?\/ ?\d+)?) ?\}|\( ?([+-]?[\d.]+(?: ?\/ ?\d+)?) ?\)|([+-]?\d+(?:\.\d+)?|[+-]?\.\d+))/y;
+const exponentAt = /\^? ?(?:\{ ?([+-]?[\d.]+(?: ?\/ ?\d+)?) ?\}|\( ?([+-]?[\d.]+(?: ?\/ ?\d+)?) ?\)|([+-]?\d+\/[2-9](?![\d.])|[+-]?\d+(?:\.\d+)?|[+-]?\.\d+))/y;
+
+/** An exponent that lost its raised place in copying: `kJ mol -1`, `cm 3 s -1`. A space and a digit can mean nothing else. */
+const lostExponent = / (?=-\d|[2346](?![\d.]))/y;
 
 function exponentNumber(text: string): number {
   const [top, bottom] = text.split('/');
@@ -68,6 +76,7 @@ class UnitReader {
 
   /** An exponent straight after a factor, or 1; null when it can't be read. */
   private exponent(): { value: number; negative: boolean } | null {
+    this.match(lostExponent);
     const next = this.text[this.at];
     if (next === undefined || !/[\^{(\d+.-]/.test(next) || (next === '(' && !/^\( ?[+-]?[\d.]/.test(this.text.slice(this.at)))) return { value: 1, negative: false };
     const found = this.match(exponentAt);
@@ -146,12 +155,16 @@ class UnitReader {
  * Reads the text of a unit into its factors, or null when it is not a unit.
  *
  * After a slash every factor without a sign belongs to the denominator (`cm3/molecule s` is `cm3/(molecule s)`);
- * a factor with a written negative exponent keeps it (`L/mol s-1`). An empty text, `-` and `1` are dimensionless.
+ * a factor with a written negative exponent keeps it (`L/mol s-1`). A hyphen between factors multiplies them (`mol/cm2-s`).
+ * An empty text, `-` and `1` are dimensionless.
  */
 export function readUnitFactors(text: string): UnitFactor[] | null {
   if (text.length > 160) return null;
   const clean = tidy(text);
-  if (clean === '' || clean === '-' || clean === '1' || /^(?:dimensionless|none|unitless)$/i.test(clean)) return [];
+  if (clean === '' || clean === '-' || clean === '\u2014' || clean === '1' || /^(?:dimensionless|none|unitless)$/i.test(clean)) return [];
+  if (/^(?:wavenumbers?|kaysers?)$/i.test(clean)) return readUnitFactors('cm-1');
+  // A percentage of an amount is a composition, not an amount times a percentage.
+  if (/^(?:mol|at)[. ]*%$/i.test(clean)) return null;
   const reader = new UnitReader(clean);
   if (!reader.product(1, 0) || !reader.done) return null;
   return [...reader.factors].filter(([, exponent]) => exponent !== 0).map(([token, exponent]) => ({ token, exponent: Number(exponent.toPrecision(12)) }));

@@ -153,8 +153,11 @@ export function unitConstants(unit: Unit): string | undefined {
   return text || undefined;
 }
 
-/** Kinds of unit that a picker offers. */
-export const unitKinds = ['energy', 'energy-more', 'first-order', 'second-order-gas', 'second-order-surface', 'third-order-gas', 'pressure', 'areal-rate', 'mass-rate', 'diffusion', 'entropy', 'temperature', 'dimensionless'] as const;
+/** Kinds of unit that a picker offers. `pressure` is that of a rate per pressure, `gas` that of a pressure itself. */
+export const unitKinds = [
+  'energy', 'energy-more', 'first-order', 'second-order-gas', 'second-order-surface', 'third-order-gas', 'pressure', 'areal-rate', 'mass-rate', 'diffusion', 'entropy', 'temperature', 'dimensionless',
+  'gas', 'concentration', 'amount', 'mass', 'length', 'area', 'site-density', 'time', 'heating', 'exposure',
+] as const;
 
 /** One of `unitKinds`. */
 export type UnitKind = (typeof unitKinds)[number];
@@ -173,6 +176,16 @@ const pickers: Record<UnitKind, readonly string[]> = {
   entropy: ['J mol-1 K-1', 'cal mol-1 K-1', 'eV K-1', 'eu', 'kB'],
   temperature: ['K'],
   dimensionless: ['1'],
+  gas: ['Pa', 'kPa', 'hPa', 'mbar', 'bar', 'atm', 'Torr', 'mTorr', 'mmHg', 'psi', 'MPa'],
+  concentration: ['mol m-3', 'mol L-1', 'M', 'mM', 'mol cm-3', 'molecule cm-3', 'molecule m-3'],
+  amount: ['mol', 'mmol', 'umol', 'nmol', 'kmol', 'molecule', 'atom', 'site', 'ML'],
+  mass: ['kg', 'g', 'mg', 'ug', 'lb'],
+  length: ['m', 'cm', 'mm', 'um', 'nm', 'angstrom', 'pm'],
+  area: ['m2', 'cm2', 'mm2', 'nm2', 'angstrom2'],
+  'site-density': ['site m-2', 'site cm-2', 'site nm-2', 'atom cm-2', 'mol m-2', 'mol cm-2'],
+  time: ['s', 'min', 'h', 'd', 'ms', 'us', 'ns', 'ps', 'fs'],
+  heating: ['K s-1', 'K min-1'],
+  exposure: ['langmuir', 'Torr s', 'Pa s', 'mbar s'],
 };
 
 /** The units that a picker offers for a kind, in the order to show; Btu stands in a second-level kind. */

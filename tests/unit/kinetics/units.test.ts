@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { convertEnergy } from '#shared/kinetics/energy.ts';
 import { spellingCollisions, unitTokens } from '#shared/kinetics/unit-tokens.ts';
 import { dimensionText, findUnit, listUnits, sameDimension, scaleBetween, siUnit, unitKinds } from '#shared/kinetics/units.ts';
 
@@ -25,11 +26,50 @@ describe('units', () => {
     [['hartree', 'Ha', 'a.u.'], 'hartree'],
     [['molecule site-1 s-1', 'molecules per site per s'], 'molecule site-1 s-1'],
     [['m s-1', 'm/s'], 'm s-1'],
+    // Exponents that lost their raised place in copying, and the hyphen as a sign of multiplication.
+    [['kJ mol -1', 'kJ mol −1', 'kJ·mol –1', 'kJ/mol.'], 'kJ/mol'],
+    [['cm 3 molecule -1 s -1', 'cm3/molecule-s', 'cm3 molecule−1s−1'], 'cm3 molecule-1 s-1'],
+    [['mol/cm2-s', 'mol/cm2·sec', 'mol cm -2 s -1', 'gmol/(cm2 sec)'], 'mol cm-2 s-1'],
+    [['/s', '/ sec', '/second', 'per Second'], 's-1'],
+    // Fractions of every kind.
+    [['bar-0.3', 'bar^-0.3', 'bar^(-0.3)', 'bar^{-0.3}', 'bar⁻⁰·³', 'bar⁻⁰˙³'], 'bar-0.3'],
+    [['Pa-0.5', 'Pa^-1/2', 'Pa-1/2', 'Pa^{-1/2}', 'Pa⁻¹⁄²', 'Pa⁻¹ᐟ²', 'Pa^-½', 'Pa−½'], 'Pa-0.5'],
+    [['Pa0.5', 'Pa½', 'Pa^½', 'Pa^1/2'], 'Pa0.5'],
+    [['Torr-0.5 s-1', 'Torr^-1/2 s^-1', '1/(Torr½ s)'], 'Torr-0.5 s-1'],
+    // Energies.
+    [['mhartree', 'mHa', 'mEh', 'millihartree'], 'mhartree'],
+    [['mrydberg', 'mRy', 'mRyd'], 'mrydberg'],
+    [['eV/atom', 'eV atom-1', 'eV per atom', 'eV/at.'], 'eV/atom'],
+    [['cal/mol', 'cal/g-mol', 'cal/g mol', 'cals/gmole'], 'cal/mol'],
+    [['kcal_IT/mol', 'kcalIT mol-1'], 'kcal_IT/mol'],
+    [['cm-1', 'wavenumbers', 'wavenumber', 'kayser'], 'cm-1'],
+    [['erg/molecule', 'ergs per molecule'], 'erg/molecule'],
+    [['K', 'kelvin', '°K', 'deg K', 'degK'], 'K'],
+    [['cal mol-1 K-1', 'cal/(mol deg)', 'cal/deg mol', 'cal mol-1 deg-1', 'cal/mol-K'], 'cal mol-1 K-1'],
+    // Pressures, times, amounts, concentrations.
+    [['hPa', 'hectopascal'], 'hPa'],
+    [['mbar', 'mBar', 'millibar'], 'mbar'],
+    [['ubar', 'μbar', 'µbar'], 'ubar'],
+    [['atm', 'Atm', 'ATM', 'atm.', 'atmospheres'], 'atm'],
+    [['mmHg', 'mm Hg', 'mm-Hg', 'mm_Hg', 'mm. Hg', 'mmhg'], 'mmHg'],
+    [['psi', 'psia', 'PSI'], 'psi'],
+    [['dyn cm-2', 'dyne/cm2'], 'dyn cm-2'],
+    [['Torr s', 'torr·s', 'Torr-s', 'torr sec'], 'Torr s'],
+    [['langmuir', 'Langmuirs'], 'langmuir'],
+    [['us', 'μs', 'µs', 'usec', 'microseconds'], 'us'],
+    [['min', 'mins', 'minutes', 'min.'], 'min'],
+    [['Hz', 'hertz'], 'Hz'],
+    [['THz', 'terahertz'], 'THz'],
+    [['umol g-1 s-1', 'μmol g−1 s−1', 'µmol/(g s)', 'micromol gcat-1 s-1', 'umol/g/s'], 'umol g-1 s-1'],
+    [['atom cm-2', 'at/cm2', 'at. cm-2', 'atoms per cm2'], 'atom cm-2'],
+    [['uM', 'μM', 'micromolar'], 'uM'],
+    [['mol L-1', 'mol/L', 'mol l-1', 'mol/liter'], 'mol L-1'],
+    [['ML s-1', 'ML/s', 'monolayers per second'], 'ML s-1'],
   ])('reads %j one way', (spellings, symbol) => {
     for (const spelling of spellings) expect(findUnit(spelling)?.symbol, spelling).toBe(symbol);
   });
 
-  it.each(['foo', 's-1)', '(s', 's-', 'mol/s-1', '/s', 's/', 's//s', 's^', 's^x', 's^99', '2 s', '1 1', '10 s-1', 's^{-1', 'kj/Mol2x', '()', '((((((((s))))))))', 'x'.repeat(200), 'btu/lbmol', '1/'])('does not take %j for a unit', (text) => {
+  it.each(['foo', 's-1)', '(s', 's-', 'mol/s-1', '//s', '/', '/ s-1', 's 7', 's 2.5', 'mol%', 'at. %', 'psig', 'Mg', 'm·in', 'm in', 'in', 'KM', 'S-1', 'bar^-n', 'eV/N2', '°C', 'kJ/mol-N2', 'M i n', 'Pa^-1/0', 's/', 's//s', 's^', 's^x', 's^99', '2 s', '1 1', '10 s-1', 's^{-1', 'kj/Mol2x', '()', '((((((((s))))))))', 'x'.repeat(200), 'btu/lbmol', '1/'])('does not take %j for a unit', (text) => {
     expect(findUnit(text)).toBeNull();
   });
 
@@ -46,6 +86,52 @@ describe('units', () => {
     expect(findUnit('K')?.dimension.temperature).toBe(1);
     expect(findUnit('k')).toBeNull();
     expect(spellingCollisions()).toEqual([]);
+  });
+
+  it('has no spelling that reads as two units', () => {
+    expect(spellingCollisions()).toEqual([]);
+    const owner = new Map(unitTokens.flatMap((token) => [token.symbol, ...token.spellings].map((spelling) => [spelling, token] as const)));
+    expect(owner.size).toBeGreaterThan(300);
+    for (const [spelling, token] of owner) {
+      // As it stands, with an exponent, and beside another factor, it is this unit and no other.
+      const alone = findUnit(spelling);
+      expect(alone?.symbol, spelling).toBe(token.symbol);
+      expect(alone?.factors.map((factor) => [factor.token.symbol, factor.exponent]), spelling).toEqual([[token.symbol, 1]]);
+      expect(findUnit(`${spelling}2`)?.symbol, spelling).toBe(`${token.symbol}2`);
+      // Written together two units are never read as two: `min` is no metre inch, `ms` no metre second.
+      for (let cut = 1; cut < spelling.length; cut += 1) {
+        const [first, second] = [owner.get(spelling.slice(0, cut)), owner.get(spelling.slice(cut))];
+        if (first && second && first !== second) expect(findUnit(`${first.symbol} ${second.symbol}`)?.symbol, spelling).not.toBe(token.symbol);
+      }
+    }
+  });
+
+  it('lets capitals alone tell two units apart only where trade usage does', () => {
+    const byLower = new Map<string, Set<string>>();
+    for (const token of unitTokens) {
+      for (const spelling of [token.symbol, ...token.spellings]) {
+        const lower = spelling.toLowerCase();
+        byLower.set(lower, (byLower.get(lower) ?? new Set()).add(token.symbol));
+      }
+    }
+    const apart = [...byLower].filter(([, symbols]) => symbols.size > 1).map(([, symbols]) => [...symbols].sort().join(' '));
+    expect(apart.sort()).toEqual(['M m', 'ML mL', 'mM mm', 'nM nm', 'uM um']);
+  });
+
+  // Sizes: SI Brochure, 9th edition; NIST SP 811 (2008), appendix B.8.
+  it.each([
+    ['hPa', 100], ['mbar', 100], ['kbar', 1e8], ['ubar', 0.1], ['atm', 101325], ['Torr', 101325 / 760], ['mmHg', 133.322387415], ['psi', 6894.757293168361], ['dyn cm-2', 0.1],
+    ['langmuir', 101325 / 760 / 1e6], ['week', 604800], ['THz', 1e12], ['GHz', 1e9], ['MHz', 1e6], ['kHz', 1e3], ['pmol', 1e-12], ['uM', 1e-3], ['nM', 1e-6], ['ug', 1e-9], ['ng', 1e-12], ['uL', 1e-9],
+    ['pm', 1e-12], ['erg', 1e-7], ['cal_IT', 4.1868], ['kcal_IT', 4186.8], ['mrydberg', 4.359744722206e-18 / 2000], ['mhartree', 4.359744722206e-21], ['ppm', 1e-6], ['ppb', 1e-9],
+    ['bar-0.3', 1e5 ** -0.3], ['mol g-1 s-1 bar-0.3', 1000 * 1e5 ** -0.3],
+  ])('1 %s is %d in SI', (text, size) => {
+    expect(Math.abs((findUnit(text)?.toSi ?? NaN) / size - 1)).toBeLessThan(1e-15 * 4);
+  });
+
+  it('reads the new energies as energies', () => {
+    for (const [unit, kJ] of [['mHa', 2.6254996394798], ['mRy', 1.3127498197399], ['kcal_IT/mol', 4.1868], ['erg/molecule', 6.02214076e13], ['eV/atom', 96.48533212331]] as const) {
+      expect(Math.abs(convertEnergy({ value: 1, from: unit, to: 'kJ/mol' }).value / kJ - 1), unit).toBeLessThan(1e-11);
+    }
   });
 
   it('counts particles and sites', () => {
