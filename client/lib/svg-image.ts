@@ -19,28 +19,44 @@ const noteRow = 15;
 /** What a drawing looks like, as attributes that every program understands; with the value that need not be written. */
 const looks: readonly (readonly [name: string, usual: string])[] = [
   ['fill', ''], ['fill-opacity', '1'], ['stroke', 'none'], ['stroke-width', ''], ['stroke-dasharray', 'none'], ['stroke-linecap', 'butt'], ['stroke-linejoin', 'miter'],
-  ['stroke-opacity', '1'], ['opacity', '1'],
+  ['stroke-opacity', '1'], ['opacity', '1'], ['paint-order', 'normal'],
 ];
 const textLooks: readonly (readonly [name: string, usual: string])[] = [['font-family', ''], ['font-size', ''], ['font-weight', '400'], ['font-style', 'normal'], ['text-anchor', 'start']];
 const dropped = /^(class|style|role|tabindex|id|aria-.*|data-.*)$/;
 
-/** Writes what the page's styles make of an element into its own attributes. */
-function inlineLook(element: Element): void {
-  const style = window.getComputedStyle(element);
-  const texty = /^(text|tspan)$/.test(element.localName);
-  const wanted = texty ? [...looks, ...textLooks] : looks;
-  const found = element.localName === 'g' || element.localName === 'svg' ? wanted.filter(([name]) => name === 'opacity') : wanted;
-  const written = found.map(([name, usual]) => [name, style.getPropertyValue(name).trim(), usual] as const);
-  for (const name of element.getAttributeNames()) if (dropped.test(name)) element.removeAttribute(name);
-  for (const [name, value, usual] of written) {
-    if (value !== '' && value !== usual) element.setAttribute(name, plainColour(value.replaceAll('"', "'")));
-    else if (value === usual) element.removeAttribute(name);
-  }
+/** The properties that say how an element of a drawing looks; a group only passes on how strong its parts are. */
+function looksOf(element: Element): readonly (readonly [name: string, usual: string])[] {
+  if (/^(g|svg)$/.test(element.localName)) return looks.filter(([name]) => name === 'opacity');
+  return /^(text|tspan)$/.test(element.localName) ? [...looks, ...textLooks] : looks;
 }
 
-/** Colours that older programs do not read, as the plain ones they stand for. */
-function plainColour(value: string): string {
-  return /^rgba\(0, 0, 0, 0\)$/.test(value) ? 'none' : value;
+/** What the page's styles make of an element; of a part of a text only what differs from the text. */
+function computedLook(element: Element): [name: string, value: string | null][] {
+  const style = window.getComputedStyle(element);
+  const parent = element.localName === 'tspan' && element.parentElement ? window.getComputedStyle(element.parentElement) : null;
+  const bare = style.getPropertyValue('stroke').trim() === 'none';
+  return looksOf(element).flatMap(([name, usual]): [string, string | null][] => {
+    const value = style.getPropertyValue(name).trim();
+    if (value === '') return [];
+    const idle = value === usual || (parent !== null && parent.getPropertyValue(name).trim() === value) || (bare && name.startsWith('stroke-'));
+    return [[name, idle ? null : plainLook(value)]];
+  });
+}
+
+/** Colours and lengths in the spelling that older programs read too. */
+function plainLook(value: string): string {
+  if (value === 'rgba(0, 0, 0, 0)') return 'none';
+  const colour = /^rgb\((\d+), (\d+), (\d+)\)$/.exec(value);
+  if (colour) return `#${colour.slice(1).map((part) => Number(part).toString(16).padStart(2, '0')).join('')}`;
+  return value.replaceAll('"', "'").replace(/(\d)px\b/g, '$1');
+}
+
+function writeLook(element: Element, look: readonly (readonly [name: string, value: string | null])[]): void {
+  for (const name of element.getAttributeNames()) if (dropped.test(name)) element.removeAttribute(name);
+  for (const [name, value] of look) {
+    if (value === null) element.removeAttribute(name);
+    else element.setAttribute(name, value);
+  }
 }
 
 function make<Name extends keyof SVGElementTagNameMap>(name: Name, attributes: Readonly<Record<string, string | number>>, text?: string): SVGElementTagNameMap[Name] {
@@ -115,8 +131,11 @@ export async function svgImage({ svg, legend, title, notes = [] }: SvgImageInput
         total += noteRow;
         copy.append(make('text', { x: 0, y: total, class: 'plot-copy-note' }, line));
       }
-      for (const element of [copy, ...copy.querySelectorAll('*')]) {
-        if (element.localName !== 'title') inlineLook(element);
+      const elements = [copy, ...copy.querySelectorAll('*')].filter((element) => element.localName !== 'title');
+      // All are read before the first is written: what a parent loses would change its children.
+      const found = elements.map((element) => [element, computedLook(element)] as const);
+      for (const [element, look] of found) {
+        writeLook(element, look);
         const family = element.localName === 'text' ? element.getAttribute('font-family') : null;
         if (family) families.add((family.split(',')[0] ?? '').replace(/["']/g, '').trim());
       }

@@ -60,7 +60,7 @@ export function ArrheniusPlot({ lines, temperatureK, unit, height = 270, activeI
   const xFrom = Math.max(0.12, 1000 / hottest - span * 0.1);
   const xTo = 1000 / coldest + span * 0.1;
 
-  const sampled = lines.map((one) => ({ one, ...sampleLine(one, xFrom, xTo) }));
+  const sampled = lines.map((one, index) => ({ one, index, ...sampleLine(one, xFrom, xTo) }));
   // A rate constant of nothing has no logarithm: its line is not drawn and does not stretch the axis.
   const all = sampled.flatMap(({ samples }) => samples.flatMap((sample) => [sample.low, sample.high])).filter(Number.isFinite);
   if (all.length === 0) return <p className="text-second">No rate constant to draw.</p>;
@@ -78,16 +78,16 @@ export function ArrheniusPlot({ lines, temperatureK, unit, height = 270, activeI
         {topAxis && <PlotTopAxis x={x} left={pad.left} right={width - pad.right} top={pad.top} />}
         <path d={`M${atX} ${pad.top - 6}V${height - pad.bottom}`} stroke="var(--color-ochre)" strokeWidth="1.500" strokeDasharray="2 3" />
         <text className="plot-doubt" x={atX > width * 0.6 ? atX - 7 : atX + 7} y={pad.top + 4} textAnchor={atX > width * 0.6 ? 'end' : 'start'}>{`${temperatureK} K${extrapolated ? ', extrapolated' : ''}`}</text>
-        {sampled.map(({ one, samples, solid }, index) => {
+        {inFront(sampled, active).map(({ one, index, samples, solid }) => {
           const look = seriesLook(index);
           const faded = active !== null && active !== one.id;
           const banded = lines.length <= mostBands || active === one.id;
           const yAt = y(one.lnK(temperatureK) / Math.LN10);
           return (
-            <g key={one.id} opacity={faded ? 0.3 : 1}>
+            <g key={one.id} opacity={faded ? 0.2 : 1}>
               {banded && solid.length > 1 && solid.some((sample) => sample.high > sample.low) && <path d={band(solid) ?? ''} fill={look.colour} opacity="0.18" />}
               <path d={path(samples) ?? ''} fill="none" stroke={look.colour} strokeWidth="1.700" strokeDasharray="5 4" opacity={solid.length > 1 ? 0.85 : 1} />
-              {solid.length > 1 && <path d={path(solid) ?? ''} fill="none" stroke="var(--color-paper)" strokeWidth="4" />}
+              {lines.length <= mostBands && solid.length > 1 && <path d={path(solid) ?? ''} fill="none" stroke="var(--color-paper)" strokeWidth="4" />}
               {solid.length > 1 && <path d={path(solid) ?? ''} fill="none" stroke={look.colour} strokeWidth="2.200" />}
               {Number.isFinite(yAt) && <SeriesMark index={index} x={atX} y={yAt} open={!within(one, temperatureK)} colour={within(one, temperatureK) ? look.colour : 'var(--color-ochre)'} />}
             </g>
@@ -106,6 +106,11 @@ export function ArrheniusPlot({ lines, temperatureK, unit, height = 270, activeI
       <ArrheniusTable lines={lines} temperatureK={temperatureK} unit={unit} />
     </figure>
   );
+}
+
+/** The line that is pointed at is drawn last, over the others. */
+function inFront<Line extends { one: ArrheniusLine }>(sampled: readonly Line[], active: string | null): Line[] {
+  return [...sampled.filter(({ one }) => one.id !== active), ...sampled.filter(({ one }) => one.id === active)];
 }
 
 function drawable({ low, y, high }: Sample): boolean {

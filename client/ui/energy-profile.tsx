@@ -67,7 +67,9 @@ export function EnergyProfile({ pathways: given, unit, what = 'Energy', highest,
     const to = moves[event.key];
     if (to !== undefined) {
       event.preventDefault();
-      setActive(places[Math.max(0, Math.min(places.length - 1, to))] ?? null);
+      const next = places[Math.max(0, Math.min(places.length - 1, to))] ?? null;
+      setActive(next);
+      if (next) document.getElementById(`${own}-${next.pathway}-${next.state}`)?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
     } else if (event.key === 'Escape') setActive(null);
   }
 
@@ -89,6 +91,14 @@ export function EnergyProfile({ pathways: given, unit, what = 'Energy', highest,
                 onActive={(state) => setActive(state === null ? null : { pathway: index, state })}
               />
             ))}
+            {pathways.map((pathway, index) => {
+              // Over all stairs; highest points that several pathways have in one place stand side by side.
+              const at = top[index] ?? 0;
+              const shared = top.filter((one) => one === at).length > 1;
+              const aside = shared ? (index - (pathways.length - 1) / 2) * Math.min(44, (slot - 10) / pathways.length) : 0;
+              const state = pathway.states[at];
+              return state && <Highest key={pathway.id} energy={text(state.energy)} x={middle(at) + aside} y={y(state.energy + (shared ? 0 : state.u ?? 0))} colour={single ? 'var(--color-ink)' : seriesLook(index).colour} />;
+            })}
             <Names bands={bands} pathways={pathways} bottom={bottom} single={single} active={active} />
           </svg>
         </div>
@@ -159,7 +169,6 @@ function Pathway({ pathway, index, of, slot, y, text, highest, active, faded, st
       {pathway.states.map((state, at) => {
         const [from, to] = [edge(at), edge(at + 1)];
         const [centre, level] = [(from + to) / 2, y(state.energy)];
-        const marked = at === highest;
         const raised = state.kind === 'transition';
         return (
           <g
@@ -171,9 +180,7 @@ function Pathway({ pathway, index, of, slot, y, text, highest, active, faded, st
             {!raised && active === at && <path d={`M${from} ${level}H${to}`} stroke={colour} strokeWidth="3" fill="none" />}
             {state.u ? <path className="profile-whisker" d={`M${centre - 4} ${y(state.energy + state.u)}h8M${centre} ${y(state.energy + state.u)}V${y(state.energy - state.u)}M${centre - 4} ${y(state.energy - state.u)}h8`} stroke={colour} strokeWidth="1" fill="none" /> : null}
             {of > 1 && raised && <SeriesMark index={index} x={centre} y={level} open={false} colour={colour} size={4} />}
-            {(marked || of === 1) && (
-              <Figure state={state} x={centre} y={y} text={text} marked={marked} />
-            )}
+            {of === 1 && at !== highest && <Figure state={state} x={centre} y={y} text={text} />}
           </g>
         );
       })}
@@ -181,21 +188,24 @@ function Pathway({ pathway, index, of, slot, y, text, highest, active, faded, st
   );
 }
 
-/** The energy of a state, clear of its whisker: over a sill and over the highest, under a state. */
-function Figure({ state, x, y, text, marked }: { state: ProfileState; x: number; y: LinearScale; text: (energy: number) => string; marked: boolean }) {
+/** The energy of a state, clear of its whisker: over a sill, under a state. */
+function Figure({ state, x, y, text }: { state: ProfileState; x: number; y: LinearScale; text: (energy: number) => string }) {
   const u = state.u ?? 0;
-  const over = marked || state.kind === 'transition';
-  const at = over ? y(state.energy + u) - (marked ? 18 : 7) : y(state.energy - u) + 16;
+  return <text x={x} y={state.kind === 'transition' ? y(state.energy + u) - 7 : y(state.energy - u) + 16} textAnchor="middle">{text(state.energy)}</text>;
+}
+
+/** The mark of the highest point of a pathway, with its energy. */
+function Highest({ energy, x, y, colour }: { energy: string; x: number; y: number; colour: string }) {
   return (
-    <>
-      {marked && <Pointer x={x} y={y(state.energy + u) - 5} />}
-      <text className={marked ? 'plot-ink profile-highest' : undefined} fontWeight={marked ? 600 : undefined} x={x} y={at} textAnchor="middle">{text(state.energy)}</text>
-    </>
+    <g className="profile-highest" aria-hidden="true">
+      <Pointer x={x} y={y - 5} colour={colour} />
+      <text className="plot-ink plot-halo" fontWeight={600} x={x} y={y - 18} textAnchor="middle">{energy}</text>
+    </g>
   );
 }
 
-function Pointer({ x, y }: { x: number; y: number }) {
-  return <path d={`M${x - 5} ${y - 8}h10L${x} ${y}Z`} fill="var(--color-ink)" />;
+function Pointer({ x, y, colour = 'var(--color-ink)' }: { x: number; y: number; colour?: string }) {
+  return <path d={`M${x - 5} ${y - 8}h10L${x} ${y}Z`} fill={colour} />;
 }
 
 function PathwaySample({ index }: { index: number }) {

@@ -80,7 +80,9 @@ export function FitPlot({ points, line, unit, logarithm = 'log10', onToggle, hei
     ...whole.flatMap((one) => [one.y - one.half, one.y + one.half]),
   ];
   const residuals = drawn.map((point) => ({ ...point, residual: (point.lnK - lnFit(point.temperatureK)) / per, u: (point.uLnK ?? 0) / per }));
-  const farthest = Math.max(1e-9, ...residuals.map((one) => Math.abs(one.residual) + one.u).filter(Number.isFinite));
+  // What is left out of the fit does not set the scale of what is in it; beyond it stands an arrow at the edge.
+  const kept = residuals.filter((one) => !one.excluded);
+  const farthest = Math.max(1e-9, ...(kept.length > 0 ? kept : residuals).map((one) => Math.abs(one.residual) + one.u).filter(Number.isFinite));
 
   const x = linearScale({ domain: ends, range: [pad.left, width - pad.right] });
   const y = linearScale({ domain: [Math.min(...heights), Math.max(...heights)], range: [height - 8, pad.top], nice: 8 });
@@ -118,7 +120,9 @@ export function FitPlot({ points, line, unit, logarithm = 'log10', onToggle, hei
             {residuals.map((one) => (
               <g key={one.index}>
                 {!one.excluded && <path d={`M${x(1000 / one.temperatureK)} ${residualY(0)}V${residualY(one.residual)}`} stroke="var(--color-slate)" strokeWidth="1" opacity="0.6" />}
-                <PointMark point={one} x={x(1000 / one.temperatureK)} y={residualY(one.residual)} whisker={one.u ? [residualY(one.residual - one.u), residualY(one.residual + one.u)] : null} title={`${one.index + 1}`} onToggle={onToggle && (() => onToggle(one.index))} />
+                {Math.abs(one.residual) > residualY.domain[1]
+                  ? <Beyond x={x(1000 / one.temperatureK)} y={residualY(Math.sign(one.residual) * residualY.domain[1])} up={one.residual > 0} />
+                  : <PointMark point={one} x={x(1000 / one.temperatureK)} y={residualY(one.residual)} whisker={one.u ? [residualY(one.residual - one.u), residualY(one.residual + one.u)] : null} title={`${one.index + 1}`} onToggle={onToggle && (() => onToggle(one.index))} />}
               </g>
             ))}
           </>
@@ -150,7 +154,7 @@ function legendOf({ line, band, excluded }: { line: FitPlotLine | null; band: bo
   return [
     { id: 'point', label: 'rate constant', sample: <circle cx="13" cy="6" r="4" fill="var(--color-ink)" /> },
     ...(excluded ? [{ id: 'excluded', label: 'left out of the fit', sample: <Struck x={13} y={6} /> }] : []),
-    ...(line ? [{ id: 'line', label: 'fitted line, dashed outside its points', sample: <path d="M0 6H15" stroke="var(--color-lichen)" strokeWidth="2.200" /> }] : []),
+    ...(line ? [{ id: 'line', label: 'fitted line, dashed outside its points', sample: <><path d="M0 6H13" stroke="var(--color-lichen)" strokeWidth="2.200" /><path d="M15 6H26" stroke="var(--color-lichen)" strokeWidth="1.500" strokeDasharray="4 3" /></> }] : []),
     ...(band ? [{ id: 'band', label: bandLabel, sample: <rect x="1" y="1" width="24" height="10" fill="var(--color-lichen)" opacity="0.25" /> }] : []),
   ];
 }
@@ -162,6 +166,12 @@ function Struck({ x, y }: { x: number; y: number }) {
       <path d={`M${x - 5.5} ${y + 5.5}L${x + 5.5} ${y - 5.5}`} />
     </g>
   );
+}
+
+/** A residual that lies beyond its axis. */
+function Beyond({ x, y, up }: { x: number; y: number; up: boolean }) {
+  const tip = up ? -1 : 1;
+  return <path className="fit-beyond" d={`M${x} ${y - tip * 10}V${y}M${x - 4} ${y - tip * 5}L${x} ${y}L${x + 4} ${y - tip * 5}`} stroke="var(--color-second)" strokeWidth="1.500" fill="none" />;
 }
 
 interface PointMarkProps {

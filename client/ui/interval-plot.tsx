@@ -37,9 +37,9 @@ export function IntervalPlot({ rows, pooled = null, what = 'Value', unit, digits
 
   // On a narrow page each name stands over its interval; on a wide one beside it.
   const stacked = width < narrowBelow;
-  const decimals = digits ?? Math.max(0, ...rows.map((row) => (row.value === null ? 0 : decimalsOf(row.value, { u: row.u, uDigits: 2, significantDigits: 3, guard: 0 }))));
+  const decimals = digits ?? Math.max(...rows.map(decimalsOfRow));
   const text = (value: number) => fixed(value, decimals);
-  const figures = new Map(rows.map((row) => [row.id, figureText(row, text)]));
+  const figures = new Map(rows.map((row) => [row.id, figureText(row, decimals)]));
   const figureRoom = Math.max(...[...figures.values()].map((one) => one.length)) * 6.6 + 10;
   const labelRoom = stacked ? 0 : Math.min(width * 0.36, 14 + Math.max(...rows.map((row) => row.label.length), 10) * 6.4);
   const left = stacked ? 10 : labelRoom + 14;
@@ -88,10 +88,10 @@ export function IntervalPlot({ rows, pooled = null, what = 'Value', unit, digits
           : (
             <g key={line.row.id} className="interval-row">
               <title>{`${line.row.label}: ${figures.get(line.row.id)}`}</title>
-              <text className="plot-ink" x={stacked ? left : labelRoom} y={stacked ? from + 15 : middle + 4} textAnchor={stacked ? 'start' : 'end'}>
+              <text className="plot-ink plot-halo" x={stacked ? left : labelRoom} y={stacked ? from + 15 : middle + 4} textAnchor={stacked ? 'start' : 'end'}>
                 {fittedLabel(line.row.label, stacked ? right - left - figureRoom : labelRoom)}
               </text>
-              <text x={stacked ? right : width} y={stacked ? from + 15 : middle + 4} textAnchor="end">{figures.get(line.row.id)}</text>
+              <text className="plot-halo" x={stacked ? right : width} y={stacked ? from + 15 : middle + 4} textAnchor="end">{figures.get(line.row.id)}</text>
               <Interval row={line.row} x={x} y={middle} size={most > 0 ? 2.5 + 4.5 * Math.sqrt((line.row.weight ?? 0) / most) : 4.5} />
             </g>
           )))}
@@ -106,12 +106,22 @@ export function IntervalPlot({ rows, pooled = null, what = 'Value', unit, digits
         )}
       </svg>
       <PlotLegend items={legendOf({ rows, pooled, reference, intervalLabel, weighted: most > 0 })} />
-      <IntervalTable {...{ rows, pooled, text, unit, rowName, intervalLabel }} />
+      <IntervalTable {...{ rows, pooled, text, decimals, unit, rowName, intervalLabel }} />
     </figure>
   );
 }
 
-function figureText({ value, u, low, high, bound = '=' }: IntervalRow, text: (value: number) => string): string {
+/** Decimals of a value: by its uncertainty, by the width of its interval, else those that three digits need. */
+function decimalsOfRow({ value, u, low, high }: IntervalRow): number {
+  const spread = u ?? (value !== null && low != null && high != null ? (high - low) / 4 : null);
+  return decimalsOf(value ?? high ?? low ?? 0, { u: spread, uDigits: 2, significantDigits: 3, guard: 0 });
+}
+
+/** The figure of a row; without an uncertainty it shows no zeros that nobody reported. */
+function figureText(row: IntervalRow, most: number): string {
+  const { value, u, low, high, bound = '=' } = row;
+  const own = Math.min(most, decimalsOfRow(row));
+  const text = (number: number) => (u ? fixed(number, own) : fixed(Number(number.toFixed(own)), 12).replace(/\.?0+$/, ''));
   if (bound === 'range' && low != null && high != null) return `${text(low)} to ${text(high)}`;
   const limit = value ?? high ?? low;
   if (limit == null) return 'not reported';
@@ -173,12 +183,13 @@ interface IntervalTableProps {
   rows: readonly IntervalRow[];
   pooled: Pooled | null;
   text: (value: number) => string;
+  decimals: number;
   unit: string;
   rowName: string;
   intervalLabel: string;
 }
 
-function IntervalTable({ rows, pooled, text, unit, rowName, intervalLabel }: IntervalTableProps) {
+function IntervalTable({ rows, pooled, text, decimals, unit, rowName, intervalLabel }: IntervalTableProps) {
   const grouped = rows.some((row) => row.group);
   const weighted = rows.some((row) => row.weight != null);
   const between = (ends: readonly [number, number] | null | undefined) => (ends && ends[1] > ends[0] ? `${text(ends[0])} to ${text(ends[1])}` : 'none');
@@ -195,7 +206,7 @@ function IntervalTable({ rows, pooled, text, unit, rowName, intervalLabel }: Int
           cells: [
             row.href ? <Link key="link" to={row.href}>{row.label}</Link> : row.label,
             ...(grouped ? [row.group ?? ''] : []),
-            figureText(row, text),
+            figureText(row, decimals),
             isOpenAbove(row.bound) || isOpenBelow(row.bound) ? 'bound' : between(extentOf(row)),
             ...(weighted ? [row.weight == null ? 'left out' : fixed(row.weight * 100, 1)] : []),
           ],

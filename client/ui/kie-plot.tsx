@@ -93,7 +93,7 @@ export function KiePlot({ lines, points = [], limit, limitLabel = 'semiclassical
         {inside(1) && (
           <g className="kie-one" aria-hidden="true">
             <path d={`M${pad.left} ${y(1)}H${width - pad.right}`} stroke="var(--color-edge)" strokeWidth="1" />
-            <text x={width - pad.right} y={y(1) - 5} textAnchor="end">no effect</text>
+            <text className="plot-halo" x={width - pad.right} y={y(1) - 5} textAnchor="end">no effect</text>
           </g>
         )}
         {limit && <path className="kie-limit" d={path(limits) ?? ''} fill="none" stroke="var(--color-rust)" strokeWidth="1.500" strokeDasharray="1.500 3" />}

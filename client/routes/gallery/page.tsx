@@ -1,6 +1,8 @@
 import { PageHead } from '#client/ui/page-head.tsx';
 import { GalleryControls } from './gallery-controls.tsx';
 import { GalleryEntry } from './gallery-entry.tsx';
+import { GalleryGrid } from './gallery-grid.tsx';
+import { GalleryPlots } from './gallery-plots.tsx';
 import { GallerySearch } from './gallery-search.tsx';
 
 /** Every piece of the design kit on one page, with invented values, to look at while working on it; not part of the built application. */
@@ -11,6 +13,8 @@ export function Component() {
       <GallerySearch />
       <GalleryEntry />
       <GalleryControls />
+      <GalleryGrid />
+      <GalleryPlots />
     </div>
   );
 }
