@@ -1,4 +1,5 @@
 import { useEffect, useId, useRef, type ReactNode } from 'react';
+import { createPortal } from 'react-dom';
 
 interface DialogProps {
   open: boolean;
@@ -9,7 +10,10 @@ interface DialogProps {
   actions?: ReactNode;
 }
 
-/** A question above the page, by the browser's own dialog: focus is kept inside, Escape closes, the focus returns to where it was. */
+/**
+ * A question above the page, by the browser's own dialog: focus is kept inside, Escape closes, the focus returns to where it was.
+ * It stands at the end of the document, so that it looks the same wherever it is asked.
+ */
 export function Dialog({ open, title, onClose, children, actions }: DialogProps) {
   const id = useId();
   const element = useRef<HTMLDialogElement>(null);
@@ -30,7 +34,7 @@ export function Dialog({ open, title, onClose, children, actions }: DialogProps)
     };
   }, [open]);
 
-  return (
+  return createPortal(
     <dialog
       ref={element}
       className="dialog"
@@ -52,6 +56,7 @@ export function Dialog({ open, title, onClose, children, actions }: DialogProps)
           {actions && <div className="flex flex-wrap gap-3 pt-5">{actions}</div>}
         </>
       )}
-    </dialog>
+    </dialog>,
+    document.body,
   );
 }

@@ -1,5 +1,5 @@
 import { useInfiniteQuery, useQuery } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import { Link, useNavigate, useParams } from 'react-router-dom';
 import { printSearch, type SortKey } from '#shared/contracts/entry-search.ts';
 import type { CollectionDetail } from '#shared/contracts/collections.ts';
@@ -65,12 +65,13 @@ function Collection({ collection }: { collection: CollectionDetail }) {
         <EmptyState title="Nothing is collected yet" actions={<LinkButton to="/search">Go to the search</LinkButton>}>
           <p>Choose rows in the search, or open an entry, and add them to this collection.</p>
         </EmptyState>
-      ) : <CollectedEntries id={id} name={name} />}
+      ) : <CollectedEntries collection={collection} />}
     </>
   );
 }
 
-function CollectedEntries({ id, name }: { id: string; name: string }) {
+function CollectedEntries({ collection }: { collection: CollectionDetail }) {
+  const { id, name, items } = collection;
   const { temperatureK } = useInstrument();
   const [sort, setSort] = useState<SortKey>('step');
   const [activeId, setActiveId] = useState<string | null>(null);
@@ -80,7 +81,9 @@ function CollectedEntries({ id, name }: { id: string; name: string }) {
   const search = useInfiniteQuery(entrySearchOptions({ collection: [id] }, sort, temperatureK));
   const page = search.data?.pages[0];
   const shown = search.data?.pages.flatMap(({ items }) => items) ?? [];
-  const accessions = [...chosen.keys()];
+  const held = useMemo(() => new Set(items.map(({ accession }) => accession)), [items]);
+  // Rows chosen elsewhere stay chosen there; here only those of this collection count.
+  const accessions = [...chosen.keys()].filter((accession) => held.has(accession));
 
   function takeOut() {
     remove.mutate({ id, accessions }, {

@@ -66,7 +66,7 @@ function StartCollection() {
         label="New collection" placeholder="name" maxLength={120} value={name} onChange={(event) => setName(event.target.value)}
         error={missing && !name.trim() ? 'Give the collection a name.' : create.error?.message}
       />
-      <Button type="submit" busy={create.isPending}>Start it</Button>
+      <Button type="submit" className="mb-1.5" busy={create.isPending}>Start it</Button>
     </form>
   );
 }

@@ -3,6 +3,7 @@ import { useId, useState } from 'react';
 import { Link } from 'react-router-dom';
 import { announce } from '#client/lib/announce.ts';
 import { Button, LinkButton } from '#client/ui/button.tsx';
+import { RadioGroup } from '#client/ui/choice.tsx';
 import { Dialog } from '#client/ui/dialog.tsx';
 import { InputField } from '#client/ui/field.tsx';
 import { collectionsOptions, useCollectionChanges } from '../api.ts';
@@ -87,25 +88,18 @@ function CollectDialog({ accessions, onClose, onDone }: { accessions: readonly s
       {lists.isPending && <p role="status">Fetching your collections</p>}
       {lists.isError && <p className="field-error" role="alert">{lists.error.message}</p>}
       {lists.data && (
-        <fieldset className="collect-choice">
-          <legend className="sr-only">Collection</legend>
-          {items.map((item) => (
-            <label key={item.id} className="collect-line">
-              <input type="radio" name={group} checked={chosen === item.id} onChange={() => setPicked(item.id)} />
-              <span>{item.name}</span> <span className="text-second">{count(item.entries)}</span>
-            </label>
-          ))}
-          <label className="collect-line">
-            <input type="radio" name={group} checked={chosen === newList} onChange={() => setPicked(newList)} />
-            <span>A new collection</span>
-          </label>
+        <div className="max-h-80 overflow-y-auto">
+          <RadioGroup
+            legend="Collection" hideLegend name={group} value={chosen} onChange={setPicked}
+            choices={[...items.map((item) => ({ value: item.id, label: item.name, hint: count(item.entries) })), { value: newList, label: 'A new collection' }]}
+          />
           {chosen === newList && (
             <InputField
               label="Name" hideLabel placeholder="name of the new collection" maxLength={120} value={name} onChange={(event) => setName(event.target.value)}
               error={missing && !name.trim() ? 'Give the collection a name.' : undefined}
             />
           )}
-        </fieldset>
+        </div>
       )}
       {error && <p className="field-error" role="alert">{error.message}</p>}
     </Dialog>
