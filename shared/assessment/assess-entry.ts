@@ -55,6 +55,13 @@ function referenceTemperature(input: EntryInput): number | null {
   return Number.isFinite(value) && value > 0 ? value : null;
 }
 
+/** Whether the two surface species of a step are of one kind, free sites among them; null where the step has not two. */
+function isLikePair(step: ElementaryStep): boolean | null {
+  if (step.surfaceOrder !== 2) return null;
+  const kinds = step.reactants.filter(({ species }) => species.phase !== 'gas' && species.formula !== 'e').map(({ species }) => `${species.spelling} ${species.siteType ?? ''}`);
+  return new Set(kinds).size === 1;
+}
+
 /** What the conversion of a rate needs to know of the rest of the entry. */
 function quantityContext(input: EntryInput, step: ElementaryStep | null): QuantityContext {
   const { rateOf, conditions = {} } = input;
@@ -72,6 +79,9 @@ function quantityContext(input: EntryInput, step: ElementaryStep | null): Quanti
     siteDensityPerM2: conditions.siteDensityPerM2,
     siteDensitySource: conditions.siteDensitySource,
     coverageDefinition: conditions.coverageDefinition,
+    perPair: conditions.perPair,
+    nearestNeighbours: conditions.nearestNeighbours,
+    likePair: step && isLikePair(step),
   };
 }
 

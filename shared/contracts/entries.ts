@@ -21,6 +21,9 @@ export const conditions = z.object({
   temperatureK: z.number().optional(),
   siteDensityPerM2: z.number().positive().optional(),
   siteDensitySource: z.string().max(200).optional(),
+  /** True for a rate of kinetic Monte Carlo, printed per pair of neighbours; the number of nearest neighbours brings it to mean field. */
+  perPair: z.boolean().optional(),
+  nearestNeighbours: z.number().positive().max(24).optional(),
   promoter: z.string().max(100).optional(),
   heatingRateKPerS: z.number().positive().optional(),
   exposureLangmuir: z.number().positive().optional(),
@@ -38,11 +41,20 @@ export const surfaceInput = z.object({
   metal: z.string().max(20).optional(),
   formula: z.string().max(60).optional(),
   structure: z.enum(structures).optional(),
-  facet: z.string().max(20).optional(),
+  /** A metal on, in or under the first layer of the other, kept apart from its formula, and where it is. */
+  guest: z.string().max(20).optional(),
+  arrangement: z.enum(arrangements).optional(),
+  guestMonolayers: z.number().positive().max(100).optional(),
+  facet: z.string().max(40).optional(),
+  reconstruction: z.string().max(30).optional(),
   site: z.enum(siteTypes).optional(),
   sampleType: z.enum(sampleTypes).optional(),
   support: z.string().max(60).optional(),
   particleSizeNm: z.number().positive().max(1e6).optional(),
+  dispersion: z.number().positive().max(1).optional(),
+  strainPercent: z.number().min(-30).max(30).optional(),
+  /** Share of the sites that are at step edges. */
+  stepFraction: z.number().min(0).max(1).optional(),
 });
 export type SurfaceInput = z.infer<typeof surfaceInput>;
 

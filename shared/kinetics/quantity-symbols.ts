@@ -57,4 +57,10 @@ export interface QuantityContext {
   coverageDefinition?: CoverageDefinition | null;
   /** Coverage at saturation, per site. */
   saturationCoverage?: number | null;
+  /** True for a constant of kinetic Monte Carlo, printed per pair of neighbours. */
+  perPair?: boolean | null;
+  /** Nearest neighbours of a site, which mean field needs. */
+  nearestNeighbours?: number | null;
+  /** True where the two neighbours are of one kind, false where they differ. */
+  likePair?: boolean | null;
 }

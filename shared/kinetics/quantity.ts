@@ -1,12 +1,12 @@
-import { boundLines, operationLine, printedLine, quantityText, references, type DerivationLine } from './derivation.ts';
+import { boundLines, operationLine, printedLine, quantityText, readingText, references, type DerivationLine } from './derivation.ts';
 import { findEnergyUnit } from './energy.ts';
 import { KineticsError, requireFinite, requirePositive } from './kinetics-error.ts';
-import { readPrintedValue, resolveUncertainty, type Bound, type PrintedValue } from './printed-value.ts';
+import { readPrintedValue, resolveUncertainty, type Bound } from './printed-value.ts';
 import { quantitySymbols, type QuantityContext, type QuantitySymbol } from './quantity-symbols.ts';
 import { canonicalUnit, splitUnitPower } from './quantity-unit.ts';
 import { basisScale, unitOfBasis } from './rate-basis.ts';
 import { requireUnit, siConstants } from './rate-constant.ts';
-import { isHomogeneous, judgeRateUnit, ordersOf, type ReportedOrders } from './rate-law.ts';
+import { isHomogeneous, judgeRateUnit, meanFieldOfPairs, ordersOf, type ReportedOrders } from './rate-law.ts';
 import { toSiteBasis } from './site-basis.ts';
 import { missingForStandard, type UncertaintyKind } from './uncertainty.ts';
 
@@ -89,7 +89,8 @@ const rates: ReadonlySet<QuantitySymbol> = new Set(['rateConstant', 'preExponent
  * Converts a quantity from what is printed to canonical units, with every operation on the way.
  *
  * Energies become kJ/mol; rate constants and pre-exponential factors become SI of the printed unit in `value` and, where the context
- * allows, the site basis in `siteValue`; what is lacking stands in `missing`. A consumption rate is divided by its coefficient.
+ * allows, the site basis in `siteValue`; what is lacking stands in `missing`. A consumption rate is divided by its coefficient. A constant
+ * per pair of neighbours stays one in `value`; its mean field stands in `siteValue` where the number of neighbours is given.
  * Sources: SI Brochure, 9th edition; NIST SP 811 (2008); JCGM 100:2008 (GUM); CODATA 2022.
  * @throws PrintedValueError on an unreadable value
  * @throws KineticsError on an unknown unit, one of another dimension, one that contradicts the orders, or `cm2 s-1`
@@ -160,11 +161,6 @@ export function convertQuantity(input: QuantityInput, context: QuantityContext):
   };
 }
 
-function readingText(printed: PrintedValue, unit: string): string {
-  if (printed.bound === 'range') return `${quantityText(printed.low as number)} to ${quantityText(printed.high as number, unit)}`;
-  return `${printed.bound === '=' ? '' : `${printed.bound} `}${quantityText(printed.value as number, unit)}`;
-}
-
 /** Multiplies by a factor; a power of ten moves the decimal point and rounds nothing. */
 function timesDecimal(value: number, factor: number): number {
   if (factor === 1) return value;
@@ -225,7 +221,7 @@ function rateConversion(symbol: QuantitySymbol, unitName: string, context: Quant
     if (coefficient !== 1) {
       const species = (context.rateOf as { consumption: string }).consumption;
       result.push(operationLine(`Rate of the elementary step: divide the consumption rate by ${coefficient}`, { value: si(value), unit: target }, { value: si(value) / coefficient, unit: target }, references.glossary, { assumption: `the source prints the consumption of ${species}` }));
-    } else if (context.rateOf === 'unknown' && (orders?.surface ?? 0) >= 2) {
+    } else if (context.rateOf === 'unknown' && context.perPair !== true && (orders?.surface ?? 0) >= 2) {
       result.push(operationLine('Rate convention not stated', { value: si(value), unit: target }, { value: si(value), unit: target }, references.glossary, { assumption: 'kept as printed; the rate of the elementary step may differ by a factor of 2 (± ln 2)' }));
     }
     return result;
@@ -234,7 +230,14 @@ function rateConversion(symbol: QuantitySymbol, unitName: string, context: Quant
   if (isHomogeneous(basis, orders)) return conversion;
   conversion.site = (value) => {
     const site = toSiteBasis(value, basis, orders, context, symbol === 'preExponential' ? 'pre-exponential' : 'single');
-    return { value: site.factor === null ? null : value * site.factor, unit: site.unit ?? undefined, exponentChange: site.exponentChange, missing: site.missing, lines: site.lines };
+    const pair = symbol === 'turnoverRate' ? null : meanFieldOfPairs(orders, context);
+    const missing = [...site.missing, ...(pair?.missing ?? [])];
+    if (missing.length > 0) return { value: null, exponentChange: 0, missing, lines: [] };
+    const { unit, exponentChange, lines: siteLines } = site as { unit: string; exponentChange: number; lines: DerivationLine[] };
+    const perSite = value * (site.factor as number);
+    if (pair === null) return { value: perSite, unit, exponentChange, missing, lines: siteLines };
+    const meanField = perSite * (pair.factor as number);
+    return { value: meanField, unit, exponentChange, missing, lines: [...siteLines, operationLine(pair.operation, { value: perSite, unit }, { value: meanField, unit }, pair.reference, { assumption: pair.assumption })] };
   };
   return conversion;
 }

@@ -1,4 +1,4 @@
-import { KineticsError } from './kinetics-error.ts';
+import { KineticsError, requirePositive } from './kinetics-error.ts';
 import type { QuantityContext } from './quantity-symbols.ts';
 import { isAmbiguousArea, omissionCandidates, rateBasisOf, unitOfBasis, type RateBasis } from './rate-basis.ts';
 import { ambiguousArea } from './rate-constant.ts';
@@ -93,4 +93,40 @@ export function judgeRateUnit(unit: Unit, orders: ReportedOrders | null, path = 
     'unit-contradicts-orders',
     unit.symbol,
   );
+}
+
+/** The way from a constant per pair of neighbours to mean field, or what is missing for it. */
+export interface PairToMeanField {
+  /** Multiplier on the constant; null when something is missing. */
+  factor: number | null;
+  missing: string[];
+  operation: string;
+  assumption: string;
+  reference: string;
+}
+
+/**
+ * Brings a kinetic Monte Carlo constant per pair of neighbours to the mean-field constant per site; null where the constant is not per pair.
+ *
+ * A site with z nearest neighbours belongs to z pairs, each shared by two sites. Unlike neighbours: r = z k θ_A θ_B, either of the two
+ * orders of a pair being an event. Like neighbours: r = (z/2) k θ², each pair counted once. Random mixing. Without z nothing is converted.
+ * Source: mean field (Bragg–Williams) of a lattice of sites (common practice).
+ * @throws KineticsError on a number of neighbours that is not above 0.
+ * @example meanFieldOfPairs({ gas: 0, surface: 2, reported: false }, { perPair: true, nearestNeighbours: 6, likePair: true }).factor // 3
+ */
+export function meanFieldOfPairs(orders: ReportedOrders | null, context: QuantityContext): PairToMeanField | null {
+  if (context.perPair !== true) return null;
+  const { nearestNeighbours: z = null, likePair: like = null } = context;
+  if (z !== null) requirePositive('nearestNeighbours', z, 'the number of nearest neighbours');
+  const missing: string[] = [];
+  if (z === null) missing.push('number of nearest neighbours');
+  if (orders === null || !near(orders.surface, 2)) missing.push('two surface species for a constant per pair');
+  else if (like === null) missing.push('whether the pair is of one species');
+  return {
+    factor: z === null || missing.length > 0 ? null : like ? z / 2 : z,
+    missing,
+    operation: like ? 'Mean field of a constant per pair of like neighbours: multiply by half the nearest neighbours' : 'Mean field of a constant per pair of unlike neighbours: multiply by the nearest neighbours',
+    assumption: `${z} nearest neighbours, given; the species are mixed at random`,
+    reference: 'mean field of a lattice of sites (common practice)',
+  };
 }

@@ -56,6 +56,20 @@ describe('assessing what was typed', () => {
   });
 });
 
+describe('constants per pair of kinetic Monte Carlo', () => {
+  const quantities: EntryInput['quantities'] = [{ symbol: 'rateConstant', asPrinted: '4', unitAsPrinted: 's-1' }];
+  it.each([
+    ['N* + N* -> N2 + 2*', 12], ['NH3* + * -> NH2* + H*', 24], ['15N* + N* -> 15NN + 2*', 24], ['N*_fcc + N*_hcp -> N2 + 2*', 24], ['N2* -> N2 + *', undefined],
+  ])('%s has the mean field %s with six neighbours', (equation, meanField) => {
+    const [quantity] = assessEntry({ ...whole, kind: 'rate-constant', step: { equation }, quantities, conditions: { perPair: true, nearestNeighbours: 6, temperatureK: 500 } }).quantities;
+    expect(quantity?.siteValue).toBe(meanField);
+  });
+  it('stay as they are without the number of neighbours', () => {
+    const [quantity] = assessEntry({ ...whole, kind: 'rate-constant', quantities, conditions: { perPair: true } }).quantities;
+    expect(quantity).toMatchObject({ value: 4, missing: ['number of nearest neighbours'] });
+  });
+});
+
 describe('the rate constant at a temperature', () => {
   const { quantities } = assessEntry(whole);
   const at = (temperatureK: number, measured = true, validRange: { min?: number; max?: number } | null = whole.validRange ?? null) =>

@@ -162,6 +162,30 @@ describe('rate basis', () => {
     expectClose(known.siteValue, (known.value as number) / 2, 1e-14);
   });
 
+  it('brings a constant per pair to mean field only with the number of neighbours', () => {
+    // A site with z neighbours: z k θ_A θ_B for unlike pairs, (z/2) k θ² for like ones (mean field of a lattice, common practice).
+    const input = { symbol: 'rateConstant', asPrinted: '4', unitAsPrinted: 's-1' } as const;
+    const pairs = { ...surface2, perPair: true, likePair: true, rateOf: 'unknown' } as const;
+    expect(convertQuantity(input, { ...pairs, nearestNeighbours: 6 })).toMatchObject({ value: 4, unit: 's-1', siteValue: 12, siteUnit: 's-1' });
+    expect(convertQuantity(input, { ...pairs, nearestNeighbours: 6, likePair: false }).siteValue).toBe(24);
+    const { derivation } = convertQuantity(input, { ...pairs, nearestNeighbours: 6 });
+    expect(derivation.at(-1)).toMatchObject({ operation: expect.stringContaining('per pair of like neighbours'), from: '4 s-1', to: '12 s-1', assumption: '6 nearest neighbours, given; the species are mixed at random' });
+    // A pair is an event: nothing is left open about a factor of 2.
+    expect(derivation.map(({ operation }) => operation)).not.toContain('Rate convention not stated');
+    const without = convertQuantity(input, pairs);
+    expect(without).toMatchObject({ value: 4, missing: ['number of nearest neighbours'] });
+    expect(without).not.toHaveProperty('siteValue');
+    expect(convertQuantity({ ...input, symbol: 'preExponential' }, { ...pairs, nearestNeighbours: 4, likePair: false }).siteValue).toBe(16);
+    expect(convertQuantity(input, { ...pairs, nearestNeighbours: 6, likePair: null }).missing).toEqual(['whether the pair is of one species']);
+    expect(convertQuantity(input, { ...surface1, perPair: true, nearestNeighbours: 6 }).missing).toEqual(['two surface species for a constant per pair']);
+    expect(convertQuantity(input, { perPair: true }).missing).toEqual(['number of nearest neighbours', 'two surface species for a constant per pair']);
+    expect(convertQuantity({ ...input, unitAsPrinted: 'ML-1 s-1' }, pairs).missing).toEqual(['coverage definition: 1 ML as one per site', 'number of nearest neighbours']);
+    // Whatever is no rate constant of the step, or not said to be per pair, is left as it is.
+    expect(convertQuantity({ ...input, symbol: 'turnoverRate' }, pairs).siteValue).toBe(4);
+    expect(convertQuantity(input, { ...pairs, perPair: false }).siteValue).toBe(4);
+    expect(() => convertQuantity(input, { ...pairs, nearestNeighbours: 0 })).toThrow('the number of nearest neighbours must be above 0');
+  });
+
   it.each([
     ['s-1', surface1], ['s-1', surface2], ['h-1', surface2], ['mol m-2 s-1', surface2], ['cm2 mol-1 s-1', surface2], ['ML-1 s-1', surface2], ['ML s-1', surface2],
     ['Pa-1 s-1', adsorption], ['cm3 molecule-1 s-1', adsorption], ['cm3 s-1', adsorption], ['m s-1', adsorption], ['molecule cm-2 s-1 Torr-1', adsorption], ['cm-2 s-1', surface1],
