@@ -66,7 +66,7 @@ describe('adding to a collection', () => {
     const dialog = await screen.findByRole('dialog');
     await within(dialog).findByRole('radio', { name: /Ammonia on Ru/ });
     await user.click(within(dialog).getByRole('button', { name: 'Add' }));
-    expect((await within(dialog).findByRole('alert')).textContent).toBe('A collection holds at most 5000 entries.');
+    expect((await within(dialog).findByRole('alert')).textContent).toBe('Some of the input is not right. A collection holds at most 5000 entries.');
   });
 
   it('leads a visitor to the sign-in and back', () => {
