@@ -1,4 +1,4 @@
-import { lazy, Suspense, type KeyboardEvent, type ReactElement } from 'react';
+import { lazy, Suspense, type ChangeEvent, type KeyboardEvent, type ReactElement } from 'react';
 import { Checkbox } from './choice.tsx';
 import type { DataColumn, DataRow, RowGroup } from './table-model.ts';
 
@@ -14,6 +14,8 @@ interface TableRowsProps<T extends object> {
   activeId: string | null;
   onActive: (id: string | null) => void;
   onRowKey: (event: KeyboardEvent, row: DataRow<T>) => void;
+  /** A row's box is pressed; with Shift, all from the last one pressed. */
+  onPress: (id: string, extend: boolean) => void;
   onOpen?: ((row: T) => void) | undefined;
 }
 
@@ -47,6 +49,11 @@ export function keyOf<T extends object>(line: TableLine<T>): string {
   return line.heading ? `group ${line.heading.key}` : line.row.id;
 }
 
+/** Whether Shift was held: a box changes by a press of the mouse or of the space bar, and the browser makes a click of either. */
+function heldShift({ nativeEvent }: ChangeEvent): boolean {
+  return nativeEvent instanceof MouseEvent && nativeEvent.shiftKey;
+}
+
 interface LineProps<T extends object> extends BodyProps<T> {
   line: TableLine<T>;
   index?: number;
@@ -54,7 +61,7 @@ interface LineProps<T extends object> extends BodyProps<T> {
 }
 
 /** One line: the heading of a group, or a row. */
-export function Line<T extends object>({ line, index, measure, columns, choosable, chosen, rowLabel, activeId, tabbableId, onActive, onRowKey, onOpen }: LineProps<T>) {
+export function Line<T extends object>({ line, index, measure, columns, choosable, chosen, rowLabel, activeId, tabbableId, onActive, onRowKey, onPress, onOpen }: LineProps<T>) {
   if (line.heading) {
     return (
       <tr className="table-group" ref={measure} data-index={index}>
@@ -79,7 +86,7 @@ export function Line<T extends object>({ line, index, measure, columns, choosabl
     >
       {choosable && (
         <td className="table-choose">
-          <Checkbox label={`Choose ${rowLabel(row.original)}`} hideLabel checked={isChosen} onChange={() => row.toggleSelected()} />
+          <Checkbox label={`Choose ${rowLabel(row.original)}`} hideLabel checked={isChosen} onChange={(event) => onPress(row.id, heldShift(event))} />
         </td>
       )}
       {columns.map((column) => {

@@ -13,13 +13,13 @@ interface StanzaListProps<T extends object> extends DataTableProps<T> {
 
 /** The rows of a table as short stanzas, where the page is too narrow for columns. */
 export function StanzaList<T extends object>(
-  { caption, columns, lines, rowLabel, sort = null, onSort, chosen, onChosen, onToggle, stanza, empty, stale }: StanzaListProps<T>,
+  { caption, columns, lines, rowLabel, sort = null, onSort, chosen, onChosen, onToggle, stanza, empty, stale, stanzaSort = true }: StanzaListProps<T>,
 ) {
   const id = useId();
   return (
     <section aria-labelledby={id} aria-busy={stale || undefined} className={stale ? 'data-table-stale' : undefined}>
       <h2 className="sr-only" id={id}>{caption}</h2>
-      {onSort && <StanzaSort columns={columns} sort={sort} onSort={onSort} />}
+      {onSort && stanzaSort && <StanzaSort columns={columns} sort={sort} onSort={onSort} />}
       <ol className="stanzas">
         {lines.map((line) => line.heading
           ? <li key={`group ${line.heading.key}`} className="stanza-group">{line.heading.label}</li>

@@ -25,7 +25,7 @@ describe('picker', () => {
     await user.keyboard('{ArrowDown}');
     expect(document.activeElement).toBe(screen.getByRole('combobox'));
     await user.keyboard('{Enter}{ArrowDown}{ArrowDown}{Enter}');
-    expect(chosenOptions()).toEqual(['Ru90 entries', 'Co70 entries']);
+    expect(chosenOptions()).toEqual(['Ru 90 entries', 'Co 70 entries']);
     await user.keyboard('{Escape}');
     expect(screen.queryByRole('listbox')).toBeNull();
     expect(document.activeElement).toBe(button());
@@ -38,9 +38,9 @@ describe('picker', () => {
     await user.click(button());
     await user.keyboard('{ArrowDown}');
     const active = screen.getByRole('combobox').getAttribute('aria-activedescendant');
-    expect(document.getElementById(active ?? '')?.textContent).toBe('Ni80 entries');
+    expect(document.getElementById(active ?? '')?.textContent).toBe('Ni 80 entries');
     await user.keyboard('{ArrowUp}{ArrowUp}{ArrowUp}');
-    expect(document.getElementById(screen.getByRole('combobox').getAttribute('aria-activedescendant') ?? '')?.textContent).toBe('Ru90 entries');
+    expect(document.getElementById(screen.getByRole('combobox').getAttribute('aria-activedescendant') ?? '')?.textContent).toBe('Ru 90 entries');
   });
 
   it.each([
@@ -74,7 +74,7 @@ describe('picker', () => {
     expect(screen.queryByRole('combobox')).toBeNull();
     expect(document.activeElement).toBe(screen.getByRole('listbox'));
     await user.keyboard('{End} ');
-    expect(chosenOptions()).toEqual(['Co70 entries']);
+    expect(chosenOptions()).toEqual(['Co 70 entries']);
   });
 
   it('takes back all choices by one button', async () => {
