@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { printedLine } from '../kinetics/derivation.ts';
+import { printedLine, readingText } from '../kinetics/derivation.ts';
 import { KineticsError } from '../kinetics/kinetics-error.ts';
 import { PrintedValueError, readPrintedValue, type PrintedValue } from '../kinetics/printed-value.ts';
 import { calculator } from './calculator.ts';
@@ -30,6 +30,6 @@ export const parseValueCalculator = calculator({
   }),
   calculate: ({ text, unit }) => {
     const value = reading(text, unit);
-    return { ...value, derivation: [printedLine(text, value.unit, String(value.value ?? value.low ?? value.high))] };
+    return { ...value, derivation: [printedLine(text, value.unit, readingText(value, value.unit ?? ''))] };
   },
 });

@@ -44,6 +44,12 @@ export function printedLine(text: string, unit: string | null, reading: string):
   };
 }
 
+/** What was read, as the first line states it: `≥ 22.1 kcal/mol`, `24 to 27 kJ/mol`. */
+export function readingText({ bound, value, low, high }: { bound: string; value: number | null; low: number | null; high: number | null }, unit = ''): string {
+  if (bound === 'range') return `${quantityText(low as number)} to ${quantityText(high as number, unit)}`;
+  return `${bound === '=' ? '' : `${bound} `}${quantityText(value as number, unit)}`;
+}
+
 /** A line for a multiplication or another operation that turns one number into another. */
 export function operationLine(
   operation: string,
