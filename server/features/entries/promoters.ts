@@ -1,8 +1,8 @@
 /** Names of promoters that papers write out, with their symbols (common practice). */
-const symbols: Readonly<Record<string, string>> = {
+const symbols = new Map(Object.entries({
   lithium: 'Li', sodium: 'Na', potassium: 'K', rubidium: 'Rb', caesium: 'Cs', cesium: 'Cs', magnesium: 'Mg', calcium: 'Ca', strontium: 'Sr', barium: 'Ba',
   lanthanum: 'La', cerium: 'Ce', praseodymium: 'Pr', samarium: 'Sm', yttrium: 'Y', aluminium: 'Al', aluminum: 'Al',
-};
+}));
 
 /** Words beside a promoter that name none: amounts, and ways to say that there is none. */
 const besides = new Set([
@@ -13,7 +13,7 @@ const besides = new Set([
 /** One promoter in the spelling it is kept and looked for by: a symbol where the name is known, else as typed. */
 export function promoterWord(text: string): string {
   const plain = text.trim();
-  const symbol = symbols[plain.toLowerCase()];
+  const symbol = symbols.get(plain.toLowerCase());
   if (symbol) return symbol;
   return /^[a-z]{1,2}$/i.test(plain) ? plain.charAt(0).toUpperCase() + plain.slice(1).toLowerCase() : plain;
 }

@@ -15,7 +15,7 @@ const words: Partial<Record<CountedFilter, (value: string) => string>> = {
   energyType: (value) => energyTypeWords[value as EnergyType],
   sampleType: (value) => sampleTypeWords[value as SampleType],
   cleavage: (value) => value.replaceAll('-', ' '),
-  promoter: (value) => ({ none: 'clean, no promoter', any: 'any promoter' })[value] ?? value,
+  promoter: (value) => (value === 'none' ? 'clean, no promoter' : value === 'any' ? 'any promoter' : value),
   hasUncertainty: (value) => (value === 'true' ? 'standard uncertainty known' : 'standard uncertainty not known'),
 };
 

@@ -4,10 +4,10 @@ import type { Ask, SearchEngine, SearchFilter } from './search-engine.ts';
 import type { VocabularyNames } from './vocabulary-names.ts';
 
 /** The class of step that undoes one; a class that undoes itself is not listed. */
-const reverseClass: Readonly<Record<string, string>> = {
+const reverseClass = new Map(Object.entries({
   'adsorption': 'desorption', 'desorption': 'adsorption', 'dissociative-adsorption': 'associative-desorption', 'associative-desorption': 'dissociative-adsorption',
   'dissociation': 'association', 'association': 'dissociation', 'hydrogenation': 'dehydrogenation', 'dehydrogenation': 'hydrogenation',
-};
+}));
 
 const mostFacets = 3;
 
@@ -17,7 +17,7 @@ interface Proposal {
   change: NearMiss['change'];
 }
 
-const reversed = (classes: readonly string[]): string[] => classes.flatMap((one) => reverseClass[one] ?? []);
+const reversed = (classes: readonly string[]): string[] => classes.flatMap((one) => reverseClass.get(one) ?? []);
 
 /** The same question about the reverse step, where the question said a direction. */
 function reverseStep(filter: SearchFilter): Proposal[] {

@@ -49,6 +49,8 @@ function readWords(text: string, names: VocabularyNames): StepPattern | { unknow
     let taken = 0;
     for (let length = Math.min(5, words.length - at); length > 0 && taken === 0; length -= 1) {
       const phrase = words.slice(at, at + length).join(' ');
+      // In capitals some of these could be formulas: OF.
+      if (fillers.has(foldWords(phrase))) break;
       const named = classNames.get(foldWords(phrase));
       const formulas = named === undefined ? speciesNamed(phrase, names) : [];
       if (named !== undefined) classes.add(named);

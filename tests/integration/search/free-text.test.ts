@@ -1,7 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { Entry } from '#shared/contracts/entries.ts';
 import { useApp } from '#tests/factories/app.ts';
-import { okBody, problemOf, type Client } from '#tests/factories/client.ts';
+import { okBody, problemOf, type Body, type Client } from '#tests/factories/client.ts';
 import { entryInputOf } from '#tests/factories/entry-input.ts';
 import { Lives } from '#tests/factories/lives.ts';
 
@@ -77,6 +77,15 @@ describe('free text', () => {
   ])('%s does no harm', async (_what, query) => {
     const answer = await visitor.get(`/entries?${query}`);
     expect([200, 400, 422]).toContain(answer.status);
+  });
+
+  const wordFilters = ['metal', 'contains', 'formula', 'facet', 'support', 'promoter', 'step', 'stepClass', 'species', 'bond', 'method', 'methodFamily', 'source', 'author', 'contributor'];
+  it.each(wordFilters)('no word given for %s does harm, and what cannot be understood finds nothing', async (name) => {
+    for (const value of ["'", '"', '\\', '%', '_', '{a,b}', '{"a"}', '[', '*', '+', '.*', '(?:', '$1', "' or '1'='1", '\u202eurgnoR', 'مرحبا', 'שלום', '氨', '\u{1F9EA}', '\u00ad', 'a\u0301', 'x'.repeat(200), '-1', '1e999', 'null', '__proto__', 'constructor', '->', '0', '\t', '⑴']) {
+      const answer = await visitor.get(`/entries?limit=1&${name}=${encodeURIComponent(value)}`);
+      expect([200, 422], `${name}=${value}: ${answer.text.slice(0, 200)}`).toContain(answer.status);
+      if (answer.status === 200) expect((answer.body as Body).total, `${name}=${value}`).toBe(0);
+    }
   });
 
   it('a null character is refused, since no text can hold it', async () => {
