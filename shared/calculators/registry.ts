@@ -3,6 +3,7 @@ import { bondOrderCalculator } from './bond-order.ts';
 import type { Calculator } from './calculator.ts';
 import { changeBasisCalculator } from './change-basis.ts';
 import { collisionCalculator } from './collision.ts';
+import { desorptionCalculator } from './desorption.ts';
 import { energyCalculator } from './energy.ts';
 import { eyringCalculator } from './eyring.ts';
 import { fitCalculator } from './fit.ts';
@@ -35,6 +36,7 @@ export const calculators: readonly Calculator[] = [
   siteDensityCalculator,
   uncertaintyCalculator,
   reverseCalculator,
+  desorptionCalculator,
   bondOrderCalculator,
   poolCalculator,
   profileCalculator,
