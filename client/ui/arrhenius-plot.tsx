@@ -1,10 +1,10 @@
 import { area, line } from 'd3-shape';
 import { useState } from 'react';
 import { numberFromLn } from '#client/lib/log-number.ts';
-import { fixed, plainNumber, setNumber } from '#client/lib/numbers.ts';
+import { fixed } from '#client/lib/numbers.ts';
 import { useWidth } from '#client/lib/use-width.ts';
 import { linearScale } from './linear-scale.ts';
-import { PlotAxes, PlotTopAxis } from './plot-axes.tsx';
+import { PlotAxes, PlotTopAxis, temperatureText } from './plot-axes.tsx';
 import { PlotLegend } from './plot-legend.tsx';
 import { PlotTable } from './plot-table.tsx';
 import { SeriesMark, seriesLook } from './series-look.tsx';
@@ -144,7 +144,7 @@ function ArrheniusTable({ lines, temperatureK, unit }: { lines: readonly Arrheni
       rows={rows.map(({ one, t }) => ({
         id: `${one.id} ${t}`,
         cells: [
-          one.label, `${plainNumber(setNumber(t, { digits: 4 }))}${within(one, t) ? '' : ', extrapolated'}`,
+          one.label, `${temperatureText(t)}${within(one, t) ? '' : ', extrapolated'}`,
           // By its logarithm, since k itself may be too large or too small to be held as a number.
           fixed(one.lnK(t) / Math.LN10, 2), <NumberText key="k" number={numberFromLn(one.lnK(t))} />,
         ],

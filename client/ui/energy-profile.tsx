@@ -103,7 +103,7 @@ export function EnergyProfile({ pathways: given, unit, what = 'Energy', highest,
           </svg>
         </div>
       </div>
-      <p className="plot-note min-h-[1.4em]" aria-hidden="true">{active ? words(active) : 'Point at a state, or move with the arrow keys, for its full name.'}</p>
+      <p className="plot-note no-print min-h-[1.4em]" aria-hidden="true">{active ? words(active) : 'Point at a state, or move with the arrow keys, for its full name.'}</p>
       <PlotLegend
         items={[
           ...(single ? [] : pathways.map((pathway, index) => ({ id: pathway.id, label: pathway.label, sample: <PathwaySample index={index} /> }))),

@@ -1,10 +1,10 @@
 import { area, line as lineShape } from 'd3-shape';
 import { lnRateAt, uLnRateAt } from '#shared/kinetics/arrhenius.ts';
 import { R } from '#shared/kinetics/constants.ts';
-import { fixed, plainNumber, setNumber } from '#client/lib/numbers.ts';
+import { fixed, setNumber } from '#client/lib/numbers.ts';
 import { useWidth } from '#client/lib/use-width.ts';
 import { linearScale } from './linear-scale.ts';
-import { PlotAxes } from './plot-axes.tsx';
+import { PlotAxes, temperatureText } from './plot-axes.tsx';
 import { PlotLegend } from './plot-legend.tsx';
 import { PlotTable } from './plot-table.tsx';
 import { UnitTspans } from './unit-text.tsx';
@@ -109,7 +109,7 @@ export function FitPlot({ points, line, unit, logarithm = 'log10', onToggle, hei
           <PointMark
             key={point.index} point={point} x={x(1000 / point.temperatureK)} y={y(point.lnK / per)}
             whisker={point.uLnK ? [y((point.lnK - point.uLnK) / per), y((point.lnK + point.uLnK) / per)] : null}
-            title={`${point.index + 1}: ${plainNumber(setNumber(point.temperatureK, { digits: 4 }))} K${point.excluded ? ', left out' : ''}`}
+            title={`${point.index + 1}: ${temperatureText(point.temperatureK)} K${point.excluded ? ', left out' : ''}`}
             onToggle={onToggle && (() => onToggle(point.index))}
           />
         ))}
@@ -219,7 +219,7 @@ function FitTable({ points, lnFit, per, logarithm, unit, onToggle }: FitTablePro
         cells: [
           `${point.index + 1}${point.excluded && !onToggle ? ', left out' : ''}`,
           ...(onToggle ? [<input key="used" type="checkbox" className="tick" aria-label={`Point ${point.index + 1}, ${point.temperatureK} K, in the fit`} checked={!point.excluded} onChange={() => onToggle(point.index)} />] : []),
-          plainNumber(setNumber(point.temperatureK, { digits: 4 })),
+          temperatureText(point.temperatureK),
           fixed(point.lnK / per, 3),
           point.uLnK ? fixed(point.uLnK / per, 3) : 'not given',
           ...(lnFit ? [fixed(lnFit(point.temperatureK) / per, 3), fixed((point.lnK - lnFit(point.temperatureK)) / per, 3)] : []),

@@ -3,7 +3,7 @@ import { useState } from 'react';
 import { fixed, plainNumber, setNumber } from '#client/lib/numbers.ts';
 import { useWidth } from '#client/lib/use-width.ts';
 import { linearScale } from './linear-scale.ts';
-import { PlotAxes } from './plot-axes.tsx';
+import { PlotAxes, temperatureText } from './plot-axes.tsx';
 import { PlotLegend } from './plot-legend.tsx';
 import { PlotTable } from './plot-table.tsx';
 import { SeriesMark, seriesLook } from './series-look.tsx';
@@ -136,11 +136,11 @@ export function KiePlot({ lines, points = [], limit, limitLabel = 'semiclassical
         rows={[
           ...lines.flatMap((one) => [...new Set([...(one.range ? [one.range.min, one.range.max] : []), temperatureK])].sort((a, b) => a - b).map((t) => ({
             id: `${one.id} ${t}`,
-            cells: [one.label, `${plainNumber(setNumber(t, { digits: 4 }))}${within(one, t) ? '' : ', extrapolated'}`, set(one.kie(t)), ...(limit ? [set(limit(t))] : [])],
+            cells: [one.label, `${temperatureText(t)}${within(one, t) ? '' : ', extrapolated'}`, set(one.kie(t)), ...(limit ? [set(limit(t))] : [])],
           }))),
           ...points.map((point) => ({
             id: point.id,
-            cells: [point.label, plainNumber(setNumber(point.temperatureK, { digits: 4 })), point.u ? `${set(point.kie)} ± ${set(point.u)}` : set(point.kie), ...(limit ? [set(limit(point.temperatureK))] : [])],
+            cells: [point.label, temperatureText(point.temperatureK), point.u ? `${set(point.kie)} ± ${set(point.u)}` : set(point.kie), ...(limit ? [set(limit(point.temperatureK))] : [])],
           })),
         ]}
       />

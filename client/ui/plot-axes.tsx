@@ -18,6 +18,11 @@ interface PlotAxesProps {
   yLabelLift?: number;
 }
 
+/** A temperature with the digits it has, for tables and names. */
+export function temperatureText(temperatureK: number): string {
+  return String(Number(temperatureK.toPrecision(6)));
+}
+
 /** The two axes of a plot: a rule at the left and at the foot, few ticks, the unit with the name. */
 export function PlotAxes({ x, y, left, right, top, bottom, xLabel, yLabel, xTicks = 5, yTicks = 5, bareFoot = false, yLabelLift = 0 }: PlotAxesProps) {
   return (

@@ -20,7 +20,7 @@ export function PlotTable({ columns, rows, summary = 'The plot as a table', open
   return (
     <details className="plot-table" open={open}>
       <summary>{summary}</summary>
-      <div className="table-frame">
+      <div className="table-frame" role="group" aria-label={summary} tabIndex={0}>
         <table className="data-table mt-2">
           <thead>
             <tr>

@@ -40,8 +40,8 @@ export function GalleryPlots() {
         <KiePlot
           temperatureK={temperatureK} limit={(t) => Math.exp((1.438777 * (3350 - 2450)) / (2 * t))}
           lines={[
-            { id: 'a', label: 'NH₃/ND₃ on Ru(0001), Vantongeren 1994', kie: (t) => 0.95 * Math.exp(3400 / (R * t)), range: { min: 450, max: 650 } },
-            { id: 'b', label: 'NH₃/ND₃ on Ni(111), Petrescu 1988', kie: (t) => 1.1 * Math.exp(1200 / (R * t)), range: { min: 500, max: 800 } },
+            { id: 'a', label: 'NH3/ND3 on Ru(0001), Vantongeren 1994', kie: (t) => 0.95 * Math.exp(3400 / (R * t)), range: { min: 450, max: 650 } },
+            { id: 'b', label: 'NH3/ND3 on Ni(111), Petrescu 1988', kie: (t) => 1.1 * Math.exp(1200 / (R * t)), range: { min: 500, max: 800 } },
             { id: 'c', label: 'inverse, Haldane-Roux 2003', kie: (t) => Math.exp(-900 / (R * t)) },
           ]}
           points={[{ id: 'p', label: 'Osei-Brandt 1999', temperatureK: 600, kie: 1.62, u: 0.12 }, { id: 'q', label: 'Brisebois 2011', temperatureK: 550, kie: 1.95, computed: true }]}
