@@ -86,6 +86,7 @@ function factorOf(line: DerivationLine, from: string, to: string): number {
   if ((g = power(/^Divide by the site density\^(-?[\d.]+)$/)) !== null) return (assumed(line, density) / avogadro) ** -g;
   if (operation === 'Divide by the sites per mass') return avogadro / assumed(line, new RegExp(`^${number} sites per kg`));
   if ((g = power(/^k_site = k_rel θ_sat\^(-?[\d.]+)$/)) !== null) return assumed(line, new RegExp(`saturation at ${number} per site`)) ** g;
+  if (/multiply by (half )?the nearest neighbours$/.test(operation)) return assumed(line, new RegExp(`${number} nearest neighbours`)) / (operation.includes('half') ? 2 : 1);
   if (!unitChange.test(operation)) throw new Error(`"${operation}" is no operation that can be re-run`);
   const molecules = (line.assumption ?? '').match(/molecule(-?\d*) is understood/);
   const understood = molecules ? (1 / avogadro) ** Number(molecules[1] || 1) : 1;

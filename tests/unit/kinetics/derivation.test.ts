@@ -96,6 +96,8 @@ describe('derivations that the demonstration does not reach', () => {
     [{ symbol: 'rateConstant', asPrinted: '< 3', unitAsPrinted: 'ML-1 s-1' }, { ...surface2, coverageDefinition: 'per-adsorption-site' }],
     [{ symbol: 'rateConstant', asPrinted: '3', unitAsPrinted: 's-1' }, { ...surface2, coverageDefinition: 'relative-to-saturation', saturationCoverage: 0.5 }],
     [{ symbol: 'rateConstant', asPrinted: '3', unitAsPrinted: 'mmol g-1 h-1 bar-0.3' }, { kineticOrders: { NH3: 0.3 }, sitesPerKg: 2e23 }],
+    [{ symbol: 'rateConstant', asPrinted: '3', unitAsPrinted: 's-1' }, { ...surface2, perPair: true, nearestNeighbours: 6, likePair: true }],
+    [{ symbol: 'rateConstant', asPrinted: '3', unitAsPrinted: 's-1' }, { ...surface2, perPair: true, nearestNeighbours: 4, likePair: false }],
     [{ symbol: 'turnoverRate', asPrinted: '3e15', unitAsPrinted: 'molecule cm-2 s-1' }, { siteDensityPerM2: 1.2e19 }],
   ] as [QuantityInput, QuantityContext][])('%j', (input, context) => {
     const quantity = convertQuantity(input, context);
