@@ -12,12 +12,20 @@ export interface ReportedOrders {
   reported: boolean;
 }
 
-/** True when a species name stands for something at the surface: `N*`, `CO(ads)`, `*`. */
+/**
+ * True when a species name stands for something at the surface: `N*`, `CO(ads)`, `*`.
+ *
+ * @example [isSurfaceSpecies('N*'), isSurfaceSpecies('NH3')] // [true, false]
+ */
 export function isSurfaceSpecies(name: string): boolean {
   return /\*|_\{?ads?\}?|\((?:a|ad|ads)\)/i.test(name);
 }
 
-/** The orders of the rate law: those the source reports, or else the stoichiometry; null when neither is known. */
+/**
+ * The orders of the rate law: those the source reports, or else the stoichiometry; null when neither is known.
+ *
+ * @example ordersOf({ kineticOrders: { NH3: 0.8, H2: -0.5, '*': 1 } }) // { gas: 0.3, surface: 1, reported: true }
+ */
 export function ordersOf(context: QuantityContext): ReportedOrders | null {
   if (context.kineticOrders != null && Object.keys(context.kineticOrders).length > 0) {
     let gas = 0;
@@ -41,7 +49,11 @@ function near(a: number, b: number): boolean {
   return Math.abs(a - b) < 1e-6;
 }
 
-/** A homogeneous gas reaction: its rate is per volume, so the unit has one gas factor less than the order. */
+/**
+ * True for a homogeneous gas reaction: its rate is per volume, so the unit has one gas factor less than the order.
+ *
+ * @example isHomogeneous({ gasConcentration: 1, gasPressure: 0, areal: 0, perMass: 0, coverage: 0, time: -1, omittedMolecule: 0 }, { gas: 2, surface: 0, reported: false }) // true
+ */
 export function isHomogeneous(basis: RateBasis, orders: ReportedOrders | null): boolean {
   if (orders === null || orders.surface !== 0 || basis.perMass !== 0 || basis.areal !== 0) return false;
   return orders.gas !== 0 && near(basis.gasConcentration + basis.gasPressure, orders.gas - 1);

@@ -29,7 +29,11 @@ export interface UncertaintyStatement {
   degreesOfFreedom?: number | null;
 }
 
-/** Says which input a kind needs before it has a standard uncertainty, or null when nothing is missing. */
+/**
+ * Says which input a kind needs before it has a standard uncertainty, or null when nothing is missing.
+ *
+ * @example missingForStandard({ kind: 'expanded' }) // 'coverage factor'
+ */
 export function missingForStandard(statement: UncertaintyStatement): string | null {
   if (statement.kind === 'expanded' && statement.coverageFactor == null) return 'coverage factor';
   if (statement.kind === 'confidence' && statement.level == null) return 'confidence level';

@@ -157,6 +157,8 @@ class UnitReader {
  * After a slash every factor without a sign belongs to the denominator (`cm3/molecule s` is `cm3/(molecule s)`);
  * a factor with a written negative exponent keeps it (`L/mol s-1`). A hyphen between factors multiplies them (`mol/cm2-s`).
  * An empty text, `-` and `1` are dimensionless.
+ * Source: SI Brochure, 9th edition, 5.4.6, with the spellings that papers print (common practice).
+ * @example readUnitFactors('cm3/molecule s').map(({ token, exponent }) => `${token.symbol} ${exponent}`) // ['cm 3', 'molecule -1', 's -1']
  */
 export function readUnitFactors(text: string): UnitFactor[] | null {
   if (text.length > 160) return null;

@@ -139,16 +139,24 @@ for (const entry of unitTokens) {
   for (const spelling of [entry.symbol, ...entry.spellings]) bySpelling.set(spelling, entry);
 }
 
-/** The factor with exactly this spelling, or null. Capitals matter: `M` is mol/L, `m` metre, `ML` monolayer, `mL` millilitre. */
+/**
+ * The factor with exactly this spelling, or null. Capitals matter: `M` is mol/L, `m` metre, `ML` monolayer, `mL` millilitre.
+ *
+ * @example findToken('torr').symbol // 'Torr'
+ */
 export function findToken(spelling: string): UnitToken | null {
   return bySpelling.get(spelling) ?? null;
 }
 
-/** How many spellings are registered, and how many are claimed twice: a test keeps the second at zero. */
-export function spellingCollisions(): string[] {
+/**
+ * The spellings that two factors claim, each with both: a test keeps the list empty.
+ *
+ * @example spellingCollisions() // []
+ */
+export function spellingCollisions(tokens: readonly UnitToken[] = unitTokens): string[] {
   const seen = new Map<string, string>();
   const twice: string[] = [];
-  for (const entry of unitTokens) {
+  for (const entry of tokens) {
     for (const spelling of [entry.symbol, ...entry.spellings]) {
       const other = seen.get(spelling);
       if (other !== undefined) twice.push(`${spelling}: ${other}, ${entry.symbol}`);

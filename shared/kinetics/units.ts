@@ -51,7 +51,11 @@ function dropBareSite(factors: readonly UnitFactor[]): { counted: readonly UnitF
   return { counted: hasAmount ? factors : factors.filter((factor) => factor !== site), perSite: true };
 }
 
-/** Builds a unit from its factors. */
+/**
+ * Builds a unit from its factors, such as `readUnitFactors` finds; a rate per site without a count of molecules drops the site.
+ *
+ * @example buildUnit([]).symbol // '1'
+ */
 export function buildUnit(all: readonly UnitFactor[]): Unit {
   const { counted, perSite } = dropBareSite(all);
   const dimension = Object.fromEntries(dimensionNames.map((name) => [name, 0])) as Record<DimensionName, number>;
@@ -94,7 +98,11 @@ const siSymbols: Record<DimensionName, string> = { length: 'm', amount: 'mol', m
 
 const siUnits = new Map<string, Unit>();
 
-/** The SI unit of a dimension, in the one printed form. */
+/**
+ * The SI unit of a dimension, in the one printed form.
+ *
+ * @example siUnit({ length: 3, amount: -1, time: -1 }).symbol // 'm3 mol-1 s-1'
+ */
 export function siUnit(dimension: Partial<Record<DimensionName, number>>): Unit {
   let key = '';
   for (const name of dimensionNames) key += `${dimension[name] ?? 0} `;
@@ -111,19 +119,31 @@ export function siUnit(dimension: Partial<Record<DimensionName, number>>): Unit 
   return unit;
 }
 
-/** True when two units differ by a number only. */
+/**
+ * True when two units differ by a number only.
+ *
+ * @example sameDimension(findUnit('cm2 s-1'), findUnit('m2 h-1')) // true
+ */
 export function sameDimension(a: Unit, b: Unit): boolean {
   return dimensionNames.every((name) => Math.abs(a.dimension[name] - b.dimension[name]) < 1e-9);
 }
 
-/** Converts between units of one dimension; the caller has checked that they are. */
+/**
+ * Converts between units of one dimension; the caller has checked that they are.
+ *
+ * @example scaleBetween(2, findUnit('min'), findUnit('s')) // 120
+ */
 export function scaleBetween(value: number, from: Unit, to: Unit): number {
   if (from.symbol === to.symbol) return value;
   const scaled = (value * (from.numerator * to.denominator)) / (from.denominator * to.numerator);
   return Number.isFinite(scaled) && scaled !== 0 ? scaled : value * (from.toSi / to.toSi);
 }
 
-/** Writes a dimension in words: `length3 amount-1 time-1`. */
+/**
+ * Writes a dimension in words.
+ *
+ * @example dimensionText(findUnit('cm3 molecule-1 s-1').dimension) // 'length3 amount-1 time-1'
+ */
 export function dimensionText(dimension: Dimension): string {
   const parts = dimensionNames.filter((name) => dimension[name] !== 0).map((name) => `${name}${printExponent(dimension[name])}`);
   return parts.length === 0 ? 'dimensionless' : parts.join(' ');
@@ -188,7 +208,11 @@ const pickers: Record<UnitKind, readonly string[]> = {
   exposure: ['langmuir', 'Torr s', 'Pa s', 'mbar s'],
 };
 
-/** The units that a picker offers for a kind, in the order to show; Btu stands in a second-level kind. */
+/**
+ * The units that a picker offers for a kind, in the order to show; Btu stands in a second-level kind.
+ *
+ * @example listUnits('heating').map(({ symbol }) => symbol) // ['K s-1', 'K min-1']
+ */
 export function listUnits(kind: UnitKind): Unit[] {
   return pickers[kind].map((text) => findUnit(text) as Unit);
 }

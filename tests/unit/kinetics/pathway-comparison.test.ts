@@ -133,6 +133,10 @@ describe('comparison of two pathways', () => {
     }), { numRuns: 60 });
   });
 
+  it('hides no fault of its own', () => {
+    expect(() => comparePathways({ first: null as never, second: [], sharedVariance: 0 })).toThrow(TypeError);
+  });
+
   it.each([
     ['first.0.u', { first: [{ barrierKJPerMol: 1, reactionEnergyKJPerMol: 0 }] }, /a missing one is never taken as 0/],
     ['second.1.u', { second: [step(1, 0, 1), { barrierKJPerMol: 1, reactionEnergyKJPerMol: 0, u: null }] }, /step 2/],

@@ -90,6 +90,8 @@ describe('units', () => {
 
   it('has no spelling that reads as two units', () => {
     expect(spellingCollisions()).toEqual([]);
+    const metre = unitTokens[0] as (typeof unitTokens)[number];
+    expect(spellingCollisions([metre, { ...metre, symbol: 'micrometre', spellings: ['m'] }])).toEqual(['m: m, micrometre']);
     const owner = new Map(unitTokens.flatMap((token) => [token.symbol, ...token.spellings].map((spelling) => [spelling, token] as const)));
     expect(owner.size).toBeGreaterThan(300);
     for (const [spelling, token] of owner) {
