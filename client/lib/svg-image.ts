@@ -148,7 +148,7 @@ export async function svgImage({ svg, legend, title, notes = [] }: SvgImageInput
     if (element.getAttribute('fill') === 'none' && !element.hasAttribute('stroke')) element.remove();
   }
   const box = { width: Math.ceil(width + 2 * margin), height: Math.ceil(total + 2 * margin) };
-  for (const [name, value] of Object.entries({ ...box, viewBox: `${-margin} ${-margin} ${box.width} ${box.height}`, xmlns: svgNamespace, role: 'img' })) copy.setAttribute(name, String(value));
+  for (const [name, value] of Object.entries({ ...box, viewBox: `${-margin} ${-margin} ${box.width} ${box.height}`, role: 'img' })) copy.setAttribute(name, String(value));
   const fonts = await embeddedFonts(families);
   copy.prepend(
     make('title', {}, title),
