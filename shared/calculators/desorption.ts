@@ -21,7 +21,7 @@ export const desorptionCalculator = calculator({
   input: z.discriminatedUnion('method', [
     z.strictObject({ method: z.literal('peak'), peakTemperatureK: z.number(), heatingRateKPerS: z.number(), order, preExponential: z.number(), initialCoverage: z.number().optional() }),
     z.strictObject({
-      method: z.literal('heating-rates'), points: z.array(z.strictObject({ heatingRateKPerS: z.number(), peakTemperatureK: z.number() })).max(10_000),
+      method: z.literal('heating-rates'), points: z.array(z.strictObject({ heatingRateKPerS: z.number(), peakTemperatureK: z.number() })).max(200),
       order: order.default(1), initialCoverage: z.number().optional(),
     }),
   ]),

@@ -6,7 +6,7 @@ import { calculator } from './calculator.ts';
 const interval = z.tuple([z.number(), z.number()]).nullable();
 
 /** Each value is left out once and the rest pooled anew: the work grows with the square of the number. */
-const mostValues = 200;
+const mostValues = 100;
 
 export const poolCalculator = calculator({
   name: 'pool',

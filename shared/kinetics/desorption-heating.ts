@@ -49,6 +49,8 @@ function readPoints(points: readonly HeatingRatePoint[]): HeatingRatePoint[] {
   points.forEach(({ heatingRateKPerS, peakTemperatureK }, i) => {
     requirePositive(`points.${i}.heatingRateKPerS`, heatingRateKPerS, 'the heating rate', 'K/s');
     requireTemperature(`points.${i}.peakTemperatureK`, peakTemperatureK, 'T_p');
+    const ratio = heatingRateKPerS / peakTemperatureK ** 2;
+    if (!(ratio > 0 && ratio < Infinity)) throw new KineticsError(`points.${i}.heatingRateKPerS`, `β/T_p² leaves the range of double precision for ${heatingRateKPerS} K/s and ${peakTemperatureK} K`, 'out-of-range', heatingRateKPerS);
   });
   const distinct = (values: readonly number[]): number => new Set(values).size;
   if (points.length < 2 || distinct(points.map(({ heatingRateKPerS }) => heatingRateKPerS)) < 2) {

@@ -76,14 +76,31 @@ export function weigh({ deviations, variances }: Centred, tau2: number): Weighti
   return { mean, sumWeights, q, q2, spreadOfWeights: (2 * pairs) / sumWeights };
 }
 
-/** Halves a bracket until no number lies between its ends; `above` holds at `low` and not at `high`. */
-function bisect(above: (x: number) => boolean, low: number, high: number): number {
+/**
+ * The root of f between `low`, where it is above 0, and `high`, where it is not, to the last digit.
+ * False position by the Illinois rule (Dowell and Jarratt, BIT 11 (1971) 168), with a halving wherever three steps have not halved the bracket.
+ */
+function rootBetween(f: (x: number) => number, low: number, high: number): number {
   let [a, b] = [low, high];
-  for (;;) {
+  let [fa, fb] = [f(a), f(b)];
+  let last = NaN;
+  let width = b - a;
+  for (let step = 1; ; step += 1) {
     const middle = a + (b - a) / 2;
-    if (!(middle > a && middle < b)) return b;
-    if (above(middle)) a = middle;
-    else b = middle;
+    const stalls = step % 3 === 0 && b - a > width / 2;
+    if (step % 3 === 0) width = b - a;
+    const chord = b - (fb * (b - a)) / (fb - fa);
+    const x = !stalls && chord > a && chord < b ? chord : middle;
+    if (!(x > a && x < b) || Math.abs(x - last) <= Number.EPSILON * x) return x;
+    const value = f(x);
+    if (value > 0) {
+      if (last === a) fb /= 2;
+      [a, fa] = [x, value];
+    } else {
+      if (last === b) fa /= 2;
+      [b, fb] = [x, value];
+    }
+    last = x;
   }
 }
 
@@ -101,8 +118,8 @@ function momentTau2(data: Centred): number {
 /** τ² of Paule and Mandel, at which Q(τ²) = k - 1; 0 where Q(0) is below that already. Q falls with τ², so there is one root. */
 function pauleMandelTau2(data: Centred): number {
   const expected = data.deviations.length - 1;
-  const above = (tau2: number): boolean => weigh(data, tau2).q > expected;
-  return above(0) ? bisect(above, 0, rangeSquared(data)) : 0;
+  const excess = (tau2: number): number => weigh(data, tau2).q - expected;
+  return excess(0) > 0 ? rootBetween(excess, 0, rangeSquared(data)) : 0;
 }
 
 /** ln of the restricted likelihood, less a constant. */
@@ -111,14 +128,15 @@ function restrictedLikelihood(data: Centred, tau2: number): number {
   return -0.5 * (data.variances.reduce((sum, v) => sum + Math.log(v + tau2), 0) + Math.log(sumWeights) + q);
 }
 
-const gridPerDecade = 10;
-const largestGrid = 400;
+const gridPerDecade = 6;
+const largestGrid = 200;
 
 /** τ² at the highest maximum of the restricted likelihood over τ² >= 0. There can be several: every one between the points of a fine grid is solved and the highest taken. */
 function restrictedTau2(data: Centred): number {
-  const rises = (tau2: number): boolean => {
+  // Twice the slope of the restricted likelihood.
+  const slope = (tau2: number): number => {
     const { q2, spreadOfWeights } = weigh(data, tau2);
-    return q2 > spreadOfWeights;
+    return q2 - spreadOfWeights;
   };
   const start = Math.min(...data.variances) * 1e-3;
   const end = 1.01 * Math.max(...data.variances, rangeSquared(data));
@@ -126,12 +144,12 @@ function restrictedTau2(data: Centred): number {
   const ratio = (end / start) ** (1 / steps);
   const maxima: number[] = [];
   let before = 0;
-  let rising = rises(0);
+  let rising = slope(0) > 0;
   if (!rising) maxima.push(0);
   for (let i = 0; i <= steps; i += 1) {
     const here = start * ratio ** i;
-    const now = rises(here);
-    if (rising && !now) maxima.push(bisect(rises, before, here));
+    const now = slope(here) > 0;
+    if (rising && !now) maxima.push(rootBetween(slope, before, here));
     before = here;
     rising = now;
   }

@@ -262,6 +262,8 @@ describe('what is refused', () => {
     [{ points: [points[0], { heatingRateKPerS: 10, peakTemperatureK: 470 }] }, 'points', 'out-of-range'],
     [{ points: [points[0], { heatingRateKPerS: 0, peakTemperatureK: 470 }] }, 'points.1.heatingRateKPerS', 'out-of-range'],
     [{ points: [{ heatingRateKPerS: 1, peakTemperatureK: NaN }, points[1]] }, 'points.0.peakTemperatureK', 'not-finite'],
+    [{ points: [points[0], { heatingRateKPerS: 1e-300, peakTemperatureK: 1e20 }] }, 'points.1.heatingRateKPerS', 'out-of-range'],
+    [{ points: [{ heatingRateKPerS: 1e300, peakTemperatureK: 1e-10 }, points[1]] }, 'points.0.heatingRateKPerS', 'out-of-range'],
     [{ points, order: 3 }, 'order', 'unsupported'],
     [{ points, order: 2, initialCoverage: -1 }, 'initialCoverage', 'out-of-range'],
   ] as [HeatingRatesInput, string, string][])('heating rates %j', (input, path, code) => expect(faultOf(() => desorptionFromHeatingRates(input))).toEqual([path, code]));
