@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import {
-  kinds, methodClasses, provenances, sampleTypes, scopes, siteTypes, structures,
+  arrangements, kinds, methodClasses, provenances, sampleTypes, scopes, siteTypes, structures,
 } from '../domain/kinds.ts';
 import { checkCodes } from '../domain/check-codes.ts';
 import { states } from '../domain/states.ts';

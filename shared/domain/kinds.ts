@@ -164,5 +164,21 @@ export const structures = ['fcc', 'bcc', 'hcp', 'other'] as const;
 export type Structure = (typeof structures)[number];
 
 /** The named site types and step features of a surface. */
-export const siteTypes = ['terrace', 'step-edge', 'kink', 'defect', 'B5', 'fcc-hollow', 'hcp-hollow', 'bridge', 'top'] as const;
+export const siteTypes = [
+  'terrace', 'step-edge', 'kink', 'defect', 'B5', 'fcc-hollow', 'hcp-hollow', 'bridge', 'top', 'threefold-hollow', 'fourfold-hollow', 'long-bridge', 'short-bridge',
+  'edge', 'corner', 'interface', 'subsurface',
+] as const;
 export type SiteType = (typeof siteTypes)[number];
+
+/** Where the second metal of a near-surface or single-atom alloy is: on, under or in the first layer of its host, or around a core. */
+export const arrangements = ['overlayer', 'subsurface', 'single-atom', 'surface-alloy', 'core-shell'] as const;
+export type Arrangement = (typeof arrangements)[number];
+
+/** The arrangements in words. */
+export const arrangementWords: Readonly<Record<Arrangement, string>> = {
+  'overlayer': 'overlayer',
+  'subsurface': 'subsurface layer',
+  'single-atom': 'single atoms',
+  'surface-alloy': 'surface alloy',
+  'core-shell': 'core and shell',
+};
