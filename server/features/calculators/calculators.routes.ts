@@ -1,3 +1,4 @@
+import { setImmediate } from 'node:timers/promises';
 import { Router, type RequestHandler } from 'express';
 import * as z from 'zod';
 import type { SourcesService } from '#server/features/sources/sources.service.ts';
@@ -24,6 +25,8 @@ function mount(router: Router, endpoint: Endpoint, run: (input: unknown) => unkn
     for (const item of body.items) {
       try {
         items.push(await run(item));
+        // A long batch must not keep everybody else waiting.
+        await setImmediate();
       } catch (error) {
         if (!(error instanceof Refusal)) throw error;
         items.push({ error: error.details.errors?.[0] ?? { path: '', message: error.message } });
