@@ -10,6 +10,9 @@ export interface CalculatorCase {
 
 const pocket = 'by hand from the formula with CODATA 2022, a second program';
 
+/** Peaks of first-order desorption with E = 130 kJ/mol and ν = 1e13 s-1: β = (ν R T²/E) exp(-E/RT). */
+const heatingRates = [480, 490, 500, 510].map((peakTemperatureK) => ({ peakTemperatureK, heatingRateKPerS: ((1e13 * 8.31446261815324 * peakTemperatureK ** 2) / 130_000) * Math.exp(-130_000 / (8.31446261815324 * peakTemperatureK)) }));
+
 /** Every calculator at least once; each way of a calculator that has several. */
 export const calculatorCases: readonly CalculatorCase[] = [
   { name: 'parse-value', input: { text: '26.4(12)', unit: 'kJ/mol' }, expected: { value: 26.4, standardUncertainty: 1.2, uncertaintyKind: 'standard', uncertaintyScale: 'linear', significantDigits: 3, bound: '=', unit: 'kJ/mol', low: null, high: null, reportedMinus: null, reportedPlus: null, reportedUncertainty: 1.2 }, by: 'JCGM 100:2008 (GUM) 7.2.2' },
@@ -27,6 +30,7 @@ export const calculatorCases: readonly CalculatorCase[] = [
   { name: 'fit', input: { points: [500, 1000].map((temperatureK) => ({ temperatureK, k: Math.exp(20 - 5000 / temperatureK) })), weights: 'none', covariance: 'scaled' }, expected: { lnPreExponential: 20, energyKJPerMol: 5 * 8.31446261815324, n: 2, degreesOfFreedom: 0, uLnPreExponential: null, uEnergyKJPerMol: null, ciEnergyKJPerMol: null, residualSd: null }, by: 'a line through two points: ln k = 20 - 5000/T' },
   { name: 'desorption', input: { method: 'peak', peakTemperatureK: 500, heatingRateKPerS: 2, order: 1, preExponential: 1e13 }, expected: { energyKJPerMol: 132.98839354875386 }, by: 'E/RT² = (ν/β) exp(-E/RT) solved by repeated substitution in a second program' },
   { name: 'desorption', input: { method: 'peak', peakTemperatureK: 500, heatingRateKPerS: 2, order: 2, preExponential: 2e13, initialCoverage: 0.5 }, expected: { energyKJPerMol: 132.98839354875386 }, by: 'the same equation with ν θ0 for ν: half the coverage is left at the peak' },
+  { name: 'desorption', input: { method: 'heating-rates', points: heatingRates }, expected: { energyKJPerMol: 130, lnPreExponential: Math.log(1e13) }, by: 'peaks made with E = 130 kJ/mol and ν = 1e13 s-1' },
   { name: 'pool', input: { values: [{ value: 10, u: 1 }, { value: 12, u: 2 }], model: 'fixed', interval: 'normal' }, expected: { mean: 10.4, standardError: 0.8944271909999159, q: 0.8, i2Percent: 0, 'interval.0': 10.4 - 1.959963984540054 * 0.8944271909999159, 'interval.1': 10.4 + 1.959963984540054 * 0.8944271909999159, predictionInterval: null }, by: 'weights 1 and 1/4' },
   { name: 'pool', input: { values: [{ value: 72.4, u: 1 }, { value: 73.1, u: 1.2 }] }, expected: { model: 'reml', intervalKind: 'hartung-knapp', mean: 72.68688524590164, tau2: 0 }, by: 'reference case P-two-agree' },
   { name: 'site-density', input: { structure: 'fcc', facet: '111', aAngstrom: 3.52 }, expected: { perM2: 1.8638632140677485e19, perCm2: 1.8638632140677485e15, molPerM2: 3.0950176828277064e-5 }, by: 'reference case S-Ni-111' },
