@@ -12,18 +12,19 @@ interface PickerListProps<Value extends string> extends PickerProps<Value> {
 
 /** The list of a picker with its search field, its sections and its foot. */
 export function PickerList<Value extends string>({
-  label, options, chosen, onChange, multiple = true, search = options.length > 8, placeholder, asTyped, recent, clearLabel, footer, id, onDone,
+  label, options, chosen, onChange, multiple = true, search = options.length > 8, placeholder, asTyped, onType, recent, clearLabel, footer, id, onDone,
 }: PickerListProps<Value>) {
   const [typed, setTyped] = useState('');
   const field = useRef<HTMLInputElement>(null);
   // Read once, so that the list does not move under the hand that chooses from it.
   const [lately] = useState<readonly string[]>(() => (recent ? readRecent(recent) : []));
+  const untyped = () => recentFirst(options, lately).filter(({ deep, value }) => !deep || chosen.includes(value) || lately.includes(value));
   const text = typed.trim();
   const found = useOptionSearch(options, text);
   const own = text && asTyped ? asTyped(text) : null;
-  const listed = text ? withTyped(found, own) : recentFirst(found, lately);
+  const listed = text ? withTyped(found, own) : untyped();
   const shown = listed.slice(0, mostShown);
-  const [active, setActive] = useState(() => Math.max(0, recentFirst(options, lately).findIndex((option) => chosen.includes(option.value))));
+  const [active, setActive] = useState(() => Math.max(0, untyped().findIndex(({ value }) => chosen.includes(value))));
   const at = Math.min(active, shown.length - 1);
 
   function move(to: number) {
@@ -105,6 +106,7 @@ export function PickerList<Value extends string>({
           onChange={(event) => {
             setTyped(event.target.value);
             setActive(0);
+            onType?.(event.target.value.trim());
           }}
           onKeyDown={onKey}
         />

@@ -13,6 +13,8 @@ export interface PickerOption<Value extends string = string> {
   also?: string;
   /** A quiet word beside it: the name of a symbol, the class of a step. */
   group?: string;
+  /** Found by typing only (or when chosen), so that the list itself stays short. */
+  deep?: boolean;
   /** The heading under which it stands while nothing is typed; options of one section follow one another. */
   section?: string;
 }
@@ -42,6 +44,8 @@ export interface PickerProps<Value extends string> {
   placeholder?: string;
   /** Accepts what is typed as it is. */
   asTyped?: (typed: string) => TypedOption<Value> | null;
+  /** Hears each change of what is typed, to fetch what reading it needs. */
+  onType?: (typed: string) => void;
   /** A name under which the last choices are remembered on this device and shown first. */
   recent?: string;
   /** The words that take back all choices: "Any metal". */
