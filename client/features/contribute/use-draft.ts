@@ -15,9 +15,9 @@ export interface Opened {
   restoredFrom: string | null;
 }
 
-/** Opens a draft, or a new one: the server's version, or what was typed on this device and did not reach it. */
-export function openDraft(start: HeldDraft | null, userId: string): Opened {
-  const form = start ? formOf(start.draft.input) : emptyForm();
+/** Opens a draft, or a new one: the server's version, or what was typed on this device and did not reach it. A new one may come filled in part. */
+export function openDraft(start: HeldDraft | null, userId: string, prefill?: EntryInput): Opened {
+  const form = start ? formOf(start.draft.input) : prefill ? formOf(prefill) : emptyForm();
   // What the form makes of the server's input is the base: a form must not count as changed by being opened.
   const base = start ? readForm(form).input : {};
   const mirrored = mirroredDraft(userId, start?.draft.accession ?? null);
@@ -28,8 +28,8 @@ export function openDraft(start: HeldDraft | null, userId: string): Opened {
 }
 
 /** Keeps the draft saved while the form is typed in, and mirrored on this device until the server has it. */
-export function useDraft(start: HeldDraft | null, userId: string): Opened & { view: SaverView } {
-  const [opened] = useState(() => openDraft(start, userId));
+export function useDraft(start: HeldDraft | null, userId: string, prefill?: EntryInput): Opened & { view: SaverView } {
+  const [opened] = useState(() => openDraft(start, userId, prefill));
   const view = useSyncExternalStore(opened.saver.subscribe, opened.saver.snapshot);
   return { ...opened, view };
 }

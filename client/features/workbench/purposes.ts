@@ -3,6 +3,7 @@ import { bondOrderSheet } from './calculators/bond-order.ts';
 import { changeBasisSheet } from './calculators/change-basis.ts';
 import { collisionSheet } from './calculators/collision.ts';
 import { energySheet } from './calculators/energy.ts';
+import { desorptionSheet } from './calculators/desorption.ts';
 import { eyringSheet } from './calculators/eyring.ts';
 import { fitSheet } from './calculators/fit.ts';
 import { kieSheet } from './calculators/kie.ts';
@@ -11,6 +12,7 @@ import { parseValueSheet } from './calculators/parse-value.ts';
 import { poolSheet } from './calculators/pool.ts';
 import { profileSheet } from './calculators/profile.ts';
 import { rateConstantSheet } from './calculators/rate-constant.ts';
+import { reverseSheet } from './calculators/reverse.ts';
 import { siteDensitySheet } from './calculators/site-density.ts';
 import { tunnellingSheet } from './calculators/tunnelling.ts';
 import { twoTemperatureSheet } from './calculators/two-temperature.ts';
@@ -30,9 +32,9 @@ export const purposes: readonly Purpose[] = [
   { id: 'reading', title: 'Reading', line: 'What the source prints', sheets: [parseValueSheet, parseStepSheet, uncertaintySheet] },
   { id: 'converting', title: 'Converting', line: 'From one unit or basis to another', sheets: [energySheet, rateConstantSheet, changeBasisSheet] },
   { id: 'temperature', title: 'Temperature dependence', line: 'Rate constants against temperature', sheets: [arrheniusSheet, twoTemperatureSheet, fitSheet, eyringSheet] },
-  { id: 'surface', title: 'Surface and gas', line: 'Sites, collisions, desorption', sheets: [siteDensitySheet, collisionSheet] },
+  { id: 'surface', title: 'Surface and gas', line: 'Sites, collisions, desorption', sheets: [siteDensitySheet, collisionSheet, desorptionSheet] },
   { id: 'isotopes', title: 'Isotopes', line: 'Light against heavy', sheets: [kieSheet, tunnellingSheet] },
-  { id: 'estimating', title: 'Estimating', line: 'Where nothing is measured', sheets: [bondOrderSheet] },
+  { id: 'estimating', title: 'Estimating', line: 'What is not reported', sheets: [bondOrderSheet, reverseSheet] },
   { id: 'judging', title: 'Judging', line: 'Several values, several steps', sheets: [poolSheet, profileSheet] },
 ];
 

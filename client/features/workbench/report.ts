@@ -4,10 +4,10 @@ import type { Answer } from './answer.ts';
 import { figureText, type Figure } from './figures.ts';
 import { unitPicked } from './read-typed.ts';
 import type { Sheet, TableField } from './sheet.ts';
-import { chosen, fieldsAsked, paramOf, tidyRows, usualEnergyUnit, type Typed } from './typed.ts';
+import { chosen, fieldsAsked, paramOf, tidyRows, unitSaid, usualEnergyUnit, type Typed } from './typed.ts';
 
 /** A field that was filled, as it is printed and copied. */
-export type InputLine = { label: string; symbol?: string; text: string; unit: string } | { label: string; table: TableField; rows: string[][]; energyUnit: string };
+export type InputLine = { label: string; symbol?: string; text: string; unit: string } | { label: string; table: TableField; rows: string[][]; units: string[] };
 
 /** What was given: the filled fields and the choices in force, in the order of the form. */
 export function inputLines(sheet: Sheet, typed: Typed): InputLine[] {
@@ -16,7 +16,7 @@ export function inputLines(sheet: Sheet, typed: Typed): InputLine[] {
     const { label, symbol } = field;
     if (field.kind === 'table') {
       const rows = tidyRows(field, typed.tables[param]).filter((cells) => cells.some((cell) => cell.trim() !== ''));
-      return rows.length === 0 ? [] : [{ label, table: field, rows, energyUnit: unitPicked(field, typed) }];
+      return rows.length === 0 ? [] : [{ label, table: field, rows, units: field.columns.map((column) => (column.energy ? unitPicked(field, typed) : unitSaid(sheet, typed, column))) }];
     }
     if (field.kind === 'choice') {
       const value = chosen(field, typed);
@@ -25,14 +25,9 @@ export function inputLines(sheet: Sheet, typed: Typed): InputLine[] {
     const text = (typed.values[param] ?? '').trim();
     const usual = 'usual' in field ? field.usual : undefined;
     if (text === '' && !usual) return [];
-    const unit = field.kind === 'number' ? (field.energy ? unitPicked(field, typed) : field.unit ?? '') : '';
+    const unit = field.kind === 'number' ? (field.energy ? unitPicked(field, typed) : unitSaid(sheet, typed, field)) : '';
     return [{ label, symbol, text: text || `${usual ?? ''} (as usual)`, unit }];
   });
-}
-
-/** The unit of a column as its table is typed. */
-export function columnUnit(column: TableField['columns'][number], energyUnit: string): string {
-  return column.energy ? energyUnit : column.unit ?? '';
 }
 
 type Result = Extract<Answer, { state: 'result' }>;
@@ -46,7 +41,7 @@ export function reportText(sheet: Sheet, typed: Typed, answer: Result, { energyU
   const { calculator } = sheet;
   const { outcome, derivation, notes } = answer;
   const given = inputLines(sheet, typed).flatMap((line) => ('table' in line
-    ? [`  ${line.label}`, `    ${line.table.columns.map((column) => [column.label, columnUnit(column, line.energyUnit)].filter(Boolean).join(' / ')).join('\t')}`, ...line.rows.map((cells) => `    ${cells.join('\t')}`)]
+    ? [`  ${line.label}`, `    ${line.table.columns.map((column, at) => [column.label, line.units[at]].filter(Boolean).join(' / ')).join('\t')}`, ...line.rows.map((cells) => `    ${cells.join('\t')}`)]
     : [`  ${line.label}${line.symbol ? ` ${indexed(line.symbol)}` : ''}: ${[line.text, line.unit].filter(Boolean).join(' ')}`]));
   const warnings = [...(outcome.warnings ?? []), ...notes];
   return [
@@ -66,7 +61,7 @@ const header = ['role', 'quantity', 'symbol', 'row', 'value', 'low', 'high', 'st
 /** The calculation as CSV: what was given and what came out, numbers in full, energies of the result in kJ/mol. */
 export function reportCsv(sheet: Sheet, typed: Typed, answer: Result): string {
   const given = inputLines(sheet, typed).flatMap((line): CsvCell[][] => ('table' in line
-    ? line.rows.flatMap((cells, row) => line.table.columns.flatMap((column, at) => (cells[at]?.trim() ? [['given', column.label, '', row + 1, cells[at], '', '', '', '', columnUnit(column, line.energyUnit)]] : [])))
+    ? line.rows.flatMap((cells, row) => line.table.columns.flatMap((column, at) => (cells[at]?.trim() ? [['given', column.label, '', row + 1, cells[at], '', '', '', '', line.units[at]]] : [])))
     : [['given', line.label, line.symbol ? indexed(line.symbol) : '', '', line.text, '', '', '', '', line.unit]]));
   const result = [...answer.outcome.main, ...answer.outcome.facts].flatMap((figure): CsvCell[][] => {
     const { label, symbol = '', value, low, high, u, uScale, unit = '', energy, ln, text, equation } = figure;

@@ -24,6 +24,8 @@ interface FieldBase {
 export interface NumberField extends FieldBase {
   kind: 'number';
   unit?: string;
+  /** The field, by its name in the address, that says the unit. */
+  unitFrom?: string;
   /** A molar energy: its unit is picked beside it, and the calculator gets kJ/mol. */
   energy?: true;
   /** A temperature: the temperature of interest is offered. */
@@ -58,6 +60,8 @@ export interface TableColumn {
   id: string;
   label: string;
   unit?: string;
+  /** The field, by its name in the address, that says the unit. */
+  unitFrom?: string;
   optional?: true;
   own?: true;
   energy?: true;

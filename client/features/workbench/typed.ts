@@ -25,6 +25,13 @@ export function unitParamOf(field: Field): string | null {
   return picked ? `${paramOf(field)}Unit` : null;
 }
 
+/** The unit a number or a column is said to be in, fixed or by another field; empty where there is none. */
+export function unitSaid(sheet: Sheet, typed: Typed, { unit, unitFrom }: { unit?: string; unitFrom?: string }): string {
+  if (unitFrom === undefined) return unit ?? '';
+  const field = sheet.fields.find((one) => paramOf(one) === unitFrom);
+  return (typed.values[unitFrom] ?? '').trim() || (field && 'usual' in field && field.usual) || '';
+}
+
 /** The choice in force: what was chosen, or what is usual. */
 export function chosen(field: ChoiceField, typed: Typed): string {
   const value = typed.values[paramOf(field)];

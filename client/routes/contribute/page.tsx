@@ -1,6 +1,7 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
-import { useNavigate, useParams } from 'react-router-dom';
+import { useLocation, useNavigate, useParams } from 'react-router-dom';
+import { entryInput, type EntryInput } from '#shared/contracts/entries.ts';
 import { announce } from '#client/lib/announce.ts';
 import { DraftGate } from '#client/features/contribute/components/draft-gate.tsx';
 import { EntryEditor } from '#client/features/contribute/components/entry-editor.tsx';
@@ -13,10 +14,17 @@ interface Seat {
   seen: string | null;
 }
 
+/** What another page hands over for a new entry: kind, quantities, note. What is no input of an entry is as nothing. */
+function prefillOf(state: unknown): EntryInput | undefined {
+  const read = entryInput.safeParse((state as { prefill?: unknown } | null)?.prefill);
+  return read.success ? read.data : undefined;
+}
+
 /** Contribute: a new entry, or a draft to go on with. */
 export function Component() {
   const { accession = null } = useParams();
   const navigate = useNavigate();
+  const prefill = prefillOf(useLocation().state);
   const client = useQueryClient();
   const [seat, setSeat] = useState<Seat>({ number: 0, made: null, seen: accession });
   // From a saved form back to "/contribute": that asks for an empty one.
@@ -38,7 +46,7 @@ export function Component() {
             void navigate(`/contribute/${made}`, { replace: true, preventScrollReset: true });
           },
         };
-        if (accession === null || accession === seat.made) return <EntryEditor key={`new-${seat.number}`} start={null} {...editor} />;
+        if (accession === null || accession === seat.made) return <EntryEditor key={`new-${seat.number}`} start={null} prefill={prefill} {...editor} />;
         return <DraftGate key={accession} accession={accession}>{(held) => <EntryEditor start={held} {...editor} />}</DraftGate>;
       }}
     </RequireRole>

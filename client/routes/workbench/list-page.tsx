@@ -6,7 +6,7 @@ export function Component() {
   return (
     <>
       <PageHead title="Workbench" />
-      <p className="max-w-[70ch] pb-6 text-second">
+      <p className="max-w-[110ch] pb-6 text-second">
         Every calculation runs as it is typed, shows its derivation, and has an address of its own that can be sent on. Nothing that is typed here is stored.
       </p>
       <CalculatorList />

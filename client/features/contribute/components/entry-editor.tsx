@@ -1,7 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { useEffect, useMemo, useRef, useState } from 'react';
 import { FormProvider, get, useForm, useWatch } from 'react-hook-form';
-import type { EntryForEditing } from '#shared/contracts/entries.ts';
+import type { EntryForEditing, EntryInput } from '#shared/contracts/entries.ts';
 import { formatDateTime } from '#client/lib/dates.ts';
 import { useInstrument } from '#client/lib/instrument.ts';
 import { useDebounced } from '#client/lib/use-debounced.ts';
@@ -36,6 +36,8 @@ import { SurfaceSection } from './surface-section.tsx';
 interface EntryEditorProps {
   /** The draft to go on with; null for a new one. */
   start: HeldDraft | null;
+  /** What a new one comes filled with. */
+  prefill?: EntryInput;
   userId: string;
   /** The draft was made on the server. */
   onCreated: (accession: string) => void;
@@ -43,8 +45,8 @@ interface EntryEditorProps {
 }
 
 /** One form for an entry: what the source prints at the left, what it becomes at the right, saved as it is typed. */
-export function EntryEditor({ start, userId, onCreated, onSubmitted }: EntryEditorProps) {
-  const { saver, view, form: initial, restoredFrom } = useDraft(start, userId);
+export function EntryEditor({ start, prefill, userId, onCreated, onSubmitted }: EntryEditorProps) {
+  const { saver, view, form: initial, restoredFrom } = useDraft(start, userId, prefill);
   const [restored, setRestored] = useState(restoredFrom);
   const [tried, setTried] = useState(false);
   const [later, setLater] = useState(false);
@@ -78,7 +80,7 @@ export function EntryEditor({ start, userId, onCreated, onSubmitted }: EntryEdit
   }, [accession]);
 
   function discardRestored() {
-    const form = start ? formOf(start.draft.input) : emptyForm();
+    const form = start ? formOf(start.draft.input) : prefill ? formOf(prefill) : emptyForm();
     if (accession === (start?.draft.accession ?? null)) saver.restart(start, start ? readForm(form).input : {});
     reset(form);
     setRestored(null);

@@ -8,8 +8,8 @@ export const arrheniusSheet = sheet({
   calculator: arrheniusCalculator,
   fields: [
     preExponential, rateUnit, activationEnergy, temperature, exponent, referenceTemperature,
-    { kind: 'number', key: 'uLnPreExponential', label: 'Standard uncertainty of ln A', symbol: 'u(ln A)', optional: true },
-    { kind: 'number', key: 'uEnergyKJPerMol', label: 'Standard uncertainty of E', symbol: 'u(E)', energy: true, optional: true },
+    { kind: 'number', key: 'uLnPreExponential', label: 'Standard uncertainty', symbol: 'u(ln A)', optional: true },
+    { kind: 'number', key: 'uEnergyKJPerMol', label: 'Standard uncertainty', symbol: 'u(E)', energy: true, optional: true },
     { kind: 'number', key: 'correlation', label: 'Correlation of ln A and E', symbol: 'r', optional: true, hint: 'Near 1 in a fit; never taken as 0.' },
     { kind: 'number', key: 'validFromK', label: 'Valid from', unit: 'K', optional: true, own: true },
     { kind: 'number', key: 'validToK', label: 'Valid to', unit: 'K', optional: true, own: true },

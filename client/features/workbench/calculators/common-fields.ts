@@ -17,4 +17,4 @@ export const activationEnergy: NumberField = { kind: 'number', key: 'energyKJPer
 /** The unit of A and of k, which no formula needs and every figure shows. */
 export const rateUnit: TextField = { kind: 'text', key: 'rateUnit', label: 'Unit of A and k', own: true, usual: 's-1', suggestions: rateUnits, most: 80, hint: 'Shown with the figures; it changes none of them.' };
 
-export const preExponential: NumberField = { kind: 'number', key: 'preExponential', label: 'Pre-exponential factor', symbol: 'A' };
+export const preExponential: NumberField = { kind: 'number', key: 'preExponential', label: 'Pre-exponential factor', symbol: 'A', unitFrom: 'rateUnit' };

@@ -10,9 +10,9 @@ export const energyUnitChoices = energyUnits.map((value) => ({ value, label: wor
 export const energySheet = sheet({
   calculator: energyCalculator,
   fields: [
-    { kind: 'number', key: 'value', label: 'Energy', symbol: 'E' },
+    { kind: 'number', key: 'value', label: 'Energy', symbol: 'E', unitFrom: 'from' },
     { kind: 'choice', key: 'from', label: 'From', choices: energyUnitChoices, usual: 'kcal/mol', look: 'select' },
-    { kind: 'number', key: 'standardUncertainty', label: 'Standard uncertainty', symbol: 'u', optional: true, hint: 'In the same unit.' },
+    { kind: 'number', key: 'standardUncertainty', label: 'Standard uncertainty', symbol: 'u', unitFrom: 'from', optional: true },
     { kind: 'choice', key: 'to', label: 'To', choices: energyUnitChoices, usual: 'kJ/mol', look: 'select' },
   ],
   example: { values: { value: '24', standardUncertainty: '0.5' } },

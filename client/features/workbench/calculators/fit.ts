@@ -15,8 +15,8 @@ export const fitSheet = sheet({
       kind: 'table', key: 'points', label: 'Rate constants', by: 'rows', least: 2,
       columns: [
         { id: 'temperatureK', label: 'T', unit: 'K' },
-        { id: 'k', label: 'k' },
-        { id: 'u', label: 'u of k', optional: true },
+        { id: 'k', label: 'k', unitFrom: 'rateUnit' },
+        { id: 'u', label: 'u of k', unitFrom: 'rateUnit', optional: true },
       ],
     },
     rateUnit,

@@ -19,8 +19,8 @@ export const kieSheet = sheet({
         { value: 'zero-point', label: 'zero-point energies of one stretch', hint: 'The semiclassical limit of a primary effect.' },
         { value: 'bigeleisen-mayer', label: 'harmonic wavenumbers of reactant and transition state' },
         { value: 'tunnelling-ratio', label: 'tunnelling factors of both' },
-        { value: 'swain-schaad', label: 'k_H/k_D, to k_H/k_T' },
-        { value: 'swain-schaad-from-dt', label: 'k_D/k_T, to k_H/k_T' },
+        { value: 'swain-schaad', label: 'H over D, to H over T' },
+        { value: 'swain-schaad-from-dt', label: 'D over T, to H over T' },
       ],
     },
     {
@@ -80,7 +80,7 @@ export const kieSheet = sheet({
     };
   },
   onward: ({ result, input }) => (input.method === 'zero-point' || input.method === 'arrhenius-pair'
-    ? [{ to: 'kie', label: 'Go from k_H/k_D to k_H/k_T', values: { method: 'swain-schaad', kie: String(result.kie) } }] : []),
+    ? [{ to: 'kie', label: 'Go from H over D to H over T', values: { method: 'swain-schaad', kie: String(result.kie) } }] : []),
   entry: ({ result, input }) => (input.method === 'arrhenius-pair' || input.method === 'two-temperatures' ? {
     kind: 'kie', provenance: 'derived-from-measured', quantities: [{ symbol: 'kie', asPrinted: result.kie.toPrecision(4), unitAsPrinted: '' }],
     note: input.method === 'arrhenius-pair' ? `Isotope effect at ${input.temperatureK} K from the Arrhenius parameters of both isotopologues.` : `Isotope effect at ${input.temperatureK} K from those at ${input.temperature1K} and ${input.temperature2K} K.`,

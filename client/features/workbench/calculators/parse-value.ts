@@ -1,6 +1,7 @@
 import { parseValueCalculator } from '#shared/calculators/parse-value.ts';
 import { uncertaintyKindWords, uncertaintyKinds } from '#shared/domain/kinds.ts';
 import { findEnergyUnit } from '#shared/kinetics/energy.ts';
+import { plainNumber, setNumber } from '#client/lib/numbers.ts';
 import { sheet } from '../sheet.ts';
 
 const boundWords: Readonly<Record<string, string>> = {
@@ -21,7 +22,8 @@ export const parseValueSheet = sheet({
     const { value, low, high, unit, standardUncertainty, significantDigits, reportedUncertainty, reportedMinus, reportedPlus } = result;
     const scale = result.uncertaintyScale === 'ln' ? 'ln' : 'linear';
     const kind = uncertaintyKinds.find((one) => one === result.uncertaintyKind);
-    const reported = reportedMinus !== null && reportedPlus !== null ? `+${reportedPlus} / −${reportedMinus}` : reportedUncertainty === null ? 'none' : String(reportedUncertainty);
+    const plain = (number: number) => plainNumber(setNumber(number, { digits: 2 }));
+    const reported = reportedMinus !== null && reportedPlus !== null ? `+${plain(reportedPlus)} / −${plain(reportedMinus)}` : reportedUncertainty === null ? 'none' : plain(reportedUncertainty);
     const bare = kind === 'unknown' && reported !== 'none';
     return {
       printed: [typed('text'), typed('unitAsPrinted')].filter(Boolean).join(' '),

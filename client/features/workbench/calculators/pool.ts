@@ -9,17 +9,17 @@ export const poolSheet = sheet({
     {
       kind: 'table', key: 'values', label: 'Values of one quantity', by: 'rows', least: 1, most: 200,
       columns: [
-        { id: 'value', label: 'value' },
-        { id: 'u', label: 'u' },
+        { id: 'value', label: 'value', unitFrom: 'of' },
+        { id: 'u', label: 'u', unitFrom: 'of' },
         { id: 'group', label: 'source', optional: true, text: true },
       ],
     },
     { kind: 'text', key: 'unit', param: 'of', label: 'Unit', own: true, usual: 'kJ/mol', most: 80, suggestions: ['kJ/mol', 'ln s-1'], hint: 'Shown with the figures; one unit for all.' },
     {
-      kind: 'choice', key: 'model', label: 'Model', usual: 'reml', look: 'select',
+      kind: 'choice', key: 'model', label: 'Model', usual: 'reml', look: 'list',
       choices: [
-        { value: 'reml', label: 'random effects, restricted maximum likelihood' }, { value: 'dersimonian-laird', label: 'random effects, DerSimonian and Laird' },
-        { value: 'paule-mandel', label: 'random effects, Paule and Mandel' }, { value: 'fixed', label: 'fixed effect' },
+        { value: 'reml', label: 'random effects by restricted maximum likelihood' }, { value: 'dersimonian-laird', label: 'random effects by DerSimonian and Laird' },
+        { value: 'paule-mandel', label: 'random effects by Paule and Mandel' }, { value: 'fixed', label: 'fixed effect' },
       ],
     },
     {

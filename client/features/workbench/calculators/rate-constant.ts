@@ -5,8 +5,8 @@ import { rateUnits, temperature } from './common-fields.ts';
 export const rateConstantSheet = sheet({
   calculator: rateConstantCalculator,
   fields: [
-    { kind: 'number', key: 'value', label: 'Rate constant', symbol: 'k' },
-    { kind: 'number', key: 'standardUncertainty', label: 'Standard uncertainty', symbol: 'u', optional: true, hint: 'In the same unit.' },
+    { kind: 'number', key: 'value', label: 'Rate constant', symbol: 'k', unitFrom: 'from' },
+    { kind: 'number', key: 'standardUncertainty', label: 'Standard uncertainty', symbol: 'u', unitFrom: 'from', optional: true },
     { kind: 'text', key: 'from', label: 'From', suggestions: rateUnits, most: 80, placeholder: 'cm3 molecule-1 s-1' },
     { kind: 'text', key: 'to', label: 'To', suggestions: rateUnits, most: 80, placeholder: 'Pa-1 s-1' },
     { ...temperature, optional: true, hint: 'Needed between concentration and pressure.' },

@@ -7,9 +7,9 @@ export const twoTemperatureSheet = sheet({
   calculator: twoTemperatureCalculator,
   fields: [
     { kind: 'number', key: 'temperature1K', label: 'First temperature', symbol: 'T_{1}', unit: 'K' },
-    { kind: 'number', key: 'k1', label: 'Rate constant there', symbol: 'k_{1}' },
+    { kind: 'number', key: 'k1', label: 'Rate constant there', symbol: 'k_{1}', unitFrom: 'rateUnit' },
     { kind: 'number', key: 'temperature2K', label: 'Second temperature', symbol: 'T_{2}', unit: 'K' },
-    { kind: 'number', key: 'k2', label: 'Rate constant there', symbol: 'k_{2}' },
+    { kind: 'number', key: 'k2', label: 'Rate constant there', symbol: 'k_{2}', unitFrom: 'rateUnit' },
     rateUnit,
   ],
   example: { values: { temperature1K: '400', k1: '0.87', temperature2K: '500', k2: '358' } },

@@ -22,7 +22,7 @@ export function EnergyField({ field, text, unit, error, onText, onUnit }: Energy
   const converted = read && 'value' in read ? convertEnergy({ value: read.value, from: unit, to: usualEnergyUnit }).value : null;
   const hint = converted === null ? field.hint : <>is <Value value={converted} unit={usualEnergyUnit} digits={6} /></>;
   return (
-    <Field label={<FieldLabel label={field.label} symbol={field.symbol} optional={field.optional} />} hint={hint} error={error}>
+    <Field label={<FieldLabel label={field.label} symbol={field.symbol} />} hint={hint} error={error}>
       {(wiring) => (
         <div className="number-with-unit">
           <input

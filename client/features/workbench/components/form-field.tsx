@@ -5,26 +5,27 @@ import { RadioGroup } from '#client/ui/choice.tsx';
 import { FieldError, InputField, SelectField } from '#client/ui/field.tsx';
 import { mostRowsOf } from '../address.ts';
 import type { Fault } from '../read-typed.ts';
-import type { Field, NumberField, TableField, TextField } from '../sheet.ts';
-import { chosen, mostCharacters, paramOf, unitParamOf, usualEnergyUnit } from '../typed.ts';
+import type { Field, NumberField, Sheet, TableField, TextField } from '../sheet.ts';
+import { chosen, mostCharacters, paramOf, unitParamOf, unitSaid, usualEnergyUnit } from '../typed.ts';
 import type { TypedState } from '../use-typed.ts';
 import { DataGrid } from './data-grid.tsx';
 import { EnergyField, UnitPicker } from './energy-field.tsx';
 import { FieldLabel } from './field-label.tsx';
 
 interface FormFieldProps<F extends Field = Field> {
+  sheet: Sheet;
   field: F;
   form: TypedState;
   faults: readonly Fault[];
 }
 
 /** One field of a calculator: number, text, choice or table. */
-export function FormField({ field, form, faults }: FormFieldProps) {
+export function FormField({ sheet, field, form, faults }: FormFieldProps) {
   const { typed, onValue, onChoice } = form;
   const param = paramOf(field);
   const own = faults.filter((fault) => fault.param === param);
   const error = own.find((fault) => !fault.cell)?.message;
-  if (field.kind === 'table') return <TableFormField field={field} form={form} faults={own} />;
+  if (field.kind === 'table') return <TableFormField sheet={sheet} field={field} form={form} faults={own} />;
   if (field.kind === 'choice') {
     const value = chosen(field, typed);
     const choose = (next: string) => onChoice(param, next);
@@ -43,7 +44,7 @@ export function FormField({ field, form, faults }: FormFieldProps) {
       />
     );
   }
-  return <NumberFormField field={field} text={text} error={error} onText={(next) => onValue(param, next)} />;
+  return <NumberFormField field={field} unit={unitSaid(sheet, typed, field)} text={text} error={error} onText={(next) => onValue(param, next)} />;
 }
 
 interface TypedFieldProps<F extends Field> {
@@ -53,12 +54,12 @@ interface TypedFieldProps<F extends Field> {
   onText: (text: string) => void;
 }
 
-function NumberFormField({ field, text, error, onText }: TypedFieldProps<NumberField>) {
+function NumberFormField({ field, unit, text, error, onText }: TypedFieldProps<NumberField> & { unit: string }) {
   const { temperatureK } = useInstrument();
   const offer = field.temperature && text.trim() === '' && <TextButton onClick={() => onText(String(temperatureK))}>{`Use ${temperatureK} K`}</TextButton>;
   return (
     <InputField
-      label={<FieldLabel label={field.label} symbol={field.symbol} unit={field.unit} optional={field.optional} />}
+      label={<FieldLabel label={field.label} symbol={field.symbol} unit={unit} />}
       hint={field.hint && offer ? <>{field.hint} {offer}</> : offer || field.hint} error={error} typed maxLength={mostCharacters} placeholder={field.usual}
       value={text} onChange={(event) => onText(event.target.value)}
     />
@@ -68,9 +69,9 @@ function NumberFormField({ field, text, error, onText }: TypedFieldProps<NumberF
 function TextFormField({ field, text, error, onText }: TypedFieldProps<TextField>) {
   const id = useId();
   return (
-    <div className={field.wide ? 'form-wide' : undefined}>
+    <div className={field.wide ? 'form-wide' : 'contents'}>
       <InputField
-        label={<FieldLabel label={field.label} symbol={field.symbol} optional={field.optional} />} hint={field.hint} error={error} typed maxLength={field.most ?? mostCharacters}
+        label={<FieldLabel label={field.label} symbol={field.symbol} />} hint={field.hint} error={error} typed maxLength={field.most ?? mostCharacters}
         placeholder={field.placeholder ?? field.usual} list={field.suggestions ? id : undefined}
         value={text} onChange={(event) => onText(event.target.value)}
       />
@@ -79,7 +80,7 @@ function TextFormField({ field, text, error, onText }: TypedFieldProps<TextField
   );
 }
 
-function TableFormField({ field, form, faults }: FormFieldProps<TableField>) {
+function TableFormField({ sheet, field, form, faults }: FormFieldProps<TableField>) {
   const { typed, onRows, onValue } = form;
   const id = useId();
   const param = paramOf(field);
@@ -94,7 +95,7 @@ function TableFormField({ field, form, faults }: FormFieldProps<TableField>) {
       )}
       <DataGrid
         label={field.label} rows={typed.tables[param] ?? []} minRows={Math.max(3, field.least)} mostRows={mostRowsOf(field)}
-        columns={field.columns.map((column) => ({ id: column.id, label: column.label, unit: column.energy ? unit : column.unit, optional: column.optional }))}
+        columns={field.columns.map((column) => ({ id: column.id, label: column.label, unit: (column.energy ? unit : unitSaid(sheet, typed, column)) || undefined, optional: column.optional }))}
         faults={faults.flatMap((fault) => (fault.cell ? [{ ...fault.cell, message: fault.message }] : []))}
         onChange={(rows) => onRows(param, rows)}
       />

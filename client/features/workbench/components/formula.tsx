@@ -10,7 +10,12 @@ interface FormulaProps {
 /** A formula with true indices; a copy has the plain spelling. */
 export function Formula({ text, prose = false }: FormulaProps) {
   const parts = text.split(prose ? /([_^]\{[^}]*\})/ : /([_^](?:\{[^}]*\}|[^\s{}]))/u);
-  return <>{parts.map((part, index) => <Fragment key={index}>{index % 2 === 1 ? setIndex(part) : part}</Fragment>)}</>;
+  return <>{parts.map((part, index) => <Fragment key={index}>{index % 2 === 1 ? setIndex(part) : setMeans(part)}</Fragment>)}</>;
+}
+
+/** A letter under a bar: the faces have no such sign, so the bar is drawn. */
+function setMeans(text: string): ReactNode {
+  return text.split(/(\p{L}\u0304)/u).map((part, index) => (index % 2 === 1 ? <span key={index} className="formula-mean">{part.charAt(0)}</span> : part));
 }
 
 function setIndex(part: string): ReactNode {

@@ -17,6 +17,15 @@ interface ResultActionsProps {
   mayContribute: boolean;
 }
 
+/** Most characters that the note of an entry is given. */
+const longestNote = 3900;
+
+/** How the figures came about, with the address of the calculation where there is room for it; nothing for a value as printed. */
+function noteOf(note: string, link: string): string | undefined {
+  const whole = `${note} Calculation: ${link}`;
+  return note === '' ? undefined : link && whole.length <= longestNote ? whole : note;
+}
+
 /** What can be done with a result: copy, save, start an entry. */
 export function ResultActions({ sheet, typed, answer, link, mayContribute }: ResultActionsProps) {
   const { unit: energyUnit } = useInstrument();
@@ -27,7 +36,7 @@ export function ResultActions({ sheet, typed, answer, link, mayContribute }: Res
       <CopyButton label="Copy as CSV" copied="CSV copied" text={() => reportCsv(sheet, typed, answer)} />
       <Button small onClick={() => saveFile(`${fileNameOf(sheet.calculator.title)}.csv`, reportCsv(sheet, typed, answer), 'text/csv')}>Save CSV</Button>
       {mayContribute && entry && (
-        <LinkButton small to="/contribute" state={{ prefill: { ...entry, note: [entry.note, link && entry.note ? link : ''].filter(Boolean).join(' ') || undefined } }}>Use in a new entry</LinkButton>
+        <LinkButton small to="/contribute" state={{ prefill: { ...entry, note: noteOf(entry.note, link) } }}>Use in a new entry</LinkButton>
       )}
     </div>
   );

@@ -35,7 +35,7 @@ export function ResultPanel({ sheet, answer, stale, onType, actions }: ResultPan
         <MainFigures outcome={outcome} />
         {warnings.map((warning) => <Notice key={warning} kind="doubt" className="result-warning"><p>{sentence(warning)}</p></Notice>)}
         {outcome.facts.length > 0 && (
-          <div className="result-facts"><Facts facts={outcome.facts.map((figure) => ({ key: figure.label, name: <FigureName figure={figure} />, value: <FigureView figure={figure} /> }))} /></div>
+          <div className="result-facts"><Facts facts={outcome.facts.map((figure, index) => ({ key: `${figure.label} ${index}`, name: <FigureName figure={figure} />, value: <FigureView figure={figure} /> }))} /></div>
         )}
         {actions}
         {onward.length > 0 && (
