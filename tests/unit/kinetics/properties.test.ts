@@ -11,6 +11,7 @@ import { poolValues } from '#shared/kinetics/pool.ts';
 import { readPrintedValue } from '#shared/kinetics/printed-value.ts';
 import { convertQuantity } from '#shared/kinetics/quantity.ts';
 import { convertRateConstant } from '#shared/kinetics/rate-constant.ts';
+import { reverseStep } from '#shared/kinetics/reverse.ts';
 import { listUnits } from '#shared/kinetics/units.ts';
 import { expectClose } from './reference.ts';
 
@@ -149,6 +150,28 @@ describe('k(T)', () => {
       // A and E are tangent at T: there they give the very k of the Eyring equation.
       const lnK = rateAt({ preExponential: there.preExponential, energyKJPerMol: there.energyKJPerMol, temperatureK: given.temperatureK }).lnK;
       if (there.k > 0) expect(Math.abs(lnK - Math.log(there.k))).toBeLessThan(1e-9);
+    });
+  });
+});
+
+describe('a reverse step', () => {
+  const forward = fc.record({
+    energyForwardKJPerMol: real(-20, 250), preExponentialForward: positive(-3, 18), exponentForward: fc.constantFrom(-1, 0, 0.5, 2), reactionEnthalpyKJPerMol: real(-200, 200), reactionEntropyJPerMolK: real(-200, 200),
+    gasMoleChange: fc.constantFrom(-2, -1, 0, 1, 2), standardPressurePa: fc.constantFrom(1e5, 101_325), basis: fc.constantFrom('pressure', 'concentration'), referenceTemperatureK: fc.constantFrom(1, 298.15), temperatureK: real(250, 1500),
+  } as const);
+
+  it('reversed again is the forward step, at every T', () => {
+    check([forward], (step) => {
+      const there = reverseStep(step);
+      const back = reverseStep({
+        ...step, energyForwardKJPerMol: there.energyReverseKJPerMol, preExponentialForward: there.preExponentialReverse as number, exponentForward: there.exponentReverse,
+        reactionEnthalpyKJPerMol: -step.reactionEnthalpyKJPerMol, reactionEntropyJPerMolK: -step.reactionEntropyJPerMolK, gasMoleChange: -step.gasMoleChange,
+      });
+      expect(Math.abs(back.energyReverseKJPerMol - step.energyForwardKJPerMol)).toBeLessThan(1e-10);
+      expectClose(back.preExponentialReverse, step.preExponentialForward, 1e-11);
+      expect(back.exponentReverse).toBeCloseTo(step.exponentForward, 12);
+      // Detailed balance in logarithms: ln k_f - ln k_r = ln K, and the way back has the inverse.
+      expect(Math.abs((there.lnEquilibriumConstant as number) + (back.lnEquilibriumConstant as number))).toBeLessThan(1e-9);
     });
   });
 });
