@@ -60,6 +60,23 @@ interface JsonSchema {
   anyOf?: JsonSchema[];
 }
 
+describe('POST /calc/cite', () => {
+  // An invented article.
+  const bibtex = '@article{arden1998, author = {Arden, Mary T. and Bolton, Karl}, title = {Desorption of carbon monoxide from a nickel crystal}, journal = {Invented Journal of Surface Kinetics}, volume = {12}, number = {3}, pages = {101--118}, year = {1998}, doi = {10.5555/test.0001}}';
+
+  it('prints a citation in other forms, and reads what it prints', async () => {
+    const result = okBody(await send('cite', { bibtex })) as Record<string, unknown> & { ris: string; bibtex: string; csl: Record<string, unknown> };
+    expect(Object.keys(result)).toEqual(expect.arrayContaining(['csl', 'bibtex', 'ris', 'key', 'formatted', 'derivation']));
+    expect(result).toMatchObject({ key: 'arden1998', csl: { DOI: '10.5555/test.0001', volume: '12', page: '101-118' } });
+    const again = okBody(await send('cite', { items: [{ bibtex: result.bibtex }, { ris: result.ris }] })) as { items: { csl: Record<string, unknown> }[] };
+    for (const { csl } of again.items) expect(csl).toMatchObject({ title: result.csl.title, DOI: '10.5555/test.0001', author: [{ family: 'Arden' }, { family: 'Bolton' }] });
+  });
+
+  it.each([[{}], [{ bibtex, ris: 'TY  - JOUR' }], [{ bibtex: 'no citation at all' }], [{ ris: '' }]])('refuses %j', async (input) => {
+    expect(refusalOf(await send('cite', input))).toEqual([422, 'invalid-input']);
+  });
+});
+
 it('needs no form token, no cookie and no account', async () => {
   const answer = await fetch(`${app.url}/api/v1/calc/energy`, { method: 'POST', headers: { 'Content-Type': 'application/json' }, body: '{"value":1,"from":"kcal/mol","to":"kJ/mol"}' });
   expect([answer.status, ((await answer.json()) as { value: number }).value]).toEqual([200, 4.184]);
