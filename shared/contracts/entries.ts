@@ -115,6 +115,9 @@ export const stepView = z.object({
 export const surfaceView = z.object({
   id: z.string().nullable(), metal: z.string().nullable(), formula: z.string(), structure: z.string().nullable(), facet: z.string().nullable(),
   site: z.string().nullable(), sampleType: z.string().nullable(), support: z.string().nullable(), label: z.string(),
+  /** Of a near-surface or single-atom alloy: the bulk, the second metal and where it is. */
+  host: z.string().nullish(), guest: z.string().nullish(), arrangement: z.enum(arrangements).nullish(), guestMonolayers: z.number().nullish(),
+  reconstruction: z.string().nullish(), particleSizeNm: z.number().nullish(), dispersion: z.number().nullish(), strainPercent: z.number().nullish(), stepFraction: z.number().nullish(),
 });
 
 export const kAtT = z.object({

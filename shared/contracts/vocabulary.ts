@@ -11,9 +11,10 @@ export type Term = z.infer<typeof term>;
 
 export const vocabulary = z.object({
   metals: z.array(term), facets: z.array(term), techniques: z.array(term), supports: z.array(term), stepClasses: z.array(term), steps: z.array(term),
+  alloys: z.array(term).optional(), sites: z.array(term).optional(),
 });
 export type Vocabulary = z.infer<typeof vocabulary>;
 
 export const getVocabulary = endpoint({
-  method: 'GET', path: '/vocabulary', access: 'visitor', summary: 'Metals, facets, techniques, supports, step classes and the elementary steps known', response: vocabulary,
+  method: 'GET', path: '/vocabulary', access: 'visitor', summary: 'Metals, alloys, facets, kinds of site, techniques, supports, step classes and the elementary steps known', response: vocabulary,
 });

@@ -1,10 +1,10 @@
 import { sql } from 'drizzle-orm';
 import { check, integer, jsonb, pgTable, primaryKey, text, uuid, index, unique, type AnyPgColumn } from 'drizzle-orm/pg-core';
-import { sampleTypes, siteTypes, structures } from '../../../shared/domain/kinds.ts';
+import { arrangements, sampleTypes, siteTypes, structures } from '../../../shared/domain/kinds.ts';
 import { oneOf } from './checks.ts';
 import { code, id, instant, real } from './columns.ts';
 
-export const termLists = ['metal', 'facet', 'technique', 'support', 'step-class', 'species'] as const;
+export const termLists = ['metal', 'facet', 'technique', 'support', 'step-class', 'species', 'alloy', 'site'] as const;
 
 export const vocabularyTerms = pgTable('vocabulary_terms', {
   list: code('list').notNull(),
@@ -42,18 +42,28 @@ export const surfaces = pgTable('surfaces', {
   metal: code('metal'),
   formula: code('formula').notNull(),
   elements: jsonb('elements').$type<string[]>().notNull(),
+  /** Bulk of a near-surface or single-atom alloy, the metal in or on its first layer, and where that is. */
+  host: code('host'),
+  guest: code('guest'),
+  arrangement: code('arrangement'),
+  guestMonolayers: real('guest_monolayers'),
   structure: code('structure'),
   facet: code('facet'),
+  reconstruction: text('reconstruction'),
   site: code('site'),
   sampleType: code('sample_type'),
   support: text('support'),
   particleSizeNm: real('particle_size_nm'),
+  dispersion: real('dispersion'),
+  strainPercent: real('strain_percent'),
+  stepFraction: real('step_fraction'),
   label: text('label').notNull(),
   mergedInto: uuid('merged_into').references((): AnyPgColumn => surfaces.id),
   createdAt: instant('created_at').notNull().defaultNow(),
 }, (t) => [
   unique('surfaces_key_key').on(t.key),
   check('surfaces_structure_check', oneOf(t.structure, structures)),
+  check('surfaces_arrangement_check', oneOf(t.arrangement, arrangements)),
   check('surfaces_site_check', oneOf(t.site, siteTypes)),
   check('surfaces_sample_type_check', oneOf(t.sampleType, sampleTypes)),
 ]);

@@ -5,7 +5,9 @@ import type { Assessment } from '#shared/assessment/assess-entry.ts';
 import type { Entry, EntryAction, EntryInput } from '#shared/contracts/entries.ts';
 import type { Quantity } from '#shared/contracts/quantities.ts';
 import type { SourceSummary } from '#shared/contracts/sources.ts';
+import { arrangements } from '#shared/domain/kinds.ts';
 import type { State } from '#shared/domain/states.ts';
+import type { Surface } from '#shared/domain/surface.ts';
 import { entryActions, isOpen } from './entries.policy.ts';
 import type { EntryRecord, RevisionRow } from './entries.repository.ts';
 
@@ -73,6 +75,12 @@ function links(accession: string, publicUrl: string) {
   return { self: `${publicUrl}/api/v1/entries/${accession}`, page: `${publicUrl}/entries/${accession}` };
 }
 
+function presentSurface(id: string | null, surface: EntryRecord['surface'] | Surface): NonNullable<Entry['surface']> {
+  const { metal, formula, structure, facet, site, sampleType, support, label, host, guest, guestMonolayers, reconstruction, particleSizeNm, dispersion, strainPercent, stepFraction } = surface;
+  const arrangement = arrangements.find((one) => one === surface.arrangement) ?? null;
+  return { id, metal, formula, structure, facet, site, sampleType, support, label, host, guest, arrangement, guestMonolayers, reconstruction, particleSizeNm, dispersion, strainPercent, stepFraction };
+}
+
 /** A frozen revision as the interface gives it. */
 export function presentRecord(record: EntryRecord, view: View): Entry {
   const { revision, step, surface, conversion } = record;
@@ -82,10 +90,7 @@ export function presentRecord(record: EntryRecord, view: View): Entry {
     ...input,
     accession: record.accession, version: revision.version, revision: revision.number, state: revision.state as State,
     step: { key: step.key, variantKey: step.variantKey, equation: step.equation, class: step.stepClass, direction: step.direction as 1 | -1 },
-    surface: {
-      id: surface.id, metal: surface.metal, formula: surface.formula, structure: surface.structure, facet: surface.facet, site: surface.site,
-      sampleType: surface.sampleType, support: surface.support, label: surface.label,
-    },
+    surface: presentSurface(surface.id, surface),
     source: presentSource(record.source),
     quantities,
     checks: record.checks as Entry['checks'],
@@ -109,10 +114,7 @@ export function presentDraft(
     ...input,
     accession: head.accession, version: null, revision: head.revision.number, state: head.revision.state as State,
     step: presentStep(assessment),
-    surface: surface ? {
-      id: null, metal: surface.metal, formula: surface.formula, structure: surface.structure, facet: surface.facet, site: surface.site,
-      sampleType: surface.sampleType, support: surface.support, label: surface.label,
-    } : null,
+    surface: surface ? presentSurface(null, surface) : null,
     source, quantities, checks,
     kAtT: view.temperatureK === null || !step ? null : rateAtTemperature(quantities, {
       temperatureK: view.temperatureK, correlation: input.correlation, validRange: input.validRange, measured: input.method.class === 'measured',

@@ -8,7 +8,7 @@ export function createVocabularyService({ db }: Context) {
       const [terms, steps] = await Promise.all([repository.listTerms(db), repository.listKnownSteps(db)]);
       const list = (name: string) => terms.filter((term) => term.list === name).map(({ code, label, synonyms, data }) => ({ code, label, synonyms, data }));
       return {
-        metals: list('metal'), facets: list('facet'), techniques: list('technique'), supports: list('support'), stepClasses: list('step-class'),
+        metals: list('metal'), facets: list('facet'), techniques: list('technique'), supports: list('support'), stepClasses: list('step-class'), alloys: list('alloy'), sites: list('site'),
         steps: steps.map(({ key, equation, stepClass, n }) => ({ code: key, label: equation, synonyms: [], data: { class: stepClass, entries: n } })),
       };
     },
