@@ -23,6 +23,14 @@ const commaNumber = /^([<>≤≥≈~]?\s*[+-]?\d*),(\d+(?:e[+-]?\d+)?)$/i;
 const twoReadings = /^[<>≤≥≈~]?\s*[+-]?[1-9]\d{0,2},\d{3}$/;
 const powerOfTen = /(\d)\s*[×x·*]\s*10\s*\^?\s*\(?\s*([+-]?\d+)\s*\)?(?![\d.])/gi;
 
+const raised = '⁰¹²³⁴⁵⁶⁷⁸⁹';
+
+/** Powers of ten as programs write them: 1.2 × 10^-3 and 1.2×10⁻³ as 1.2e-3. */
+function plainPowers(text: string): string {
+  const lowered = text.replace(/10([⁺⁻]?)([⁰¹²³⁴-⁹]+)/g, (_, sign: string, digits: string) => `10^${sign === '⁻' ? '-' : ''}${[...digits].map((digit) => raised.indexOf(digit)).join('')}`);
+  return lowered.replace(powerOfTen, '$1e$2');
+}
+
 /** Spaces of every width as one, signs of every kind as those that programs write. */
 function plainSigns(text: string): string {
   return text.replace(/\r\n?/g, '\n').replace(/[\u00a0\u2007\u2009\u202f]/g, ' ').replace(/[\u2212\u2012\u2013\ufe63\uff0d](?=\s*[\d.,])/g, '-').replace(/\ufeff/g, '');
@@ -61,7 +69,7 @@ function splitBy(text: string, sign: string): string[][] {
 
 /** Cells by white space; what belongs together with spaces inside (a power of ten, a ±) is drawn together first. */
 function splitBySpace(text: string): string[][] {
-  const joined = text.replace(powerOfTen, '$1e$2').replace(/[ ]*(±|\+\/-)[ ]*/g, '$1').replace(/([<>≤≥≈~]) +(?=[\d.+-])/g, '$1');
+  const joined = plainPowers(text).replace(/[ ]*(±|\+\/-)[ ]*/g, '$1').replace(/([<>≤≥≈~]) +(?=[\d.+-])/g, '$1');
   return joined.split('\n').map((line) => line.trim().split(/[ \t]+/));
 }
 
@@ -82,7 +90,7 @@ function separatorOf(text: string): ColumnSeparator {
 
 /** Whether a cell holds a number, with a decimal point or comma. */
 function isNumber(cell: string): boolean {
-  return numberPattern.test(cell.replace(powerOfTen, '$1e$2').replace(/^([+-])\s+/, '$1'));
+  return numberPattern.test(plainPowers(cell).replace(/^([+-])\s+/, '$1'));
 }
 
 /**
@@ -130,17 +138,4 @@ export function isTable(text: string): boolean {
   if (/[\t\n;]/.test(trimmed)) return true;
   const { rows, columns } = readPastedTable(trimmed);
   return columns > 1 && (rows[0] ?? []).every(isNumber) && /\s/.test(trimmed.trim());
-}
-
-/** A number as typed into a cell, or the sentence that says why it is none; an empty cell is null. */
-export function numberInCell(text: string): { value: number | null; fault: string | null } {
-  const plain = plainSigns(text).trim();
-  if (plain === '') return { value: null, fault: null };
-  const joined = plain.replace(powerOfTen, '$1e$2').replace(/^([+-])\s+/, '$1');
-  if (twoReadings.test(joined)) {
-    return { value: null, fault: `${plain} may be ${joined.replace(',', '.')} or ${joined.replace(',', '')}: write it with a point, or without a separator.` };
-  }
-  const value = /^[<>≤≥≈~]/.test(joined) || !numberPattern.test(joined) ? Number.NaN : Number(joined.replace(',', '.'));
-  if (Number.isFinite(value)) return { value, fault: null };
-  return { value: null, fault: `${plain.length > 24 ? `${plain.slice(0, 23)}…` : plain} is not a number. Write 0.0012, 1.2e-3 or 1.2 x 10^-3.` };
 }

@@ -26,7 +26,7 @@ export interface ArrheniusLine {
 interface ArrheniusPlotProps {
   lines: readonly ArrheniusLine[];
   temperatureK: number;
-  /** Unit of k. */
+  /** Unit of k; empty where nobody said it. */
   unit: string;
   height?: number;
   activeId?: string | null;
@@ -73,8 +73,8 @@ export function ArrheniusPlot({ lines, temperatureK, unit, height = 270, activeI
 
   return (
     <figure ref={frame} className="m-0">
-      <svg id={id} className="plot" width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={`${lines.length === 1 ? 'Rate constant' : `${lines.length} rate constants`} against temperature: log k in ${unit} over 1000 K/T; the values are in the table below.`}>
-        <PlotAxes x={x} y={y} left={pad.left} bottom={height - pad.bottom} right={width - pad.right} top={pad.top} xLabel="1000 K / T" yLabel={<>log<tspan dy="3" fontSize="0.78em">10</tspan><tspan dy="-3"> k / (</tspan><UnitTspans unit={unit} />)</>} yLabelLift={topAxis ? 23 : 0} />
+      <svg id={id} className="plot" width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={`${lines.length === 1 ? 'Rate constant' : `${lines.length} rate constants`} against temperature: log k${unit && ` in ${unit}`} over 1000 K/T; the values are in the table below.`}>
+        <PlotAxes x={x} y={y} left={pad.left} bottom={height - pad.bottom} right={width - pad.right} top={pad.top} xLabel="1000 K / T" yLabel={<>log<tspan dy="3" fontSize="0.78em">10</tspan><tspan dy="-3"> k</tspan>{unit && <> / (<UnitTspans unit={unit} />)</>}</>} yLabelLift={topAxis ? 23 : 0} />
         {topAxis && <PlotTopAxis x={x} left={pad.left} right={width - pad.right} top={pad.top} />}
         <path d={`M${atX} ${pad.top - 6}V${height - pad.bottom}`} stroke="var(--color-ochre)" strokeWidth="1.500" strokeDasharray="2 3" />
         <text className="plot-doubt" x={atX > width * 0.6 ? atX - 7 : atX + 7} y={pad.top + 4} textAnchor={atX > width * 0.6 ? 'end' : 'start'}>{`${temperatureK} K${extrapolated ? ', extrapolated' : ''}`}</text>

@@ -37,7 +37,7 @@ export interface FitPlotLine {
 interface FitPlotProps {
   points: readonly FitPlotPoint[];
   line: FitPlotLine | null;
-  /** Unit of k. */
+  /** Unit of k; empty where nobody said it. */
   unit: string;
   logarithm?: 'ln' | 'log10';
   /** Leaves a point out or takes it in again, by its index. */
@@ -99,9 +99,9 @@ export function FitPlot({ points, line, unit, logarithm = 'log10', onToggle, hei
     <figure ref={frame} className="m-0">
       <svg
         id={id} className="plot" width={width} height={total} viewBox={`0 0 ${width} ${total}`} role="img"
-        aria-label={`${drawn.length} rate constants against temperature${line ? ' with the fitted line and the residuals' : ''}${excluded ? `, ${excluded} left out of the fit` : ''}: ${logarithm === 'ln' ? 'ln' : 'log'} k in ${unit} over 1000 K/T; the values are in the table below.`}
+        aria-label={`${drawn.length} rate constants against temperature${line ? ' with the fitted line and the residuals' : ''}${excluded ? `, ${excluded} left out of the fit` : ''}: ${logarithm === 'ln' ? 'ln' : 'log'} k${unit && ` in ${unit}`} over 1000 K/T; the values are in the table below.`}
       >
-        <PlotAxes x={x} y={y} left={pad.left} right={width - pad.right} top={pad.top} bottom={height - 8} xTicks={xTicks} xLabel="1000 K / T" yLabel={<>{log} k / (<UnitTspans unit={unit} />)</>} bareFoot={line !== null} />
+        <PlotAxes x={x} y={y} left={pad.left} right={width - pad.right} top={pad.top} bottom={height - 8} xTicks={xTicks} xLabel="1000 K / T" yLabel={<>{log} k{unit && <> / (<UnitTspans unit={unit} />)</>}</>} bareFoot={line !== null} />
         {half && <path className="fit-band" d={band(whole) ?? ''} fill="var(--color-lichen)" opacity="0.18" />}
         {line && <path className="fit-line-outside" d={path(whole) ?? ''} fill="none" stroke="var(--color-lichen)" strokeWidth="1.500" strokeDasharray="5 4" />}
         {solid.length > 0 && <path className="fit-line" d={path(solid) ?? ''} fill="none" stroke="var(--color-lichen)" strokeWidth="2.200" />}
@@ -211,7 +211,7 @@ function FitTable({ points, lnFit, per, logarithm, unit, onToggle }: FitTablePro
     <PlotTable
       summary={onToggle ? 'The plot as a table, and which points are used' : undefined}
       columns={[
-        { label: 'Point' }, ...(onToggle ? [{ label: 'In the fit' }] : []), { label: 'T', unit: 'K', numeric: true }, { label: log, unit: `of k in ${unit}`, numeric: true },
+        { label: 'Point' }, ...(onToggle ? [{ label: 'In the fit' }] : []), { label: 'T', unit: 'K', numeric: true }, { label: log, unit: unit && `of k in ${unit}`, numeric: true },
         { label: <>standard<br />uncertainty</>, numeric: true }, ...(lnFit ? [{ label: 'line', numeric: true }, { label: 'residual', numeric: true }] : []),
       ]}
       rows={points.map((point) => ({

@@ -68,7 +68,7 @@ export function IntervalPlot({ rows, pooled = null, what = 'Value', unit, digits
     <figure ref={frame} className="m-0">
       <svg
         id={id} className="plot" width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img"
-        aria-label={`${what} of ${rows.length} ${rows.length === 1 ? 'row' : 'rows'} with intervals, in ${unit}${pooled ? `; pooled value ${text(pooled.mean)}${pooled.interval ? `, ${text(pooled.interval[0])} to ${text(pooled.interval[1])}` : ''}` : ''}; the values are in the table below.`}
+        aria-label={`${what} of ${rows.length} ${rows.length === 1 ? 'row' : 'rows'} with intervals${unit && `, in ${unit}`}${pooled ? `; pooled value ${text(pooled.mean)}${pooled.interval ? `, ${text(pooled.interval[0])} to ${text(pooled.interval[1])}` : ''}` : ''}; the values are in the table below.`}
       >
         <g aria-hidden="true">
           {x.ticks(ticks).map((tick) => (

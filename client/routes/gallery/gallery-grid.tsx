@@ -1,6 +1,6 @@
 import { useState } from 'react';
-import { numberInCell } from '#client/lib/pasted-table.ts';
 import { DataGrid, type GridColumn } from '#client/features/workbench/components/data-grid.tsx';
+import { readTypedNumber } from '#client/features/workbench/typed-number.ts';
 
 const columns: GridColumn[] = [
   { id: 't', label: 'T', unit: 'K' },
@@ -12,8 +12,8 @@ const columns: GridColumn[] = [
 export function GalleryGrid() {
   const [rows, setRows] = useState([['450', '0.0045', ''], ['480', '0.04', '0.004'], ['51O', '1,234', '']]);
   const faults = rows.flatMap((cells, row) => cells.flatMap((cell, column) => {
-    const { fault } = numberInCell(cell);
-    return fault === null ? [] : [{ row, column, message: fault }];
+    const read = cell.trim() === '' ? null : readTypedNumber(cell);
+    return read && 'fault' in read ? [{ row, column, message: read.fault }] : [];
   }));
   return (
     <section className="section-line grid gap-10 wide:grid-cols-2">
