@@ -11,7 +11,7 @@ export type Term = z.infer<typeof term>;
 
 export const vocabulary = z.object({
   metals: z.array(term), facets: z.array(term), techniques: z.array(term), supports: z.array(term), stepClasses: z.array(term), steps: z.array(term),
-  alloys: z.array(term).optional(), sites: z.array(term).optional(),
+  alloys: z.array(term).default([]), sites: z.array(term).default([]),
 });
 export type Vocabulary = z.infer<typeof vocabulary>;
 
