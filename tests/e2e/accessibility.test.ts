@@ -3,6 +3,18 @@ import type { BrowserContext, Page } from 'playwright-core';
 import { describe, expect, it } from 'vitest';
 import { useSite } from '#tests/setup/browser.ts';
 
+/** The Workbench: its list, a calculator of each make with a result, with a fault, and empty. */
+const workbench = [
+  { path: '/workbench', what: 'workbench' },
+  { path: '/workbench/arrhenius?preExponential=1e13&energy=100&temperatureK=700&validToK=600', what: 'extrapolated rate constant' },
+  { path: '/workbench/fit?points=420+3.8+_440+13.1+_460+45.2+_480+127+', what: 'fit' },
+  { path: '/workbench/pool?values=100+4+first_106+3+second_94+6+third', what: 'pooled values' },
+  { path: '/workbench/profile?cyclic=yes&temperatureK=500&steps=60+10++_90+-20++', what: 'energy profile' },
+  { path: '/workbench/kie?method=zero-point&wavenumberLightPerCm=3000&wavenumberHeavyPerCm=2200&temperatureK=500', what: 'isotope effect' },
+  { path: '/workbench/energy?value=many&colour=red', what: 'calculation with a fault' },
+  { path: '/workbench/collision', what: 'empty calculator' },
+];
+
 /** WCAG 2.2 AA as far as a program can tell, on every screen, in both themes, wide and narrow; and nothing wider than the window. */
 describe('accessibility', () => {
   const site = useSite();
@@ -37,6 +49,7 @@ describe('accessibility', () => {
       { path: '/contributions', what: 'my submissions' },
       { path: '/review', what: 'review queue' },
       { path: `/review/${review?.submission ?? ''}`, what: 'review' },
+      ...workbench,
       { path: '/nowhere', what: 'no such page' },
     ];
   }

@@ -7,8 +7,8 @@ export const rateConstantSheet = sheet({
   fields: [
     { kind: 'number', key: 'value', label: 'Rate constant', symbol: 'k', unitFrom: 'from' },
     { kind: 'number', key: 'standardUncertainty', label: 'Standard uncertainty', symbol: 'u', unitFrom: 'from', optional: true },
-    { kind: 'text', key: 'from', label: 'From', suggestions: rateUnits, most: 80, placeholder: 'cm3 molecule-1 s-1' },
-    { kind: 'text', key: 'to', label: 'To', suggestions: rateUnits, most: 80, placeholder: 'Pa-1 s-1' },
+    { kind: 'text', key: 'from', label: 'From', suggestions: rateUnits, most: 80, wide: true, placeholder: 'cm3 molecule-1 s-1' },
+    { kind: 'text', key: 'to', label: 'To', suggestions: rateUnits, most: 80, wide: true, placeholder: 'Pa-1 s-1' },
     { ...temperature, optional: true, hint: 'Needed between concentration and pressure.' },
     { kind: 'number', key: 'siteDensityPerM2', label: 'Site density', symbol: 'Γ', unit: 'm-2', optional: true, hint: 'Needed between an area and a site.' },
   ],

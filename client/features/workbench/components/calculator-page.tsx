@@ -8,6 +8,7 @@ import { Notice } from '#client/ui/notice.tsx';
 import { PageHead } from '#client/ui/page-head.tsx';
 import { longestAddress, printTyped } from '../address.ts';
 import { answerOf, fieldName, type Answer } from '../answer.ts';
+import { exampleOf } from '../example.ts';
 import { figureText } from '../figures.ts';
 import type { Fault } from '../read-typed.ts';
 import type { Sheet } from '../sheet.ts';
@@ -86,11 +87,6 @@ export function CalculatorPage({ sheet, mayContribute }: CalculatorPageProps) {
       </div>
     </>
   );
-}
-
-/** The form filled with the example. */
-export function exampleOf({ example }: Sheet): Typed {
-  return { values: example.values ?? {}, tables: example.tables ?? {} };
 }
 
 /** The whole address of what is typed, with the reader's unit where it is not the usual one. */

@@ -12,7 +12,7 @@ export function FieldLabel({ label, symbol, unit }: FieldLabelProps) {
   return (
     <>
       {label}
-      {symbol && <>{' '}<span className="formula-letter"><Formula text={symbol} /></span></>}
+      {symbol && <>{' '}<span className="formula-letter"><Formula text={symbol} silent /></span></>}
       {unit && <>{', '}<UnitText unit={unit} /></>}
     </>
   );

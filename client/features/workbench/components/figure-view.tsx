@@ -27,5 +27,5 @@ export function FigureView({ figure, large = false }: { figure: Figure; large?: 
 
 /** The name of a figure with its letter. */
 export function FigureName({ figure }: { figure: Figure }) {
-  return <>{figure.label}{figure.symbol && <>{' '}<span className="formula-letter"><Formula text={figure.symbol} /></span></>}</>;
+  return <>{figure.label}{figure.symbol && <>{' '}<span className="formula-letter"><Formula text={figure.symbol} silent /></span></>}</>;
 }
