@@ -12,7 +12,7 @@ interface PickerListProps<Value extends string> extends PickerProps<Value> {
 
 /** The list of a picker with its search field, its sections and its foot. */
 export function PickerList<Value extends string>({
-  label, options, chosen, onChange, multiple = true, search = options.length > 8, placeholder, asTyped, onType, recent, clearLabel, footer, id, onDone,
+  label, options, chosen, onChange, multiple = true, search = options.length > 8, placeholder, asTyped, onType, recent, empty = 'There is nothing to choose from.', clearLabel, footer, id, onDone,
 }: PickerListProps<Value>) {
   const [typed, setTyped] = useState('');
   const field = useRef<HTMLInputElement>(null);
@@ -131,7 +131,7 @@ export function PickerList<Value extends string>({
             </li>
           )))}
       </ul>
-      {shown.length === 0 && <p className="picker-note" role="status">{text ? `Nothing here is spelled like “${text}”.` : 'Nothing to choose from.'}</p>}
+      {shown.length === 0 && <p className="picker-note" role="status">{text ? `Nothing here is spelled like “${text}”.` : empty}</p>}
       {listed.length > shown.length && <p className="picker-note">{`${listed.length - shown.length} more; type to find them.`}</p>}
       {(footer || (clearLabel && chosen.length > 0)) && (
         <div className="picker-foot">

@@ -48,6 +48,8 @@ export interface PickerProps<Value extends string> {
   onType?: (typed: string) => void;
   /** A name under which the last choices are remembered on this device and shown first. */
   recent?: string;
+  /** What is said in the place of an empty list. */
+  empty?: string;
   /** The words that take back all choices: "Any metal". */
   clearLabel?: string;
   buttonClassName?: string;

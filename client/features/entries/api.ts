@@ -6,6 +6,7 @@ import {
 import { getVocabulary } from '#shared/contracts/vocabulary.ts';
 import type { ResponseOf } from '#shared/contracts/endpoint.ts';
 import { addressOf, call } from '#client/lib/api-client.ts';
+import type { Grouping } from './search-state.ts';
 
 export type SearchPage = ResponseOf<typeof searchEntries>;
 export type ExportFormat = (typeof exportFormats)[number];
@@ -14,10 +15,10 @@ export type ExportFormat = (typeof exportFormats)[number];
 export const pageSize = 50;
 
 /** The pages of a search, first to last fetched; the rows before stay in sight while others are on their way. */
-export const entrySearchOptions = (filter: EntryFilter, sort: EntrySearch['sort'], temperatureK: number) => infiniteQueryOptions({
-  queryKey: ['entries', 'search', filter, sort, temperatureK],
+export const entrySearchOptions = (filter: EntryFilter, sort: EntrySearch['sort'], grouping: Grouping, temperatureK: number) => infiniteQueryOptions({
+  queryKey: ['entries', 'search', filter, sort, grouping, temperatureK],
   queryFn: ({ signal, pageParam }) => call(searchEntries, {
-    query: { ...filter, sort, T: temperatureK, limit: pageSize, ...(pageParam ? { cursor: pageParam } : {}) }, signal,
+    query: { ...filter, sort, ...(grouping === 'none' ? {} : { groupBy: grouping }), T: temperatureK, limit: pageSize, ...(pageParam ? { cursor: pageParam } : {}) }, signal,
   }),
   initialPageParam: '',
   getNextPageParam: (page) => page.nextCursor,
@@ -58,7 +59,8 @@ export const entryOptions = (accession: string, version: number | null, temperat
 
 /** The address of an export: of everything a search finds, or of the entries named. */
 export function exportAddress(format: ExportFormat, temperatureK: number, what: EntryFilter | { accession: readonly string[] }): string {
-  return addressOf(exportEntries, { query: { ...what, T: temperatureK, format } });
+  // Exports hold accepted entries only, so that no other state can be asked for.
+  return addressOf(exportEntries, { query: { ...what, state: undefined, T: temperatureK, format } });
 }
 
 /** Whether so many entries can be named in one export. */

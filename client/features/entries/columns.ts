@@ -2,7 +2,8 @@ import { sortKeys, type SortKey } from '#shared/contracts/entry-search.ts';
 
 /** The columns of the table of entries that may be shown or not, in their order. */
 export const columnNames = [
-  'step', 'surface', 'barrier', 'value', 'uncertainty', 'printed', 'rate', 'energyType', 'scope', 'method', 'range', 'source', 'conditions', 'accession',
+  'step', 'surface', 'barrier', 'value', 'uncertainty', 'printed', 'factor', 'rate', 'energyType', 'scope', 'provenance', 'method', 'range', 'found', 'source', 'year',
+  'conditions', 'accession', 'accepted',
 ] as const;
 export type ColumnName = (typeof columnNames)[number];
 
@@ -14,18 +15,23 @@ export const columnWords: Readonly<Record<ColumnName, string>> = {
   value: 'Converted value',
   uncertainty: 'Standard uncertainty',
   printed: 'As printed',
+  factor: 'Pre-exponential factor',
   rate: 'k at the temperature of interest',
   energyType: 'Type of energy',
   scope: 'Scope',
+  provenance: 'Provenance',
   method: 'Method',
   range: 'Valid range',
+  found: 'Where the words stand',
   source: 'Source',
+  year: 'Year of publication',
   conditions: 'Coverage and promoter',
   accession: 'Accession',
+  accepted: 'Accepted on',
 };
 
 /** Columns that a first visitor does not see. */
-const usuallyHidden: readonly ColumnName[] = ['energyType', 'scope', 'conditions', 'accession'];
+const usuallyHidden: readonly ColumnName[] = ['factor', 'energyType', 'scope', 'provenance', 'year', 'conditions', 'accession', 'accepted'];
 
 /** Columns that always stand: without them a row says nothing. */
 export const fixedColumns: readonly ColumnName[] = ['step', 'surface', 'value'];
@@ -44,10 +50,34 @@ export function printHidden(hidden: ReadonlySet<ColumnName>): string {
   return columnNames.filter((name) => hidden.has(name)).join(' ');
 }
 
-/** The sort behind a heading; the other columns cannot be sorted. */
+/** The sort behind a heading; the other columns cannot be sorted. The value column is sorted by what it holds. */
 export const columnSort: Partial<Record<ColumnName, SortKey>> = {
-  step: 'step', surface: 'metal', value: 'energy', uncertainty: 'uncertainty', rate: 'k', method: 'method', range: 'validFrom', source: 'source',
+  step: 'step', surface: 'surface', uncertainty: 'uncertainty', factor: 'preExponential', rate: 'k', energyType: 'energyType', scope: 'scope', provenance: 'provenance',
+  method: 'method', range: 'validFrom', source: 'source', year: 'year', accession: 'accession', accepted: 'accepted',
 };
+
+/** The words of a sort, its lower end and its upper end. */
+const sortWords: Readonly<Record<string, readonly [name: string, up: string, down: string]>> = {
+  energy: ['energy', 'smallest first', 'largest first'], uncertainty: ['uncertainty', 'smallest first', 'largest first'],
+  preExponential: ['pre-exponential factor', 'smallest first', 'largest first'], k: ['k at the temperature of interest', 'smallest first', 'largest first'],
+  year: ['year', 'earliest first', 'latest first'], validFrom: ['lower end of the valid range', 'lowest first', 'highest first'],
+  validTo: ['upper end of the valid range', 'lowest first', 'highest first'], accepted: ['day of acceptance', 'earliest first', 'latest first'],
+  step: ['elementary step', 'a to z', 'z to a'], metal: ['metal', 'a to z', 'z to a'], surface: ['surface', 'a to z', 'z to a'], source: ['source', 'a to z', 'z to a'],
+  method: ['method', 'a to z', 'z to a'], scope: ['scope', 'a to z', 'z to a'], provenance: ['provenance', 'a to z', 'z to a'], energyType: ['type of energy', 'a to z', 'z to a'],
+  accession: ['accession', 'a to z', 'z to a'],
+};
+
+/** A sort in words: "energy, largest first". */
+export function wordsOfSort(sort: SortKey): string {
+  const { key, descending } = tableSort(sort);
+  const [name, up, down] = sortWords[key] ?? [key, '', ''];
+  return `${name}, ${descending ? down : up}`;
+}
+
+/** A sort in short: its name, and its sense only where it is turned round. */
+export function shortWordsOfSort(sort: SortKey): string {
+  return sort.startsWith('-') ? wordsOfSort(sort) : wordsOfSort(sort).replace(/,.*/, '');
+}
 
 /** A sort as the table shows it: its key and its sense. */
 export function tableSort(sort: SortKey): { key: string; descending: boolean } {

@@ -1,13 +1,14 @@
 import { energyTypeWords, kindWords, provenanceWords, sampleTypeWords, type EnergyType, type Kind, type Provenance, type SampleType } from '#shared/domain/kinds.ts';
-import type { EntryFilter, FilterCounts } from '#shared/contracts/entry-search.ts';
+import { stateWords, type State } from '#shared/domain/states.ts';
+import type { AllFilterCounts, EntryFilter } from '#shared/contracts/entry-search.ts';
 import type { Term, Vocabulary } from '#shared/contracts/vocabulary.ts';
 import type { EnergyUnit } from '#shared/contracts/accounts.ts';
 import { energyIn, setNumber } from '#client/lib/numbers.ts';
 import { isSet, type FilterName } from './search-state.ts';
 
-/** Filters whose values are chosen from a list. */
+/** Filters whose values are chosen from a list of their own. */
 export const listFilters = [
-  'kind', 'step', 'metal', 'method', 'stepClass', 'facet', 'site', 'contains', 'scope', 'energyType', 'provenance', 'sampleType', 'bond', 'source',
+  'kind', 'facet', 'site', 'sampleType', 'support', 'promoter', 'scope', 'energyType', 'provenance', 'source', 'hasUncertainty', 'state', 'collection',
 ] as const satisfies readonly FilterName[];
 export type ListFilter = (typeof listFilters)[number];
 
@@ -18,60 +19,78 @@ export interface SentencePart {
   unset: string;
   /** The heading of the picker. */
   title: string;
-  /** "3 elementary steps", once the values are too many or too long to be said. */
+  /** "3 facets", once the values are too many or too long to be said. */
   several: string;
   /** The most values that the sentence says by name. */
   sayUpTo: number;
+  /** One value at most: another choice takes its place. */
+  single?: boolean;
 }
 
-/** The parts that always stand in the sentence. */
-export const fixedParts = {
-  kind: { filter: 'kind', before: 'Show', unset: 'all entries', title: 'Kind of parameter', several: 'kinds of parameter', sayUpTo: 2 },
-  step: { filter: 'step', before: 'for', unset: 'any elementary step', title: 'Elementary step', several: 'elementary steps', sayUpTo: 1 },
-  metal: { filter: 'metal', before: 'on', unset: 'any surface', title: 'Metal', several: 'metals', sayUpTo: 5 },
-  method: { filter: 'method', before: 'by', unset: 'any method', title: 'Method', several: 'methods', sayUpTo: 2 },
-} as const satisfies Record<string, SentencePart>;
+/** The first part of the sentence. */
+export const kindPart: SentencePart = { filter: 'kind', before: 'Show', unset: 'all entries', title: 'Kind of parameter', several: 'kinds of parameter', sayUpTo: 2 };
+
+/** The parts that always stand in the sentence and set several filters each. */
+export const mainParts = {
+  step: { before: 'for', unset: 'any elementary step', title: 'Elementary step' },
+  metal: { before: 'on', unset: 'any surface', title: 'Metal' },
+  method: { before: 'by', unset: 'any method', title: 'Method' },
+} as const;
 
 /** The parts that join the sentence when they are set or asked for. */
 export const furtherParts: readonly SentencePart[] = [
-  { filter: 'stepClass', before: 'of class', unset: 'any class of step', title: 'Class of elementary step', several: 'classes', sayUpTo: 2 },
   { filter: 'facet', before: 'on facet', unset: 'any facet', title: 'Facet', several: 'facets', sayUpTo: 4 },
   { filter: 'site', before: 'at sites', unset: 'of any type', title: 'Site', several: 'site types', sayUpTo: 3 },
-  { filter: 'contains', before: 'in a material containing', unset: 'any metal', title: 'Contains', several: 'metals', sayUpTo: 5 },
   { filter: 'sampleType', before: 'studied as', unset: 'any sample', title: 'Form of the sample', several: 'forms', sayUpTo: 2 },
+  { filter: 'support', before: 'supported on', unset: 'any support', title: 'Support', several: 'supports', sayUpTo: 3 },
+  { filter: 'promoter', before: 'with', unset: 'any promoter or none', title: 'Promoter', several: 'promoters', sayUpTo: 3 },
   { filter: 'scope', before: 'of scope', unset: 'any scope', title: 'Scope', several: 'scopes', sayUpTo: 3 },
   { filter: 'energyType', before: 'with energy given as', unset: 'any type', title: 'Type of energy', several: 'types of energy', sayUpTo: 2 },
   { filter: 'provenance', before: 'being', unset: 'of any provenance', title: 'Provenance', several: 'kinds of provenance', sayUpTo: 2 },
-  { filter: 'bond', before: 'about the bond', unset: 'any bond', title: 'Bond', several: 'bonds', sayUpTo: 3 },
-  { filter: 'source', before: 'from', unset: 'any source', title: 'Source', several: 'sources', sayUpTo: 1 },
+  { filter: 'hasUncertainty', before: 'with', unset: 'uncertainty known or not', title: 'Standard uncertainty', several: '', sayUpTo: 1, single: true },
+  { filter: 'source', before: 'from', unset: 'any source', title: 'Source', several: 'sources', sayUpTo: 2 },
+  { filter: 'state', before: 'in state', unset: 'accepted', title: 'State', several: 'states', sayUpTo: 3 },
+  { filter: 'collection', before: 'kept in', unset: 'any of your collections', title: 'Your collection', several: 'collections', sayUpTo: 2 },
 ];
 
-/** What can be added to the sentence by the reader; the rest comes by links only. */
-export const addable: readonly ListFilter[] = ['stepClass', 'facet', 'site', 'contains', 'sampleType', 'scope', 'energyType', 'provenance'];
+/** The parts of the sentence that are typed: names that are in no list. */
+export const nameParts = [
+  { filter: 'author', before: 'written by', unset: 'anybody', title: 'Author', hint: 'Family name; several with commas between them.' },
+  { filter: 'contributor', before: 'contributed by', unset: 'anybody', title: 'Contributor', hint: 'Public name as shown with the entry; several with commas between them.' },
+] as const;
+export type NameFilter = (typeof nameParts)[number]['filter'];
 
-const vocabularyOf: Partial<Record<ListFilter, keyof Vocabulary>> = {
-  metal: 'metals', contains: 'metals', facet: 'facets', method: 'techniques', stepClass: 'stepClasses', step: 'steps',
+const vocabularyOf: Partial<Record<FilterName, keyof Vocabulary>> = {
+  metal: 'metals', contains: 'metals', facet: 'facets', method: 'techniques', stepClass: 'stepClasses', step: 'steps', support: 'supports',
 };
 
 /** The terms of the vocabulary that a filter draws on. */
-export function termsOf(filter: ListFilter, vocabulary: Vocabulary | undefined): readonly Term[] {
+export function termsOf(filter: FilterName, vocabulary: Vocabulary | undefined): readonly Term[] {
   const name = vocabularyOf[filter];
   return name && vocabulary ? vocabulary[name] : [];
 }
 
+const promoterWords: Readonly<Record<string, string>> = { none: 'no promoter', any: 'any promoter' };
+
 /** A value of a filter in words, as the sentence and the pickers say it. */
-export function valueWords(filter: ListFilter, value: string, vocabulary?: Vocabulary, counts?: FilterCounts | null): string {
+export function valueWords(filter: FilterName, value: string, vocabulary?: Vocabulary, counts?: AllFilterCounts | null): string {
   switch (filter) {
     case 'kind': return kindWords[value as Kind] ?? value;
     case 'energyType': return energyTypeWords[value as EnergyType] ?? value;
     case 'provenance': return provenanceWords[value as Provenance] ?? value;
     case 'sampleType': return sampleTypeWords[value as SampleType] ?? value;
+    case 'state': return stateWords[value as State] ?? value;
     case 'site': return siteWords(value);
+    case 'stepClass':
+    case 'cleavage': return value.replaceAll('-', ' ').replace('eley rideal', 'Eley–Rideal');
+    case 'promoter': return promoterWords[value] ?? value;
+    case 'hasUncertainty': return value === 'true' ? 'a known standard uncertainty' : 'no known standard uncertainty';
     case 'metal':
-    case 'contains': return value;
+    case 'contains':
+    case 'facet': return value;
     case 'method': if (value === 'measured' || value === 'computed') return `any ${value} method`;
   }
-  const counted = counts && filter in counts ? counts[filter as keyof FilterCounts].find((one) => one.value === value)?.label : undefined;
+  const counted = counts?.[filter as keyof AllFilterCounts]?.find((one) => one.value === value)?.label;
   return counted ?? termsOf(filter, vocabulary).find((term) => term.code === value)?.label ?? value;
 }
 
@@ -107,22 +126,33 @@ export function rangeWords(from: string | null, to: string | null, tail = ''): s
   return to === null ? 'any' : `up to ${to}${tail}`;
 }
 
+/** The temperatures a value must hold at, with the word before them: at one, or over a range as a whole. */
+export function validWords({ validAt, validFrom, validTo }: EntryFilter): { before: 'at' | 'over'; words: string | null } {
+  const both = validFrom !== undefined && validTo !== undefined;
+  const range = both ? `${validFrom} to ${validTo} K` : validFrom !== undefined || validTo !== undefined ? `${validFrom ?? validTo} K` : null;
+  if (validAt === undefined) return { before: both ? 'over' : 'at', words: range };
+  return { before: 'at', words: range ? `${validAt} K and ${both ? 'over' : 'at'} ${range}` : `${validAt} K` };
+}
+
 /** A filter in force, said whole, as for taking it away: "elementary step: N* + N* -> N2 + 2*". */
 export function filterWords(name: FilterName, filter: EntryFilter, unit: EnergyUnit, vocabulary?: Vocabulary): { title: string; value: string } {
   if (!isSet(filter[name])) return { title: name, value: '' };
-  const part = [...Object.values(fixedParts), ...furtherParts].find((one) => one.filter === name);
-  if (part) {
-    const values = (filter[part.filter] ?? []) as readonly string[];
-    return { title: part.title, value: joinWords(values.map((value) => valueWords(part.filter, value, vocabulary)), 'or') };
-  }
+  const values = (Array.isArray(filter[name]) ? filter[name] : [String(filter[name])]) as readonly string[];
+  const title = titles[name] ?? [kindPart, ...furtherParts, ...nameParts].find((one) => one.filter === name)?.title ?? name;
   switch (name) {
-    case 'q': return { title: 'Containing', value: `"${filter.q}"` };
-    case 'methodClass': return { title: 'Method', value: joinWords(filter.methodClass ?? [], 'or') };
-    case 'validAt': return { title: 'Valid at', value: `${filter.validAt} K` };
-    case 'yearFrom': return { title: 'Published', value: `from ${filter.yearFrom}` };
-    case 'yearTo': return { title: 'Published', value: `up to ${filter.yearTo}` };
-    case 'valueMin': return { title: 'Value', value: valueRangeWords({ kind: filter.kind, valueMin: filter.valueMin }, unit) };
-    case 'valueMax': return { title: 'Value', value: valueRangeWords({ kind: filter.kind, valueMax: filter.valueMax }, unit) };
-    default: return { title: name, value: String(filter[name]) };
+    case 'q': return { title, value: `"${filter.q}"` };
+    case 'validAt':
+    case 'validFrom':
+    case 'validTo': return { title: `Valid ${validWords(filter).before}`, value: validWords(filter).words ?? '' };
+    case 'yearFrom': return { title, value: `from ${filter.yearFrom}` };
+    case 'yearTo': return { title, value: `up to ${filter.yearTo}` };
+    case 'valueMin': return { title, value: valueRangeWords({ kind: filter.kind, valueMin: filter.valueMin }, unit) };
+    case 'valueMax': return { title, value: valueRangeWords({ kind: filter.kind, valueMax: filter.valueMax }, unit) };
+    default: return { title, value: joinWords(values.map((value) => valueWords(name, value, vocabulary)), 'or') };
   }
 }
+
+const titles: Partial<Record<FilterName, string>> = {
+  q: 'Containing', step: 'Elementary step', stepClass: 'Class of elementary step', species: 'Species', bond: 'Bond', cleavage: 'How the bond breaks', metal: 'Metal', formula: 'Formula',
+  contains: 'Containing the metal', method: 'Method', methodClass: 'Method', methodFamily: 'Family of methods', yearFrom: 'Published', yearTo: 'Published', valueMin: 'Value', valueMax: 'Value',
+};

@@ -51,6 +51,11 @@ export function barrierOf(entry: Entry): Quantity | null {
   return entry.quantities.find((one) => one.symbol === 'energy') ?? null;
 }
 
+/** The pre-exponential factor of an entry; null when it holds none. */
+export function factorOf(entry: Entry): Quantity | null {
+  return entry.quantities.find((one) => one.symbol === 'preExponential') ?? null;
+}
+
 /** The figures of a row, set to the digits they deserve. */
 export interface RowFigure {
   shown: ShownQuantity;

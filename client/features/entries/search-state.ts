@@ -1,11 +1,13 @@
 import { useCallback, useEffect, useMemo, useRef } from 'react';
 import { useSearchParams } from 'react-router-dom';
-import { entryFilter, printSearch, readSearch, type EntryFilter, type EntrySearch, type SortKey } from '#shared/contracts/entry-search.ts';
+import { entryFilter, groupings as serverGroupings, printSearch, readSearch, type EntryFilter, type EntrySearch, type SortKey } from '#shared/contracts/entry-search.ts';
 
-/** How the rows are gathered; a matter of the page alone, kept in the address beside the search. */
-export const groupings = ['step', 'surface', 'source', 'none'] as const;
+/** How the rows are gathered. The page gathers by step unless the address says otherwise; `none` is the page's own word. */
+export const groupings = [...serverGroupings, 'none'] as const;
 export type Grouping = (typeof groupings)[number];
 const usualGrouping: Grouping = 'step';
+/** The name in the address for the page's own way to show the rows. */
+const ungrouped = 'group';
 
 export type FilterName = keyof EntryFilter;
 
@@ -39,19 +41,22 @@ export function filtersInForce(filter: EntryFilter): FilterName[] {
   return filterNames.filter((name) => isSet(filter[name]));
 }
 
-/** Names of the address that are no part of the search and must survive its changes. */
-const besides = ['unit', 'group'] as const;
+/** How an address gathers the rows. */
+function groupingIn(params: URLSearchParams, { groupBy }: EntrySearch): Grouping {
+  if (groupBy) return groupBy;
+  // An older link named every grouping so.
+  return groupings.find((one) => one === params.get(ungrouped)) ?? usualGrouping;
+}
 
 function nextParams(before: URLSearchParams, change: (search: EntrySearch) => Partial<EntrySearch>, group?: Grouping): URLSearchParams {
   const { search } = readSearch(before);
-  const { cursor: _cursor, limit: _limit, counts: _counts, ...asked } = search;
-  const next = printSearch(change(asked as EntrySearch));
-  for (const name of besides) {
-    const value = before.get(name);
-    if (value) next.set(name, value);
-  }
-  if (group === usualGrouping) next.delete('group');
-  else if (group) next.set('group', group);
+  const { cursor: _cursor, limit: _limit, counts: _counts, groupBy: _groupBy, ...asked } = search;
+  const grouping = group ?? groupingIn(before, search);
+  const next = printSearch({ ...change(asked as EntrySearch), ...(grouping === usualGrouping || grouping === 'none' ? {} : { groupBy: grouping }) });
+  // The reader's unit is no part of the search and survives its changes.
+  const unit = before.get('unit');
+  if (unit) next.set('unit', unit);
+  if (grouping === 'none') next.set(ungrouped, 'none');
   return next;
 }
 
@@ -91,8 +96,7 @@ export function useEntrySearchState(): EntrySearchState {
   const read = useMemo(() => {
     const params = new URLSearchParams(address);
     const { search, ignored } = readSearch(params);
-    const grouping = groupings.find((one) => one === params.get('group')) ?? usualGrouping;
-    return { filter: filterOf(search), sort: search.sort, grouping, ignored };
+    return { filter: filterOf(search), sort: search.sort, grouping: groupingIn(params, search), ignored };
   }, [address]);
 
   const changeFilter = useCallback((filters: Partial<EntryFilter>, replace = false) => {
@@ -105,16 +109,7 @@ export function useEntrySearchState(): EntrySearchState {
     change((before) => nextParams(before, (search) => ({ ...search, sort })));
   }, [change]);
   const changeGrouping = useCallback((grouping: Grouping) => {
-    change((before) => nextParams(before, (search) => ({ ...search, sort: sortFor(grouping, search.sort) }), grouping));
+    change((before) => nextParams(before, (search) => search, grouping));
   }, [change]);
   return { ...read, changeFilter, clearFilter, changeSort, changeGrouping };
-}
-
-/** The order in which groups come whole. */
-export const groupSorts: Readonly<Record<Grouping, SortKey>> = { step: 'step', surface: 'metal', source: 'source', none: 'step' };
-
-/** Groups come whole when the rows are sorted by what they are grouped by; a sort the reader chose by a figure stays. */
-function sortFor(grouping: Grouping, sort: SortKey): SortKey {
-  const byGroup = Object.values(groupSorts).includes(sort);
-  return byGroup ? groupSorts[grouping] : sort;
 }

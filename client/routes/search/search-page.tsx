@@ -11,13 +11,15 @@ import { useChosen } from '#client/features/entries/chosen.ts';
 import { useEntrySearchState } from '#client/features/entries/search-state.ts';
 import { ChosenTray } from '#client/features/entries/components/chosen-tray.tsx';
 import { QuerySentence } from '#client/features/entries/components/query-sentence.tsx';
-import { ColumnChoice, ExportChoice, GroupChoice, useHiddenColumns } from '#client/features/entries/components/result-controls.tsx';
+import { ColumnChoice, ExportChoice, GroupChoice, SortChoice, useDensity, useHiddenColumns } from '#client/features/entries/components/result-controls.tsx';
 import { ResultStrip } from '#client/features/entries/components/result-strip.tsx';
 import { ResultTable } from '#client/features/entries/components/result-table.tsx';
 import { SearchBox } from '#client/features/entries/components/search-box.tsx';
+import { SearchNotes, SpellingLine } from '#client/features/entries/components/search-notes.tsx';
 import { SummaryLine } from '#client/features/entries/components/summary-line.tsx';
 import { statedRangeWords, ZeroResults } from '#client/features/entries/components/zero-results.tsx';
 import { Collect } from '#client/routes/collections/collect.tsx';
+import { useOwnCollections } from './own-collections.ts';
 
 /** The search: a question as a sentence, and the entries that answer it. */
 export function Component() {
@@ -26,13 +28,16 @@ export function Component() {
   const { temperatureK, unit } = useInstrument();
   const [hidden, setHidden] = useHiddenColumns();
   const [activeId, setActiveId] = useState<string | null>(null);
+  const [density, setDensity] = useDensity();
   const chosen = useChosen();
-  const search = useInfiniteQuery(entrySearchOptions(filter, sort, temperatureK));
+  const collections = useOwnCollections();
+  const search = useInfiniteQuery(entrySearchOptions(filter, sort, grouping, temperatureK));
   const { data: counts } = useQuery(filterCountsOptions(filter));
   const { data: summary } = useQuery(summaryOptions(filter));
   const { data: vocabulary } = useQuery(vocabularyOptions);
 
   const entries = useMemo(() => search.data?.pages.flatMap((page) => page.items) ?? [], [search.data]);
+  const heads = useMemo(() => search.data?.pages.flatMap((page) => page.groups ?? []) ?? [], [search.data]);
   const accessions = useMemo(() => new Set(chosen.keys()), [chosen]);
   const page = search.data?.pages[0];
   const stale = search.isPlaceholderData;
@@ -44,7 +49,7 @@ export function Component() {
   return (
     <>
       <h1 className="sr-only" tabIndex={-1}>Search</h1>
-      <QuerySentence filter={filter} counts={counts} vocabulary={vocabulary} onChange={changeFilter} />
+      <QuerySentence filter={filter} counts={counts} vocabulary={vocabulary} collections={collections} onChange={changeFilter} />
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2 pt-4 pb-5">
         <SearchBox
           label="Also containing" placeholder="also containing: step edge, potassium, author …" maxLength={400}
@@ -53,17 +58,14 @@ export function Component() {
         {page && <p className="text-second">{`${page.total} of ${page.all} entries · filters live in the address bar`}</p>}
         {(stale || (search.isFetching && !search.isFetchingNextPage && page)) && <p className="text-second" role="status">Searching</p>}
       </div>
-      {ignored.length > 0 && (
-        <Notice kind="doubt" title="Parts of this address could not be read and were left out:" className="mb-5">
-          {ignored.map(({ name, message }) => `${name} (${message.replace(/\.$/, '')})`).join(', ')}.
-        </Notice>
-      )}
+      <SearchNotes ignored={ignored} notes={page?.notes ?? []} />
+      {page?.showingResultsFor && filter.q && <SpellingLine typed={filter.q} shown={page.showingResultsFor} onTake={(q) => changeFilter({ q })} />}
       {search.isError && !page ? <ErrorState error={search.error} onRetry={() => void search.refetch()} />
         : !page ? <LoadingState what="entries" rows={10} />
           : page.total === 0 ? (
             <div className="section-line">
               <ZeroResults
-                filter={filter} emptiedBy={page.emptiedBy} withoutStatedRange={page.withoutStatedRange} unit={unit} vocabulary={vocabulary}
+                filter={filter} emptiedBy={page.emptiedBy} nearMisses={page.nearMisses ?? []} withoutStatedRange={page.withoutStatedRange} unit={unit} vocabulary={vocabulary}
                 onChange={changeFilter} onClear={clearFilter}
               />
             </div>
@@ -72,7 +74,8 @@ export function Component() {
               {search.isError && <Notice kind="refusal" live className="mb-5" title="The search did not succeed.">{`${search.error.message} The rows below are those found before.`}</Notice>}
               <SummaryLine total={page.total} totalIsExact={page.totalIsExact} summary={summary} unit={unit}>
                 <GroupChoice grouping={grouping} onChange={changeGrouping} />
-                <ColumnChoice hidden={hidden} onChange={setHidden} />
+                <SortChoice sort={sort} onChange={changeSort} />
+                <ColumnChoice hidden={hidden} density={density} onChange={setHidden} onDensity={setDensity} />
                 <ExportChoice filter={filter} total={page.total} temperatureK={temperatureK} />
               </SummaryLine>
               {page.withoutStatedRange !== null && page.withoutStatedRange > 0 && (
@@ -82,7 +85,8 @@ export function Component() {
                 <ResultStrip summary={summary} filter={filter} unit={unit} activeId={activeId} chosen={accessions} onActive={setActiveId} onFilter={changeFilter} />
               )}
               <ResultTable
-                entries={entries} kinds={filter.kind} grouping={grouping} sort={sort} hidden={hidden} activeId={activeId} stale={stale}
+                entries={entries} heads={heads} searchedWords={filter.q !== undefined} kinds={filter.kind} grouping={grouping} sort={sort} hidden={hidden}
+                dense={density === 'dense'} activeId={activeId} stale={stale}
                 onActive={setActiveId} onSort={changeSort}
               />
               <LoadMore

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { EnergyUnit } from '#shared/contracts/accounts.ts';
 import type { Quantity } from '#shared/contracts/quantities.ts';
 import { asPrinted, quantityFor, rangeText, rowFigure, uncertaintyWords } from '#client/features/entries/row-figures.ts';
-import { entryRows, rowView } from '#client/features/entries/table-rows.ts';
+import { entryRows, groupKey, rowView } from '#client/features/entries/table-rows.ts';
 import { energy, sampleEntry } from './entry-samples.ts';
 
 const none = { uncertaintyKind: 'none', reportedUncertainty: null, standardUncertainty: null } as const;
@@ -60,15 +60,13 @@ describe('rows', () => {
     expect(quantityFor(entry, undefined)?.symbol).toBe('energy');
   });
 
-  it('bring the rows of a group together where its first one stands', () => {
+  it('of both directions of a step are told apart', () => {
     const other = { key: 'x', variantKey: 'x', equation: 'N2 + 2* -> 2N*', class: 'dissociative-adsorption', direction: 1 as const };
-    const list = [sampleEntry('a'), sampleEntry('b', { step: other }), sampleEntry('c'), sampleEntry('d', { step: { ...other, direction: -1 } })];
-    expect(entryRows(list, 'step', undefined, 'kJ/mol').map((row) => row.entry.accession)).toEqual(['a', 'c', 'b', 'd']);
-    expect(entryRows(list, 'none', undefined, 'kJ/mol').map((row) => row.entry.accession)).toEqual(['a', 'b', 'c', 'd']);
+    expect([groupKey(sampleEntry('b', { step: other }), 'step'), groupKey(sampleEntry('d', { step: { ...other, direction: -1 } }), 'step')]).toEqual(['1 x', '-1 x']);
   });
 
   it('name the unit once where all rows share it, and each where they do not', () => {
-    const view = (entries: ReturnType<typeof sampleEntry>[]) => rowView(entryRows(entries, 'none', undefined, 'eV'), 'eV', 700);
+    const view = (entries: ReturnType<typeof sampleEntry>[]) => rowView(entryRows(entries, undefined, 'eV'), 'eV', 700);
     expect(view([entry, sampleEntry('b')])).toMatchObject({ valueUnit: 'eV', kUnit: 's-1', tallestKJPerMol: 189 });
     expect(view([entry, sampleEntry('b', { kind: 'kie', quantities: [kie], kAtT: { temperatureK: 700, value: 1, unit: 'Pa-1 s-1', uLnK: null, extrapolated: false } })])).toMatchObject({ valueUnit: null, kUnit: null });
   });

@@ -78,7 +78,7 @@ describe('columns', () => {
     const hidden = new Set(['barrier', 'rate'] as const);
     expect(readHidden(printHidden(hidden))).toEqual(hidden);
     expect(readHidden('unheard of').size).toBe(0);
-    expect([...readHidden('-')]).toEqual(['energyType', 'scope', 'conditions', 'accession']);
+    expect([...readHidden('-')]).toEqual(['factor', 'energyType', 'scope', 'provenance', 'year', 'conditions', 'accession', 'accepted']);
   });
 
   it('a sort goes to the address and back', () => {

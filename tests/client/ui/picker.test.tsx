@@ -1,7 +1,7 @@
-import { render, screen } from '@testing-library/react';
+import { render, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { useState } from 'react';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { Picker, type PickerOption } from '#client/ui/picker.tsx';
 
 const metals: PickerOption[] = ['Ru', 'Ni', 'Co', 'Fe', 'Rh', 'Ir', 'Pt', 'Pd', 'Cu'].map((value, index) => ({
@@ -96,5 +96,53 @@ describe('picker', () => {
     await user.tab();
     await user.tab();
     expect(screen.queryByRole('listbox')).toBeNull();
+  });
+
+  it('remembers the last choices on this device, five at most, and shows them first', async () => {
+    const user = userEvent.setup();
+    const Remembering = () => {
+      const [chosen, setChosen] = useState<string[]>([]);
+      return <Picker label="Metal" summary="any metal" recent="test" options={metals} chosen={chosen} onChange={setChosen} />;
+    };
+    const { unmount } = render(<Remembering />);
+    await user.click(button());
+    for (const name of ['Pt', 'Pd', 'Cu', 'Ir', 'Rh', 'Fe']) await user.click(screen.getByRole('option', { name: new RegExp(`^${name}`) }));
+    unmount();
+    render(<Remembering />);
+    await user.click(button());
+    const recent = within(screen.getByRole('group', { name: 'recent' })).getAllByRole('option').map((option) => option.textContent?.slice(0, 2));
+    expect(recent).toEqual(['Fe', 'Rh', 'Ir', 'Cu', 'Pd']);
+    expect(within(screen.getByRole('group', { name: 'all' })).getAllByRole('option')).toHaveLength(4);
+  });
+
+  it.each([
+    ['all words in any order', 'nitrogen recombination', 'associative desorption of N2'],
+    ['a slip of the key', 'recombinaton', 'associative desorption of N2'],
+    ['small digits', 'N₂', 'associative desorption of N2'],
+    ['a long dash', 'N–H', 'bond N-H'],
+  ])('finds with %s', async (_, typed, label) => {
+    const user = userEvent.setup();
+    render(<Sentence options={[...metals, { value: 'b', label: 'bond N-H' }, { value: 'a', label: 'associative desorption of N2', also: 'recombination, dinitrogen, nitrogen' }]} />);
+    await user.click(button());
+    await user.keyboard(typed);
+    await waitFor(() => expect(screen.getAllByRole('option')[0]?.textContent).toBe(label));
+  });
+
+  it('offers what is typed as it is, and shows rare options only to those who type', async () => {
+    const user = userEvent.setup();
+    const onChange = vi.fn();
+    render(
+      <Picker
+        label="Metal" summary="any metal" search options={[...metals, { value: 'Os', label: 'Os', deep: true }]} chosen={[]} onChange={onChange}
+        asTyped={(typed) => ({ option: { value: typed, label: `as typed: ${typed}` }, first: typed.includes('->') })}
+      />,
+    );
+    await user.click(button());
+    expect(screen.queryByRole('option', { name: /^Os/ })).toBeNull();
+    await user.keyboard('os');
+    expect(screen.getAllByRole('option').map((option) => option.textContent)).toEqual(['Os', 'as typed: os']);
+    await user.keyboard('->');
+    await user.keyboard('{Enter}');
+    expect(onChange).toHaveBeenCalledWith(['os->'], 'os->');
   });
 });

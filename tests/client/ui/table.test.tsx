@@ -1,4 +1,4 @@
-import { render, screen, waitFor, within } from '@testing-library/react';
+import { act, render, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { useState } from 'react';
 import { describe, expect, it, vi } from 'vitest';
@@ -101,6 +101,21 @@ describe('table', () => {
     await user.click(all);
     expect(screen.getByTestId('chosen').textContent).toBe('a b c');
     expect(all.checked).toBe(true);
+  });
+
+  it('chooses a run of rows with Shift, by a press and by the arrows', async () => {
+    const user = userEvent.setup();
+    render(<Page />);
+    await user.click(screen.getByRole('checkbox', { name: 'Choose Ru(0001)' }));
+    await user.keyboard('{Shift>}');
+    await user.click(screen.getByRole('checkbox', { name: 'Choose Fe(111)' }));
+    await user.keyboard('{/Shift}');
+    expect(screen.getByTestId('chosen').textContent).toBe('a b c');
+    await user.click(screen.getByRole('checkbox', { name: 'Choose all rows shown' }));
+    act(() => screen.getByRole('row', { name: /Ru\(0001\)/ }).focus());
+    await user.keyboard('{Shift>}{ArrowDown}{/Shift}');
+    expect(screen.getByTestId('chosen').textContent).toBe('a b');
+    expect(document.activeElement?.getAttribute('data-row')).toBe('b');
   });
 
   it('puts rows that follow one another under the heading of their group', () => {

@@ -1,77 +1,81 @@
-import { useMemo, type ReactNode } from 'react';
-import type { EntryFilter, FilterCounts } from '#shared/contracts/entry-search.ts';
+import { useMemo } from 'react';
+import type { AllFilterCounts, EntryFilter } from '#shared/contracts/entry-search.ts';
 import type { Vocabulary } from '#shared/contracts/vocabulary.ts';
-import { Equation } from '#client/ui/equation.tsx';
 import { Picker, type PickerOption } from '#client/ui/picker.tsx';
 import { joinWords, termsOf, valueWords, type ListFilter, type SentencePart } from '../filter-words.ts';
+
+/** A list of the reader's own, by its name. */
+export interface NamedCollection {
+  id: string;
+  name: string;
+}
 
 interface FilterPickerProps {
   part: SentencePart;
   filter: EntryFilter;
-  counts: FilterCounts | null | undefined;
+  counts: AllFilterCounts | null | undefined;
   vocabulary: Vocabulary | undefined;
+  collections?: readonly NamedCollection[] | undefined;
   onChange: (change: Partial<EntryFilter>) => void;
 }
 
 /** One part of the query sentence: its words, and the list of values with the entries each would find. */
-export function FilterPicker({ part, filter, counts, vocabulary, onChange }: FilterPickerProps) {
-  const chosen = (filter[part.filter] ?? noValues) as readonly string[];
-  const options = useMemo(() => optionsFor(part.filter, chosen, counts, vocabulary), [part.filter, chosen, counts, vocabulary]);
+export function FilterPicker({ part, filter, counts, vocabulary, collections, onChange }: FilterPickerProps) {
+  const held = filter[part.filter];
+  const chosen = useMemo(() => (held === undefined ? [] : Array.isArray(held) ? held.map(String) : [String(held)]), [held]);
+  const options = useMemo(() => optionsFor(part.filter, chosen, counts, vocabulary, collections), [part.filter, chosen, counts, vocabulary, collections]);
   const label = (value: string) => options.find((option) => option.value === value)?.label ?? value;
-  const said = chosen.length <= part.sayUpTo;
   const names = chosen.map(label);
-  const text = chosen.length === 0 ? part.unset : said ? join(part.filter, names) : `${chosen.length} ${part.several}`;
-  const words: ReactNode = part.filter === 'step' && said && names[0] ? <Equation equation={names[0]} /> : text;
+  const text = chosen.length === 0 ? part.unset : chosen.length <= part.sayUpTo ? join(part.filter, names) : `${chosen.length} ${part.several}`;
+
+  function change(next: readonly string[], toggled?: string) {
+    const kept = part.single ? next.filter((value) => value === toggled) : next;
+    const value = part.filter === 'hasUncertainty' ? kept[0] && kept[0] === 'true' : kept;
+    onChange({ [part.filter]: kept.length > 0 ? value : undefined });
+  }
+
   return (
     <Picker
       label={part.title}
-      summary={words}
+      summary={text}
       summaryText={text}
       options={options}
       chosen={chosen}
       clearLabel={chosen.length > 0 ? part.unset.replace(/^./, (first) => first.toUpperCase()) : ''}
-      onChange={(next) => onChange({ [part.filter]: next.length > 0 ? next : undefined })}
+      onChange={change}
+      {...(counts ? {} : { empty: 'Fetching what there is to choose from.' })}
+      {...(options.length > 8 ? { recent: part.filter } : {})}
     />
   );
 }
 
-const noValues: readonly string[] = [];
-
-/** Short symbols are listed as on a blackboard ("Ru, Ni"), words as in speech ("foil or film"). */
+/** Short symbols are listed as on a blackboard ("111, 0001"), words as in speech ("foil or film"). */
 function join(filter: ListFilter, names: readonly string[]): string {
-  return filter === 'metal' || filter === 'contains' || filter === 'facet' ? names.join(', ') : joinWords(names, filter === 'kind' ? 'and' : 'or');
+  return filter === 'facet' ? names.join(', ') : joinWords(names, filter === 'kind' ? 'and' : 'or');
 }
 
 /** The values to choose from, those that find most first; a chosen one stays in the list when it finds nothing. */
 function optionsFor(
-  filter: ListFilter, chosen: readonly string[], counts: FilterCounts | null | undefined, vocabulary: Vocabulary | undefined,
+  filter: ListFilter, chosen: readonly string[], counts: AllFilterCounts | null | undefined, vocabulary: Vocabulary | undefined, collections: readonly NamedCollection[] | undefined,
 ): PickerOption[] {
   const terms = termsOf(filter, vocabulary);
-  const counted = countsFor(filter, counts);
-  const known = new Set(counted.map((one) => one.value));
-  const rest = chosen.filter((value) => !known.has(value)).map((value) => ({ value, label: valueWords(filter, value, vocabulary), count: counts ? 0 : undefined }));
-  return [...counted, ...rest].map(({ value, label, count }) => {
-    const term = terms.find((one) => one.code === value);
-    const words = filter === 'method' || filter === 'step' || filter === 'stepClass' || filter === 'facet' ? label : valueWords(filter, value, vocabulary);
-    const name = (filter === 'metal' || filter === 'contains') && term ? term.label : '';
-    return {
-      value,
-      label: words,
-      count,
-      also: [...(term?.synonyms ?? []), name].join(' '),
-      ...(filter === 'step' ? { display: <Equation equation={words} /> } : {}),
-      ...(name && name !== words ? { group: name } : {}),
-    };
-  });
+  const options = filter === 'collection'
+    ? (collections ?? []).map(({ id, name }) => ({ value: id, label: name }))
+    : (counts?.[filter] ?? []).map(({ value, label, count }) => ({ value, label: filter === 'source' ? label : worded(filter, value, label), count, also: alsoOf(filter, value, terms) }));
+  const known = new Set(options.map(({ value }) => value));
+  const rest = chosen.filter((value) => !known.has(value)).map((value) => ({
+    value, label: filter === 'collection' ? 'a collection of yours' : valueWords(filter, value, vocabulary), ...(counts && filter !== 'collection' ? { count: 0 } : {}),
+  }));
+  return [...options, ...rest];
 }
 
-function countsFor(filter: ListFilter, counts: FilterCounts | null | undefined): readonly { value: string; label: string; count: number }[] {
-  if (!counts) return [];
-  switch (filter) {
-    case 'method': return [...counts.methodClass.map((one) => ({ ...one, label: valueWords('method', one.value) })), ...counts.method];
-    case 'contains': return counts.metal;
-    case 'bond':
-    case 'source': return [];
-    default: return counts[filter];
-  }
+/** The words of the sentence where it has its own; else those that came with the count. */
+function worded(filter: ListFilter, value: string, label: string): string {
+  const words = valueWords(filter, value);
+  return words === value ? label : words;
+}
+
+function alsoOf(filter: ListFilter, value: string, terms: ReturnType<typeof termsOf>): string {
+  const term = terms.find((one) => one.code === value);
+  return [value, term?.label, ...(term?.synonyms ?? []), filter === 'promoter' && value === 'none' ? 'clean unpromoted' : '', filter === 'site' ? 'steps edges' : ''].filter(Boolean).join(', ');
 }

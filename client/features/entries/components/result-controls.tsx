@@ -1,12 +1,12 @@
 import { useMemo } from 'react';
-import type { EntryFilter } from '#shared/contracts/entry-search.ts';
+import { sortKeys, type EntryFilter, type SortKey } from '#shared/contracts/entry-search.ts';
 import { useLocalStorage } from '#client/lib/local-storage.ts';
-import { Checkbox } from '#client/ui/choice.tsx';
+import { Checkbox, RadioGroup } from '#client/ui/choice.tsx';
 import { TextButton } from '#client/ui/button.tsx';
 import { Picker } from '#client/ui/picker.tsx';
 import { Popover } from '#client/ui/popover.tsx';
 import { exportAddress, type ExportFormat } from '../api.ts';
-import { columnNames, columnWords, fixedColumns, printHidden, readHidden, usual, type ColumnName } from '../columns.ts';
+import { columnNames, columnWords, fixedColumns, printHidden, readHidden, shortWordsOfSort, usual, wordsOfSort, type ColumnName } from '../columns.ts';
 import { groupings, type Grouping } from '../search-state.ts';
 
 const quiet = 'min-h-6 text-second hover:text-ink hover:underline underline-offset-4 aria-expanded:text-ink';
@@ -29,6 +29,32 @@ export function GroupChoice({ grouping, onChange }: { grouping: Grouping; onChan
   );
 }
 
+/** "Sorted by energy, smallest first": every order there is, whether its column is shown or not. */
+export function SortChoice({ sort, onChange }: { sort: SortKey; onChange: (sort: SortKey) => void }) {
+  return (
+    <Picker
+      label="Sort by"
+      summary={<>Sort by <b className="text-ink">{shortWordsOfSort(sort)}</b></>}
+      summaryText={wordsOfSort(sort)}
+      buttonClassName={quiet}
+      multiple={false}
+      options={sortOptions}
+      chosen={[sort]}
+      onChange={([next]) => next && onChange(next)}
+    />
+  );
+}
+
+const sortOptions = sortKeys.map((value) => ({ value, label: wordsOfSort(value) }));
+
+export type Density = 'comfortable' | 'dense';
+
+/** How close the rows stand, remembered on this device. */
+export function useDensity(): [Density, (density: Density) => void] {
+  const [stored, store] = useLocalStorage('sillstone.rows', 'comfortable');
+  return [stored === 'dense' ? 'dense' : 'comfortable', store];
+}
+
 /** Which columns are hidden, remembered on this device. */
 export function useHiddenColumns(): [ReadonlySet<ColumnName>, (hidden: ReadonlySet<ColumnName> | null) => void] {
   const [stored, store] = useLocalStorage('sillstone.columns', usual);
@@ -36,28 +62,41 @@ export function useHiddenColumns(): [ReadonlySet<ColumnName>, (hidden: ReadonlyS
   return [hiddenNow, (hidden) => store(hidden ? printHidden(hidden) : usual)];
 }
 
-/** The columns to be shown. */
-export function ColumnChoice({ hidden, onChange }: { hidden: ReadonlySet<ColumnName>; onChange: (hidden: ReadonlySet<ColumnName> | null) => void }) {
+interface ColumnChoiceProps {
+  hidden: ReadonlySet<ColumnName>;
+  density: Density;
+  onChange: (hidden: ReadonlySet<ColumnName> | null) => void;
+  onDensity: (density: Density) => void;
+}
+
+/** The columns to be shown, and how close the rows stand. */
+export function ColumnChoice({ hidden, density, onChange, onDensity }: ColumnChoiceProps) {
   return (
     <Popover label="Columns" buttonClassName={quiet} align="end" panelClassName="p-4">
       {() => (
-        <fieldset>
-          <legend className="field-label pb-1">Columns shown</legend>
-          {columnNames.filter((name) => !fixedColumns.includes(name)).map((name) => (
-            <Checkbox
-              key={name}
-              label={columnWords[name]}
-              checked={!hidden.has(name)}
-              onChange={(event) => {
-                const next = new Set(hidden);
-                if (event.target.checked) next.delete(name);
-                else next.add(name);
-                onChange(next);
-              }}
-            />
-          ))}
-          <TextButton className="mt-2" onClick={() => onChange(null)}>The usual columns</TextButton>
-        </fieldset>
+        <>
+          <RadioGroup
+            legend="Rows" name="density" look="segments" value={density} onChange={onDensity}
+            choices={[{ value: 'comfortable', label: 'comfortable' }, { value: 'dense', label: 'dense' }]}
+          />
+          <fieldset className="pt-3">
+            <legend className="field-label pb-1">Columns shown</legend>
+            {columnNames.filter((name) => !fixedColumns.includes(name)).map((name) => (
+              <Checkbox
+                key={name}
+                label={columnWords[name]}
+                checked={!hidden.has(name)}
+                onChange={(event) => {
+                  const next = new Set(hidden);
+                  if (event.target.checked) next.delete(name);
+                  else next.add(name);
+                  onChange(next);
+                }}
+              />
+            ))}
+            <TextButton className="mt-2" onClick={() => onChange(null)}>The usual columns</TextButton>
+          </fieldset>
+        </>
       )}
     </Popover>
   );
@@ -75,16 +114,17 @@ export function ExportChoice({ filter, total, temperatureK }: { filter: EntryFil
     <Popover label="Export" buttonClassName={quiet} align="end" panelClassName="w-[22rem] p-4">
       {(close) => (
         <>
-          <p className="field-label">{`All ${total} entries found, with k at ${temperatureK} K`}</p>
-          <ul className="py-1">
-            {formats.map(({ format, label, hint }) => (
-              <li key={format} className="py-1.5">
-                <a href={exportAddress(format, temperatureK, filter)} download onClick={close}>{label}</a>
-                <span className="field-hint block">{hint}</span>
-              </li>
-            ))}
-          </ul>
-          <p className="field-hint">The values are literature reports, not design data.</p>
+            <p className="field-label">{`All ${total} entries found, with k at ${temperatureK} K`}</p>
+          {filter.state?.some((state) => state !== 'accepted') && <p className="field-hint">Files hold accepted entries only, whatever states the list shows.</p>}
+            <ul className="py-1">
+              {formats.map(({ format, label, hint }) => (
+                <li key={format} className="py-1.5">
+                  <a href={exportAddress(format, temperatureK, filter)} download onClick={close}>{label}</a>
+                  <span className="field-hint block">{hint}</span>
+                </li>
+              ))}
+            </ul>
+            <p className="field-hint">The values are literature reports, not design data.</p>
         </>
       )}
     </Popover>

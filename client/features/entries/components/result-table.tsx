@@ -1,23 +1,28 @@
-import { useMemo, type ReactNode } from 'react';
+import { useMemo } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
 import type { Kind } from '#shared/domain/kinds.ts';
-import type { Entry } from '#shared/contracts/entries.ts';
-import type { SortKey } from '#shared/contracts/entry-search.ts';
+import type { FoundEntry, GroupHead, SortKey } from '#shared/contracts/entry-search.ts';
 import { useInstrument } from '#client/lib/instrument.ts';
 import { Equation } from '#client/ui/equation.tsx';
-import { DataTable, type RowGroup } from '#client/ui/table.tsx';
+import { DataTable } from '#client/ui/table.tsx';
 import { setChosen, useChosen } from '../chosen.ts';
 import { sortOf, tableSort, type ColumnName } from '../columns.ts';
-import { classWords } from '../entry-words.ts';
-import { groupSorts, type Grouping } from '../search-state.ts';
-import { entryRows, groupKey, rowView, type EntryRow, type RowView } from '../table-rows.ts';
+import type { Grouping } from '../search-state.ts';
+import { entryRows, groupKey, headsByKey, rowView, type EntryRow, type RowView } from '../table-rows.ts';
 import { entryColumns } from './entry-columns.tsx';
+import { FoundIn } from './found-in.tsx';
+import { GroupHeading } from './group-heading.tsx';
 import { BarrierCell, MethodCell, PrintedText, RateCell, SourceCell, UncertaintyCell, ValueCell } from './row-cells.tsx';
 import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { valueHeading } from './value-heading.tsx';
 
 interface ResultTableProps {
-  entries: readonly Entry[];
+  entries: readonly FoundEntry[];
+  /** The heads of the groups that the entries belong to. */
+  heads: readonly GroupHead[];
+  /** Free words were looked for, and each row says where they stand. */
+  searchedWords: boolean;
+  dense: boolean;
   kinds: readonly Kind[] | undefined;
   grouping: Grouping;
   sort: SortKey;
@@ -29,15 +34,19 @@ interface ResultTableProps {
 }
 
 /** The entries found, as a table (stanzas where the page is narrow). */
-export function ResultTable({ entries, kinds, grouping, sort, hidden, activeId, stale, onActive, onSort }: ResultTableProps) {
+export function ResultTable({ entries, heads, searchedWords, dense, kinds, grouping, sort, hidden, activeId, stale, onActive, onSort }: ResultTableProps) {
   const { unit, temperatureK } = useInstrument();
   const navigate = useNavigate();
   const chosen = useChosen();
-  const rows = useMemo(() => entryRows(entries, grouping, kinds, unit), [entries, grouping, kinds, unit]);
+  const rows = useMemo(() => entryRows(entries, kinds, unit), [entries, kinds, unit]);
   const view = useMemo(() => rowView(rows, unit, temperatureK), [rows, unit, temperatureK]);
-  const columns = useMemo(() => entryColumns(view, grouping, valueHeading(rows, kinds)), [view, grouping, rows, kinds]);
+  const columns = useMemo(() => entryColumns(view, grouping, valueHeading(rows, kinds), searchedWords), [view, grouping, rows, kinds, searchedWords]);
   const accessions = useMemo(() => new Set(chosen.keys()), [chosen]);
-  const group = useMemo(() => (grouping === 'none' ? undefined : ({ entry }: EntryRow) => heading(entry, grouping)), [grouping]);
+  const headOf = useMemo(() => headsByKey(heads), [heads]);
+  const group = useMemo(() => (grouping === 'none' ? undefined : ({ entry }: EntryRow) => {
+    const key = groupKey(entry, grouping);
+    return { key, label: <GroupHeading entry={entry} head={headOf.get(key)} grouping={grouping} unit={unit} /> };
+  }), [grouping, headOf, unit]);
   return (
     <DataTable
       caption="Entries found"
@@ -46,8 +55,8 @@ export function ResultTable({ entries, kinds, grouping, sort, hidden, activeId, 
       rowId={rowId}
       rowLabel={rowLabel}
       hidden={hidden}
-      sort={sort === groupSorts[grouping] ? null : tableSort(sort)}
-      onSort={(next) => onSort((next && sortOf(next)) ?? groupSorts[grouping])}
+      sort={sort === usualSort ? null : tableSort(sort)}
+      onSort={(next) => onSort((next && sortOf(next)) ?? usualSort)}
       chosen={accessions}
       onChosen={(next) => setChosen(next, entries)}
       group={group}
@@ -56,24 +65,15 @@ export function ResultTable({ entries, kinds, grouping, sort, hidden, activeId, 
       onOpen={({ entry }) => void navigate(`/entries/${entry.accession}`)}
       stanza={(row) => <Stanza row={row} view={{ ...view, valueUnit: null, valueDecimals: 0, valuePower: false, kUnit: null }} grouping={grouping} />}
       stale={stale}
+      dense={dense}
+      stanzaSort={false}
     />
   );
 }
 
+const usualSort: SortKey = 'step';
 const rowId = ({ entry }: EntryRow) => entry.accession;
 const rowLabel = ({ entry }: EntryRow) => `${entry.surface?.label ?? 'no surface'}, ${entry.source?.label ?? 'no source'}, ${entry.accession}`;
-
-/** The heading of a group of rows. */
-function heading(entry: Entry, grouping: Grouping): RowGroup {
-  const key = groupKey(entry, grouping);
-  const note = (words: string) => <span className="table-group-note">{words}</span>;
-  const label: ReactNode = grouping === 'step'
-    ? entry.step ? <><Equation equation={entry.step.equation} display />{' '}{note(classWords(entry.step.class))}</> : 'no elementary step'
-    : grouping === 'surface'
-      ? <SurfaceLabel label={entry.surface?.label ?? 'no surface'} />
-      : entry.source ? <><Link to={`/sources/${entry.source.id}`}>{entry.source.label}</Link>{' '}{note(entry.source.title)}</> : 'no source';
-  return { key, label };
-}
 
 /** A row where the page is narrow: equation and surface, value with its glyph, as printed, source. */
 function Stanza({ row, view, grouping }: { row: EntryRow; view: RowView; grouping: Grouping }) {
@@ -95,6 +95,7 @@ function Stanza({ row, view, grouping }: { row: EntryRow; view: RowView; groupin
       {entry.kAtT && <p className="stanza-quiet">k at {view.temperatureK} K: <RateCell entry={entry} view={view} /></p>}
       <p className="stanza-quiet"><MethodCell entry={entry} /></p>
       <p className="stanza-quiet"><SourceCell entry={entry} /></p>
+      {entry.matches && entry.matches.length > 0 && <p className="stanza-quiet"><FoundIn matches={entry.matches} /></p>}
     </>
   );
 }

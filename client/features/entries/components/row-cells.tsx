@@ -6,7 +6,7 @@ import { Tag } from '#client/ui/tag.tsx';
 import { UnitText } from '#client/ui/unit-text.tsx';
 import { Aligned, NumberText } from '#client/ui/value.tsx';
 import { methodTags, methodText } from '../entry-words.ts';
-import { asPrinted, barrierOf, rangeText, shown, uncertaintyWords, type RowFigure } from '../row-figures.ts';
+import { asPrinted, barrierOf, factorOf, rangeText, shown, uncertaintyWords, type RowFigure } from '../row-figures.ts';
 import type { RowView } from '../table-rows.ts';
 
 /** The drawn barrier of a row, to the scale of the page. */
@@ -54,7 +54,21 @@ export function RateCell({ entry, view }: { entry: Entry; view: RowView }) {
     <span className="whitespace-nowrap">
       <NumberText number={setNumber(rate.value, { scientific: true, digits: 2 })} />
       {view.kUnit === null && <span className="text-second">{' '}<UnitText unit={rate.unit} /></span>}
+      {rate.uLnK !== null && rate.uLnK > 0 && <span className="text-second" title="one standard uncertainty, as a factor">{` ×/÷\u2009${setNumber(Math.exp(rate.uLnK), { digits: 2 }).text}`}</span>}
       {rate.extrapolated && <>{' '}<Tag kind="doubt">extrapolated</Tag></>}
+    </span>
+  );
+}
+
+/** The pre-exponential factor with its unit where the column has none. */
+export function FactorCell({ entry, view }: { entry: Entry; view: RowView }) {
+  const factor = factorOf(entry);
+  if (!factor) return <Absent words="no pre-exponential factor in this entry" />;
+  if (factor.value === null) return <span className="text-second">{factor.missing?.length ? 'not converted' : 'a limit'}</span>;
+  return (
+    <span className="whitespace-nowrap">
+      <NumberText number={setNumber(factor.value, { scientific: true, digits: Math.max(1, Math.min(3, factor.significantDigits ?? 2)) })} />
+      {view.factorUnit === null && <span className="text-second">{' '}<UnitText unit={factor.unit} /></span>}
     </span>
   );
 }
