@@ -3,6 +3,7 @@ import { R } from '#shared/kinetics/constants.ts';
 import { csvText } from '#client/lib/csv-text.ts';
 import { useInstrument } from '#client/lib/instrument.ts';
 import { ArrheniusPlot } from '#client/ui/arrhenius-plot.tsx';
+import { CompensationPlot } from '#client/ui/compensation-plot.tsx';
 import { EnergyProfile } from '#client/ui/energy-profile.tsx';
 import { FitPlot } from '#client/ui/fit-plot.tsx';
 import { IntervalPlot } from '#client/ui/interval-plot.tsx';
@@ -52,6 +53,9 @@ export function GalleryPlots() {
       </PlotFrame>
       <PlotFrame title="Beyond the range of doubles">
         <ArrheniusPlot topAxis temperatureK={temperatureK} unit="s-1" lines={[{ id: 'a', label: 'very slow', lnK: line(9000, 30), range: { min: 300, max: 700 } }, { id: 'b', label: 'nothing at all', lnK: () => Number.NEGATIVE_INFINITY, range: null }]} />
+      </PlotFrame>
+      <PlotFrame title="Compensation">
+        <CompensationPlot energyUnit="kJ/mol" unit="s-1" line={{ slope: 0.105, intercept: 10.3 }} points={intervalRows.slice(0, 4).map((row, index) => ({ id: row.id, label: row.label, energy: row.value ?? 0, uEnergy: row.u, lnA: 29.9 - index * 1.6, uLnA: index % 2 ? 0.8 : null, computed: row.computed }))} />
       </PlotFrame>
       <PlotFrame title="One pathway">
         <EnergyProfile pathways={pathways.slice(0, 1)} unit="kJ/mol" what="Enthalpy" />
