@@ -7,25 +7,28 @@ export interface Subject {
   run: (i: number) => number;
 }
 
-/** Median rate of a subject with its spread, and how often it ran. */
+/** Median rate of a subject with its spread. */
 export interface Measured {
   name: string;
   perSecond: number;
   /** Slowest and fastest round. */
   from: number;
   to: number;
+  /** How many times as fast as the last subject: the median of the rounds. */
+  ratio: number;
 }
 
 /** What the subjects computed, so that no work can be left out by the compiler. */
 let sink = 0;
 
+/** Processor time in seconds: what other programs take of a shared machine does not count, collecting one's own garbage does. */
 function once(subject: Subject, count: number): number {
-  const start = process.hrtime.bigint();
+  const start = process.cpuUsage();
   let sum = 0;
   for (let i = 0; i < count; i += 1) sum += subject.run(i);
-  const elapsed = Number(process.hrtime.bigint() - start) / 1e9;
+  const { user, system } = process.cpuUsage(start);
   sink += sum;
-  return elapsed;
+  return Math.max((user + system) / 1e6, 1e-6);
 }
 
 const median = (values: readonly number[]): number => [...values].sort((a, b) => a - b)[values.length >> 1] as number;
@@ -54,7 +57,8 @@ export function measure(subjects: readonly Subject[], { rounds = 9, seconds = 0.
   if (!Number.isFinite(sink)) throw new Error('a subject computed something that is not finite');
   return subjects.map(({ name }, i) => {
     const own = rates[i] as number[];
-    return { name, perSecond: median(own), from: Math.min(...own), to: Math.max(...own) };
+    const last = rates.at(-1) as number[];
+    return { name, perSecond: median(own), from: Math.min(...own), to: Math.max(...own), ratio: median(own.map((rate, round) => rate / (last[round] as number))) };
   });
 }
 
