@@ -46,7 +46,7 @@ export function CompensationPlot({ points, line = null, energyUnit, unit, height
   const margin = Math.max(1e-9, (Math.max(...along) - Math.min(...along)) * 0.06);
   const ends = [Math.min(...along) - margin, Math.max(...along) + margin] as const;
   const lineAt = (energy: number) => (line ? line.intercept + line.slope * energy : Number.NaN) / Math.LN10;
-  const heights = drawn.flatMap(({ lnA, uLnA }) => [lnA - (uLnA ?? 0), lnA + (uLnA ?? 0)]).map((value) => value / Math.LN10);
+  const heights = [...drawn.flatMap(({ lnA, uLnA }) => [lnA - (uLnA ?? 0), lnA + (uLnA ?? 0)]).map((value) => value / Math.LN10), ...(line ? ends.map(lineAt) : [])];
   const x = linearScale({ domain: ends, range: [pad.left, width - pad.right] });
   const y = linearScale({ domain: [Math.min(...heights), Math.max(...heights, Math.min(...heights) + 0.5)], range: [height - pad.bottom, pad.top], nice: 6 });
   const open = drawn.some((point) => point.computed);
