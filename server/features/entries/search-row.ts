@@ -19,8 +19,26 @@ function position({ value, low, high }: { value: number | null; low: number | nu
   return low ?? high;
 }
 
+interface EquationFacts {
+  species: string[];
+  cleavage: string | null;
+}
+
+/** Equations come again and again: the last ones read are kept. */
+const readings = new Map<string, EquationFacts>();
+const mostReadings = 1000;
+
+function readEquation(equation: string): EquationFacts {
+  const known = readings.get(equation);
+  if (known) return known;
+  if (readings.size >= mostReadings) readings.clear();
+  const facts = equationFacts(equation);
+  readings.set(equation, facts);
+  return facts;
+}
+
 /** What the equation says besides its key. The reader that made the key reads the print again; a newer one may refuse it. */
-function readEquation(equation: string): { species: string[]; cleavage: string | null } {
+function equationFacts(equation: string): EquationFacts {
   try {
     const { reactants, products, assistance } = readStep(equation);
     return { species: [...new Set([...reactants, ...products].filter(({ species }) => species.phase !== 'free-site').map(({ species }) => species.formula))].sort(), cleavage: assistance };

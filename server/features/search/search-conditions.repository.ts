@@ -1,5 +1,6 @@
 import { and, eq, inArray, or, sql, type SQL } from 'drizzle-orm';
 import { searchRows as rows } from '#server/db/schema/search.ts';
+import { methodClasses } from '#shared/domain/kinds.ts';
 import { wordsOf } from './free-words.ts';
 import type { Ask, FilterName, SearchFilter, StepPattern, Visibility } from './search-engine.ts';
 
@@ -66,7 +67,11 @@ export function filterConditions(filter: SearchFilter): Map<FilterName, SQL> {
   list('species', filter.species, (some) => sql`${rows.species} && ${texts(some)}`);
   anyOf('bond', rows.bond, filter.bond);
   anyOf('cleavage', rows.cleavage, filter.cleavage);
-  list('method', filter.method, (some) => or(inArray(rows.technique, some), inArray(rows.methodClass, some)));
+  list('method', filter.method, (some) => {
+    const classes = some.filter((one) => (methodClasses as readonly string[]).includes(one));
+    const techniques = some.filter((one) => !classes.includes(one));
+    return or(techniques.length > 0 ? inArray(rows.technique, techniques) : undefined, classes.length > 0 ? inArray(rows.methodClass, classes) : undefined);
+  });
   anyOf('methodClass', rows.methodClass, filter.methodClass);
   list('methodFamily', filter.methodFamily, (some) => inArray(sql`lower(${rows.technique})`, some));
   anyOf('provenance', rows.provenance, filter.provenance);

@@ -11,12 +11,21 @@ const mostValues = 200;
 /** Filters whose conditions stand and fall with another's: the limits of a value say nothing without its kind. */
 const together: Partial<Record<CountedFilter, readonly FilterName[]>> = { kind: ['kind', 'valueMin', 'valueMax'] };
 
-const plain = {
-  metal: rows.metal, step: rows.stepKey, stepClass: rows.stepClass, method: rows.technique, methodClass: rows.methodClass, facet: rows.facet, site: rows.site, scope: rows.scope,
-  provenance: rows.provenance, energyType: rows.energyType, sampleType: rows.sampleType, bond: rows.bond, cleavage: rows.cleavage, formula: rows.formula, support: rows.support,
-  source: sql`${rows.sourceId}::text collate "C"`, hasUncertainty: sql`${rows.hasUncertainty}::text collate "C"`, methodFamily: sql`families.family`,
+/**
+ * The columns counted, in sets that take few different values together: so rows are gathered into some hundreds of groups in one walk, in memory,
+ * and the counts of every column are made from those.
+ */
+const sets = {
+  step: { step: rows.stepKey, stepClass: rows.stepClass, bond: rows.bond, cleavage: rows.cleavage, species: rows.species },
+  material: { metal: rows.metal, formula: rows.formula, contains: rows.elements },
+  face: { facet: rows.facet, site: rows.site, sampleType: rows.sampleType },
+  dress: { support: rows.support, promoter: rows.promoters },
+  method: { method: rows.technique, methodClass: rows.methodClass },
+  nature: { scope: rows.scope, provenance: rows.provenance, energyType: rows.energyType, hasUncertainty: rows.hasUncertainty },
+  kind: { kind: rows.kindsHeld },
+  source: { source: rows.sourceId },
 } as const;
-const listed = { kind: rows.kindsHeld, species: rows.species, contains: rows.elements, promoter: rows.promoters } as const;
+const lists: readonly CountedFilter[] = ['species', 'contains', 'promoter', 'kind'];
 
 const name = (text: string): SQL => sql.raw(`"${text}"`);
 const quoted = (text: string): SQL => sql.raw(`'${text}'`);
@@ -35,41 +44,57 @@ export async function countValues(db: DbOrTx, ask: Ask): Promise<Counts> {
   const own = new Map<CountedFilter, SQL>();
   const taken = new Set<FilterName>();
   for (const filter of countedFilters) {
-    const names = together[filter] ?? [filter];
-    const parts = names.flatMap((one) => conditions.get(one) ?? []);
     if (!conditions.has(filter)) continue;
-    own.set(filter, sql`coalesce(${and(...parts)}, false)`);
+    const names = together[filter] ?? [filter];
+    own.set(filter, sql`coalesce(${and(...names.flatMap((one) => conditions.get(one) ?? []))}, false)`);
     for (const one of names) taken.add(one);
   }
   const active = [...own.keys()];
   const base = [...conditions].filter(([one]) => !taken.has(one)).map(([, condition]) => condition);
-  const fails = active.length === 0 ? sql`0` : sql.join(active.map((filter) => sql`(not ${own.get(filter)})::int`), sql` + `);
+  const fails = sql.join(active.map((filter) => sql`(not ${own.get(filter)})::int`), sql` + `);
   const missed = active.length === 0 ? sql`0` : sql`case ${sql.join(active.map((filter, i) => sql`when not ${own.get(filter)} then ${sql.raw(String(i + 1))}`), sql` `)} else 0 end`;
-  const tally = sql`count(*) filter (where missed = 0) as n0${sql.join(active.map((_, i) => sql.raw(`, count(*) filter (where missed = ${i + 1}) as n${i + 1}`)))}`;
-  const extra = active.length === 0 ? sql`0` : sql`case facet ${sql.join(active.map((filter, i) => sql.raw(`when '${filter}' then n${i + 1}`)), sql` `)} else 0 end`;
-  const names = Object.keys(plain);
-  const columns = sql.join([
-    ...Object.entries(plain).map(([filter, column]) => sql`${column} as ${name(filter)}`), ...Object.entries(listed).map(([filter, column]) => sql`${column} as ${name(filter)}`),
-  ], sql`, `);
-  const chosen = [...Object.entries(ask.filter)].flatMap(([, value]) => (Array.isArray(value) ? value.filter((one): one is string => typeof one === 'string') : []));
-  const { rows: found } = await db.execute<{ facet: CountedFilter; value: string; n: number }>(sql`
-    with found as materialized (
-      select ${columns}, ${missed} as missed from ${rows} left join ${families} as families on families.spelling = lower(${rows.technique})
-      where ${and(visibleRows(ask.visible), ...base, active.length > 0 ? sql`${fails} <= 1` : undefined)}
-    ), tallied as (
-      select case ${sql.join(names.map((filter) => sql`when grouping(${name(filter)}) = 0 then ${quoted(filter)}`), sql` `)} end as facet,
-        coalesce(${sql.join(names.map((filter) => sql`${name(filter)} collate "C"`), sql`, `)}) as value, ${tally}
-      from found group by grouping sets (${sql.join(names.map((filter) => sql`(${name(filter)})`), sql`, `)})
-      ${sql.join(Object.keys(listed).map((filter) => sql`union all select ${quoted(filter)}, value collate "C", ${tally} from found cross join unnest(${name(filter)}) as value group by value`), sql` `)}
-      union all select 'promoter', case when cardinality(promoter) = 0 then 'none' else 'any' end, ${tally} from found group by 2
+  /** How many entries a group stands for in the counts of a filter. */
+  const entries = (filter: CountedFilter) => sql.raw(`sum(n) filter (where missed in (0, ${active.indexOf(filter) + 1}))`);
+  const all = Object.values(sets).flatMap((set) => Object.entries(set));
+  const branch = (filter: CountedFilter, set: string) => {
+    const from = sql`from gathered${lists.includes(filter) ? sql` cross join unnest(${name(filter)}) as one` : sql``}`;
+    const value = lists.includes(filter) ? sql`one` : sql`${name(filter)}::text`;
+    return sql`select ${quoted(filter)} as facet, ${value} collate "C" as value, ${entries(filter)} as n ${from} where part = ${quoted(set)} group by 2`;
+  };
+  const branches = [
+    ...Object.entries(sets).flatMap(([set, columns]) => Object.keys(columns).map((filter) => branch(filter as CountedFilter, set))),
+    sql`select 'promoter', case when cardinality(promoter) = 0 then 'none' else 'any' end, ${entries('promoter')} from gathered where part = 'dress' group by 2`,
+    sql`select 'methodFamily', families.family, ${entries('methodFamily')} from gathered join ${families} as families on families.spelling = lower(gathered.method) where part = 'method' group by 2`,
+  ];
+  const chosen = Object.values(ask.filter).flatMap((value) => (Array.isArray(value) ? value.filter((one): one is string => typeof one === 'string') : []));
+  const found = await inMemory<{ facet: CountedFilter; value: string; n: number }>(db, sql`
+    with gathered as materialized (
+      select case ${sql.join(Object.entries(sets).map(([set, columns]) => sql`when grouping(${name(Object.keys(columns)[0] ?? '')}) = 0 then ${quoted(set)}`), sql` `)} end as part,
+        ${sql.join(all.map(([filter]) => name(filter)), sql`, `)}, missed, count(*) as n
+      from (
+        select ${sql.join(all.map(([filter, column]) => sql`${column} as ${name(filter)}`), sql`, `)}, ${missed} as missed from ${rows}
+        where ${and(visibleRows(ask.visible), ...base, active.length > 1 ? sql`${fails} <= 1` : undefined)}
+      ) found
+      group by grouping sets (${sql.join(Object.values(sets).map((columns) => sql`(missed, ${sql.join(Object.keys(columns).map(name), sql`, `)})`), sql`, `)})
     ), placed as (
-      select facet, value, n, row_number() over (partition by facet order by n desc, value) as place from (select facet, value, n0 + ${extra} as n from tallied where value is not null) t where n > 0
+      select facet, value, n, row_number() over (partition by facet order by n desc, value) as place from (${sql.join(branches, sql` union all `)}) tallied where value is not null and n > 0
     )
     select facet, value, n::int from placed where place <= ${mostValues} or value = any(${sql.param(chosen)}::text[]) order by facet, n desc, value`);
   const counts = Object.fromEntries(countedFilters.map((filter) => [filter, []])) as unknown as Counts;
   for (const { facet, value, n } of found) counts[facet].push({ value, count: n, label: null });
   await Promise.all([labelSteps(db, counts.step), labelSources(db, counts), labelMethods(db, counts.method)]);
   return counts;
+}
+
+/**
+ * Runs a statement that gathers many rows into few groups. The planner cannot know how few, and would sort on disk what needs a megabyte:
+ * a high limit, held to this transaction, lets it hash.
+ */
+async function inMemory<Row extends Record<string, unknown>>(db: DbOrTx, statement: SQL): Promise<Row[]> {
+  return db.transaction(async (tx) => {
+    await tx.execute(sql`select set_config('work_mem', '128MB', true), set_config('jit', 'off', true)`);
+    return (await tx.execute<Row>(statement)).rows;
+  });
 }
 
 /** One equation of each key, forward where there is one. */

@@ -31,7 +31,7 @@ function ownColumns(sort: SortKey, temperatureK: number): SortColumn[] {
     case 'preExponential': return [word(sql`${rows.factorUnit}`, false, true), number(sql`${rows.lnFactor}`, down)];
     case 'k': return [word(sql`case when ${lnKAt(temperatureK)} is not null then ${rows.rateUnit} end`, false, true), number(lnKAt(temperatureK), down)];
     case 'uncertainty': return [number(sql`${rows.uEnergyKJPerMol}`, down)];
-    case 'year': return [number(sql`${rows.year}::float8`, down)];
+    case 'year': return [{ expression: sql`${rows.year}`, descending: down, cast: 'int', nullable: true }];
     case 'metal': return [word(sql`${rows.formula}`, down), surface()];
     case 'surface': return [surface(down)];
     case 'source': return [word(sql`${rows.sourceLabel}`, down)];

@@ -1,0 +1,3 @@
+CREATE INDEX "search_rows_year_idx" ON "search_rows" USING btree ("year" DESC NULLS LAST,"accession") WHERE "search_rows"."listed";--> statement-breakpoint
+CREATE INDEX "search_rows_formula_idx" ON "search_rows" USING btree ("formula") WHERE "search_rows"."listed";--> statement-breakpoint
+CREATE INDEX "search_rows_technique_idx" ON "search_rows" USING btree ("technique") WHERE "search_rows"."listed";
