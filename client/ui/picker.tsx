@@ -83,7 +83,7 @@ export function Picker<Value extends string>(props: PickerProps<Value>) {
         {summary}
       </button>
       {open && (
-        <div className="floating floating-panel picker-panel left-0" ref={panel}>
+        <div className="floating floating-panel picker-panel left-0" ref={panel} tabIndex={-1}>
           <PickerList {...props} multiple={multiple} id={id} onDone={hide} />
         </div>
       )}

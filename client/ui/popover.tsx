@@ -95,7 +95,8 @@ export function Popover({ label, ariaLabel, buttonClassName = 'button', panelCla
         {label}
       </button>
       {open && (
-        <div id={id} ref={panel} className={`floating floating-panel ${align === 'end' ? 'right-0' : 'left-0'} ${panelClassName}`}>
+        // It can hold the focus, so that a press on its words does not take the focus elsewhere and close it.
+        <div id={id} ref={panel} tabIndex={-1} className={`floating floating-panel ${align === 'end' ? 'right-0' : 'left-0'} ${panelClassName}`}>
           {children(() => hide())}
         </div>
       )}

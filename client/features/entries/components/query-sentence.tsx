@@ -24,6 +24,9 @@ interface QuerySentenceProps {
   onChange: (change: Partial<EntryFilter>) => void;
 }
 
+/** Keeps a comma or full stop on the line of the button before it. */
+const joined = '\u2060';
+
 type Addition = ListFilter | NameFilter | 'year' | 'value';
 
 /** The filters as a sentence whose emphasised parts are pickers. */
@@ -88,10 +91,9 @@ export function QuerySentence({ filter, counts, vocabulary, collections, onChang
       {mainParts.metal.before}{' '}
       <ChoicePicker title={mainParts.metal.title} unset={mainParts.metal.unset} choices={metals} recent="metal" placeholder="symbol, name, group or alloy" onChange={onChange} />{' '}
       {mainParts.method.before}{' '}
-      <ChoicePicker title={mainParts.method.title} unset={mainParts.method.unset} choices={methods} recent="method" placeholder="technique, family, measured …" onChange={onChange} />
-      , valid {validWords(filter).before} <ValidPicker filter={filter} temperatureK={temperatureK} onChange={onChange} />
-      {further.map(({ key, words }) => <Fragment key={key}>, <span data-part={key}>{words}</span></Fragment>)}
-      {'. '}
+      <ChoicePicker title={mainParts.method.title} unset={mainParts.method.unset} choices={methods} recent="method" placeholder="technique, family, measured …" onChange={onChange} />{joined}, valid {validWords(filter).before} <ValidPicker filter={filter} temperatureK={temperatureK} onChange={onChange} />
+      {further.map(({ key, words }) => <Fragment key={key}>{joined}, <span data-part={key}>{words}</span></Fragment>)}
+      {`${joined}. `}
       {more.length > 0 && (
         <Picker
           label="Add to the question"

@@ -79,7 +79,7 @@ export function ColumnChoice({ hidden, density, onChange, onDensity }: ColumnCho
             legend="Rows" name="density" look="segments" value={density} onChange={onDensity}
             choices={[{ value: 'comfortable', label: 'comfortable' }, { value: 'dense', label: 'dense' }]}
           />
-          <fieldset className="pt-3">
+          <fieldset className="pt-4">
             <legend className="field-label pb-1">Columns shown</legend>
             {columnNames.filter((name) => !fixedColumns.includes(name)).map((name) => (
               <Checkbox

@@ -44,7 +44,7 @@ export function SentencePanel({ label, words, unset, onOpen, onSet, onClear, chi
         {said}
       </button>
       {open && (
-        <div className="floating floating-panel picker-panel left-0 p-4" ref={panel} role="dialog" aria-label={label}>
+        <div className="floating floating-panel picker-panel left-0 p-4" ref={panel} tabIndex={-1} role="dialog" aria-label={label}>
           <form
             className="flex flex-col gap-3"
             noValidate

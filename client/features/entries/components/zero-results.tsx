@@ -31,7 +31,7 @@ export function ZeroResults({ filter, emptiedBy, nearMisses, withoutStatedRange,
     <EmptyState title="No accepted entry answers this question" actions={<Button onClick={onClear}>Take all filters away</Button>}>
       {helps.length > 0 ? (
         <>
-          <p>Each of these filters empties the list together with the others:</p>
+          <p>{inForce.length === 1 ? 'This filter empties the list:' : 'Each of these filters empties the list together with the others:'}</p>
           <ul className="pt-2 text-ink">
             {helps.map(({ filter: name, totalWithout }) => {
               const names = namesOf(name).filter((one) => inForce.includes(one));
