@@ -67,7 +67,7 @@ export async function countValues(db: DbOrTx, ask: Ask): Promise<Counts> {
     sql`select 'methodFamily', families.family, ${entries('methodFamily')} from gathered join ${families} as families on families.spelling = lower(gathered.method) where part = 'method' group by 2`,
   ];
   const chosen = Object.values(ask.filter).flatMap((value) => (Array.isArray(value) ? value.filter((one): one is string => typeof one === 'string') : []));
-  const found = await inMemory<{ facet: CountedFilter; value: string; n: number }>(db, sql`
+  const found = await inMemory(db, sql`
     with gathered as materialized (
       select case ${sql.join(Object.entries(sets).map(([set, columns]) => sql`when grouping(${name(Object.keys(columns)[0] ?? '')}) = 0 then ${quoted(set)}`), sql` `)} end as part,
         ${sql.join(all.map(([filter]) => name(filter)), sql`, `)}, missed, count(*) as n
@@ -90,10 +90,10 @@ export async function countValues(db: DbOrTx, ask: Ask): Promise<Counts> {
  * Runs a statement that gathers many rows into few groups. The planner cannot know how few, and would sort on disk what needs a megabyte:
  * a high limit, held to this transaction, lets it hash.
  */
-async function inMemory<Row extends Record<string, unknown>>(db: DbOrTx, statement: SQL): Promise<Row[]> {
+async function inMemory(db: DbOrTx, statement: SQL): Promise<{ facet: CountedFilter; value: string; n: number }[]> {
   return db.transaction(async (tx) => {
     await tx.execute(sql`select set_config('work_mem', '128MB', true), set_config('jit', 'off', true)`);
-    return (await tx.execute<Row>(statement)).rows;
+    return (await tx.execute<{ facet: CountedFilter; value: string; n: number }>(statement)).rows;
   });
 }
 
