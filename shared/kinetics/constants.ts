@@ -7,7 +7,7 @@
 export const CONSTANTS_VERSION = 'CODATA 2022';
 
 /** Version of the computing core, written beside every stored conversion. */
-export const CORE_VERSION = '1.0.0';
+export const CORE_VERSION = '1.1.0';
 
 /** Avogadro constant [mol-1], exact. */
 export const N_A = 6.02214076e23;

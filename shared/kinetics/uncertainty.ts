@@ -1,5 +1,5 @@
 import { operationLine, references, type DerivationLine } from './derivation.ts';
-import { KineticsError, requireNonNegative, requirePositive } from './kinetics-error.ts';
+import { KineticsError, requireFinite, requireNonNegative, requirePositive } from './kinetics-error.ts';
 import { studentCoverageFactor } from './student-t.ts';
 
 /** What a printed uncertainty stands for; `none` where nothing was printed, `unknown` for a bare ±. */
@@ -97,7 +97,8 @@ function requireFactor(factor: number): void {
 export type StatedUncertainty =
   | { kind: 'expanded'; value: number; coverageFactor: number }
   | { kind: 'confidence'; halfWidth: number; level: number; degreesOfFreedom?: number | null }
-  | { kind: 'rectangular' | 'triangular'; halfWidth: number }
+  | { kind: 'rectangular' | 'triangular' | 'arcsine'; halfWidth: number }
+  | { kind: 'trapezoidal'; halfWidth: number; topFraction: number }
   | { kind: 'factor'; factor: number; level: number };
 
 /** A standard uncertainty with the way it was reached. */
@@ -126,6 +127,13 @@ function divisionOf(given: StatedUncertainty): { figure: number; divisor: number
       return { figure: requireNonNegative('halfWidth', given.halfWidth, 'half-width'), divisor: Math.sqrt(3), operation: 'Half-width of a rectangular distribution divided by √3', assumption: 'every value between the limits is equally likely', reference: `${references.gum} 4.3.7` };
     case 'triangular':
       return { figure: requireNonNegative('halfWidth', given.halfWidth, 'half-width'), divisor: Math.sqrt(6), operation: 'Half-width of a triangular distribution divided by √6', assumption: 'symmetric triangle between the limits', reference: `${references.gum} 4.3.9` };
+    case 'arcsine':
+      return { figure: requireNonNegative('halfWidth', given.halfWidth, 'half-width'), divisor: Math.SQRT2, operation: 'Half-width of an arcsine distribution divided by √2', assumption: 'a sinusoid between the limits, as of a cycling temperature', reference: `${references.gum} 4.3.5, H.1.3.4` };
+    case 'trapezoidal': {
+      const top = requireNonNegative('topFraction', given.topFraction, 'top as a fraction of the base');
+      if (top > 1) throw new KineticsError('topFraction', `the top of a trapezoid is at most as wide as its base: must not be above 1, got ${top}`, 'out-of-range', top);
+      return { figure: requireNonNegative('halfWidth', given.halfWidth, 'half-width'), divisor: Math.sqrt(6 / (1 + top * top)), operation: 'Half-width of a trapezoidal distribution divided by √(6/(1 + β²))', assumption: `symmetric trapezoid between the limits, its top ${top} of its base`, reference: `${references.gum} 4.3.9` };
+    }
     case 'factor': {
       requireFactor(given.factor);
       return { figure: Math.log(given.factor), divisor: studentCoverageFactor(given.level), operation: 'Logarithm of the factor divided by the normal quantile', assumption: `the factor encloses x/f to x f with the two-sided level ${given.level}; ln x is normal`, reference: `${references.gum} 4.3.4 on the logarithm` };
@@ -136,9 +144,10 @@ function divisionOf(given: StatedUncertainty): { figure: number; divisor: number
 /**
  * Standard uncertainty of a reported uncertainty whose kind is stated, with its derivation.
  *
- * Expanded: U/k. Confidence: half-width/t (normal without degrees of freedom). Rectangular: /√3, triangular: /√6.
- * Factor f: u(ln x) = ln f/z. Source: JCGM 100:2008 (GUM) 4.3.3, 4.3.4, 4.3.7, 4.3.9, annex G.
- * @throws KineticsError on a negative half-width, a coverage factor or degrees of freedom not above 0, a level outside 0 to 1, a factor below 1.
+ * Expanded: U/k. Confidence: half-width/t (normal without degrees of freedom). Rectangular: /√3, triangular: /√6, arcsine: /√2,
+ * trapezoidal with top β of the base: /√(6/(1 + β²)). Factor f: u(ln x) = ln f/z.
+ * Source: JCGM 100:2008 (GUM) 4.3.3, 4.3.4, 4.3.7, 4.3.9, H.1.3.4, annex G.
+ * @throws KineticsError on a negative half-width, a coverage factor or degrees of freedom not above 0, a level or top outside 0 to 1, a factor below 1.
  * @example evaluateUncertainty({ kind: 'expanded', value: 3, coverageFactor: 2 }).standardUncertainty // 1.5
  */
 export function evaluateUncertainty(given: StatedUncertainty): EvaluatedUncertainty {
@@ -150,4 +159,19 @@ export function evaluateUncertainty(given: StatedUncertainty): EvaluatedUncertai
     scale: given.kind === 'factor' ? 'ln' : 'linear',
     derivation: [operationLine(operation, { value: figure }, { value: standardUncertainty }, reference, { constant: `divisor ${divisor}`, assumption })],
   };
+}
+
+/**
+ * Standard uncertainty of a difference of two values that may be correlated, such as a reaction energy from the barriers there and back.
+ *
+ * u² = u1² + u2² - 2 r u1 u2. The correlation must be said: it is never taken as 0. Source: JCGM 100:2008 (GUM) 5.2.2.
+ * @throws KineticsError on a negative uncertainty or a correlation outside -1 to 1.
+ * @example differenceUncertainty(1.5, 2, 0) // 2.5
+ */
+export function differenceUncertainty(u1: number, u2: number, correlation: number): number {
+  requireNonNegative('u1', u1);
+  requireNonNegative('u2', u2);
+  requireFinite('correlation', correlation);
+  if (Math.abs(correlation) > 1) throw new KineticsError('correlation', `correlation must be between -1 and 1, got ${correlation}`, 'out-of-range', correlation);
+  return Math.sqrt(Math.max(0, u1 * u1 + u2 * u2 - 2 * correlation * u1 * u2));
 }

@@ -2,7 +2,7 @@ import { rateParameters } from '#shared/assessment/rate-at-temperature.ts';
 import { h, k_B } from '#shared/kinetics/constants.ts';
 import { fitLine } from '#shared/kinetics/least-squares.ts';
 import { convertQuantity } from '#shared/kinetics/quantity.ts';
-import { standardUncertaintyOf } from '#shared/kinetics/uncertainty.ts';
+import { differenceUncertainty, standardUncertaintyOf } from '#shared/kinetics/uncertainty.ts';
 import { measures, run, type Kind } from './reference-measure.ts';
 import { rateUnitInput, type ReferenceCase } from './reference.ts';
 
@@ -128,8 +128,8 @@ export const kinds: Record<string, Record<string, Kind>> = {
     digit_resolution: uncertainty((item) => ({ kind: 'rectangular', halfWidth: number(item, 'resolution') / 2 })),
     factor_uncertainty: uncertainty((item) => ({ kind: 'factor', factor: number(item, 'factor'), level: item.input.coverage === 'one_sigma' ? 0.6826894921370859 : 0.95 }), 'u_ln'),
     sd_to_standard_error: (item) => measures([['u', standardUncertaintyOf(number(item, 's'), { kind: 'spread', degreesOfFreedom: number(item, 'n') - 1 }), item.expected.u]]),
-    arcsine_half_width: { notOffered: 'no source in this field prints an arcsine distribution' },
-    trapezoidal_half_width: { notOffered: 'no source in this field prints a trapezoidal distribution' },
-    difference_of_barriers: { notOffered: 'barriers of one source are not independent, and their correlation is not printed' },
+    arcsine_half_width: uncertainty((item) => ({ kind: 'arcsine', halfWidth: number(item, 'a') })),
+    trapezoidal_half_width: uncertainty((item) => ({ kind: 'trapezoidal', halfWidth: number(item, 'a'), topFraction: number(item, 'beta') })),
+    difference_of_barriers: (item) => measures([['u', differenceUncertainty(number(item, 'u_Ef'), number(item, 'u_Er'), number(item, 'r')), item.expected.u_dH]]),
   },
 };

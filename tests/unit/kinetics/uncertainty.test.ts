@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { normalCoverageFactor, normalUpperTail } from '#shared/kinetics/normal.ts';
 import { studentCoverageFactor, studentTwoSidedTail } from '#shared/kinetics/student-t.ts';
-import { factorUncertainty, standardUncertaintyOf } from '#shared/kinetics/uncertainty.ts';
+import { differenceUncertainty, evaluateUncertainty, factorUncertainty, standardUncertaintyOf } from '#shared/kinetics/uncertainty.ts';
 import { expectClose, referenceCases } from './reference.ts';
 
 const cases = referenceCases('uncertainty');
@@ -38,7 +38,14 @@ describe('standard uncertainty', () => {
     expect(standardUncertaintyOf(1, { kind: 'unknown' })).toBeNull();
     expect(standardUncertaintyOf(1, { kind: 'none' })).toBeNull();
   });
+  // GUM 4.3.9: a trapezoid without a top is the triangle, one with the whole base as its top the rectangle.
+  it.each([[0, 'triangular'], [1, 'rectangular']] as const)('a trapezoid with a top of %d is %s', (topFraction, kind) => {
+    expectClose(evaluateUncertainty({ kind: 'trapezoidal', halfWidth: 2.7, topFraction }).standardUncertainty, evaluateUncertainty({ kind, halfWidth: 2.7 }).standardUncertainty, 1e-15);
+  });
   it('refuses nonsense', () => {
+    expect(() => evaluateUncertainty({ kind: 'trapezoidal', halfWidth: 1, topFraction: 1.1 })).toThrow('must not be above 1, got 1.1');
+    expect(() => differenceUncertainty(1, 1, 1.2)).toThrow('correlation must be between -1 and 1, got 1.2');
+    expect(() => differenceUncertainty(-1, 1, 0)).toThrow('u1 must not be below 0, got -1');
     expect(() => standardUncertaintyOf(-1, { kind: 'standard' })).toThrow('uncertainty must not be below 0, got -1');
     expect(() => factorUncertainty(0.5, 0.95)).toThrow('factor must be 1 or more');
     expect(() => normalCoverageFactor(1)).toThrow('level must be between 0 and 1');
