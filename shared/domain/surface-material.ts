@@ -90,7 +90,7 @@ function readLayers(text: string, field: string, said: Arrangement | null): Laye
  *
  * `Ni/Pt` alone can mean two things and is refused with both.
  * @throws SurfaceError naming the field
- * @example readMaterial('Pt/Ni/Pt(111)', 'formula') // bulk Pt, guest Ni, subsurface, facet (111)
+ * @example readMaterial('Pt/Ni/Pt(111)', 'formula').guest // 'Ni'
  */
 export function readMaterial(typed: string, field: 'metal' | 'formula'): Material {
   const plain = plainFormula(typed);

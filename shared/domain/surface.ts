@@ -4,7 +4,7 @@ import { readComposition, type Composition } from './surface-composition.ts';
 import { SurfaceError } from './surface-error.ts';
 import { describeFacet, requireSite, steppedNames, type Facet } from './surface-facet.ts';
 import { materialName, readMaterial, type Material } from './surface-material.ts';
-import { metalStructures } from './surface-metals.ts';
+import { isMetal, metalStructures } from './surface-metals.ts';
 import { supportName } from './surface-support.ts';
 
 export { metalStructures, SurfaceError };
@@ -63,6 +63,8 @@ function materialOf(input: SurfaceInput): Material {
   const named = { ...material, guest: guest?.formula ?? material.guest, arrangement: input.arrangement ?? material.arrangement, monolayers: input.guestMonolayers ?? material.monolayers };
   if (named.guest && !named.arrangement) throw new SurfaceError('arrangement', `Say where ${named.guest} is: on ${material.bulk.formula} (overlayer), under its first layer (subsurface), in it (surface alloy) or as single atoms.`);
   if (!named.guest && named.arrangement && named.arrangement !== 'single-atom') throw new SurfaceError('guest', `Name the metal that makes the ${arrangementWords[named.arrangement]}.`);
+  const compound = [named.guest ?? '', material.bulk.formula].find((formula) => named.guest !== null && !(readComposition(formula) as Composition).elements.every(isMetal));
+  if (compound !== undefined) throw new SurfaceError('guest', `${compound} is no metal: a near-surface or single-atom alloy has a metal in or on a metal. Name what carries particles under support.`);
   if (named.guest === material.bulk.formula) throw new SurfaceError('guest', `${named.guest} on, in or under ${named.guest} is ${named.guest}: leave the second metal out.`);
   return named;
 }

@@ -151,6 +151,7 @@ describe('what is no surface', () => {
     [{ metal: 'Pt', arrangement: 'overlayer' }, 'guest', /Name the metal that makes the overlayer/],
     [{ metal: 'Pt', guest: 'Pt', arrangement: 'overlayer' }, 'guest', /leave the second metal out/],
     [{ metal: 'Pt', guest: 'Q', arrangement: 'overlayer' }, 'guest', /Q: not a metal/],
+    [{ formula: 'MgO', guest: 'Ni', arrangement: 'single-atom' }, 'guest', /MgO is no metal.*under support/],
     [{ formula: 'Q@Pt' }, 'formula', /Q: not a metal/],
     [{ formula: 'Pt@Q' }, 'formula', /Q: not a metal/],
     [{ metal: 'Ru/MgO', support: 'Al2O3' }, 'support', /names MgO as its support, this field Al2O3/],
