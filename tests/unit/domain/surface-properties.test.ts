@@ -53,7 +53,7 @@ describe('surfaces', () => {
     const metals = fc.uniqueArray(fc.constantFrom('Ni', 'Fe', 'Pt', 'Ru', 'Co', 'Sn'), { minLength: 2, maxLength: 4 });
     fc.assert(
       fc.property(metals, fc.array(fc.integer({ min: 1, max: 9 }), { minLength: 4, maxLength: 4 }), fc.constantFrom(1, 2, 10, 0.1, 0.25), fc.boolean(), (names, amounts, scale, turn) => {
-        const write = (list: readonly string[], times: number) => list.map((name) => `${name}${Number(((amounts[names.indexOf(name)] as number) * times).toFixed(4))}`).join('');
+        const write = (list: typeof names, times: number) => list.map((name) => `${name}${Number(((amounts[names.indexOf(name)] as number) * times).toFixed(4))}`).join('');
         const plain = names.length === 2 && amounts[0] === 1 ? `${names[1]}${amounts[1]}${names[0]}1` : write(names, 1);
         expect(describeSurface({ formula: write(turn ? [...names].reverse() : names, scale) }).key).toBe(describeSurface({ formula: plain }).key);
       }),
