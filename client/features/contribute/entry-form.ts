@@ -10,6 +10,7 @@ export const conditionNames = [
   'siteDensitySource', 'functional', 'supercell', 'endStateReference', 'isotopes', 'kieDirection', 'text',
 ] as const;
 export type ConditionName = (typeof conditionNames)[number];
+const surfaceNames = ['metal', 'formula', 'structure', 'facet', 'site', 'sampleType', 'support', 'particleSizeNm'];
 
 export interface QuantityForm {
   symbol: QuantitySymbol;
@@ -47,6 +48,8 @@ export interface EntryForm {
   conditions: Record<ConditionName, string>;
   validRange: { min: string; max: string };
   note: string;
+  /** What the entry says that this form has no field for, so that saving does not lose it. */
+  kept: { surface: Record<string, unknown>; conditions: Record<string, unknown> };
 }
 
 /** An empty row for a quantity. */
@@ -72,10 +75,13 @@ export function emptyForm(): EntryForm {
     conditions: Object.fromEntries(conditionNames.map((name) => [name, ''])) as Record<ConditionName, string>,
     validRange: { min: '', max: '' },
     note: '',
+    kept: { surface: {}, conditions: {} },
   };
 }
 
 const text = (value: string | number | null | undefined): string => (value === undefined || value === null ? '' : String(value));
+
+const without = (members: object, names: readonly string[]) => Object.fromEntries(Object.entries(members).filter(([name]) => !names.includes(name)));
 
 /** The form of what was typed before, as the server kept it. */
 export function formOf(input: EntryInput): EntryForm {
@@ -105,6 +111,7 @@ export function formOf(input: EntryInput): EntryForm {
     conditions: Object.fromEntries(conditionNames.map((name) => [name, text(conditions[name])])) as Record<ConditionName, string>,
     validRange: { min: text(validRange.min), max: text(validRange.max) },
     note: text(input.note),
+    kept: { surface: without(surface, surfaceNames), conditions: without(conditions, conditionNames) },
   };
 }
 

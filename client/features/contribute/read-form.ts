@@ -65,6 +65,7 @@ export function readForm(form: EntryForm): ReadForm {
     provenance: form.provenance || undefined,
     step: part({ equation: word(form.step.equation), sitesAdded: (form.step.balancedAs && form.step.balancedAs === form.step.equation) || undefined }),
     surface: part({
+      ...form.kept.surface,
       metal: form.surface.of === 'metal' ? word(form.surface.metal) : undefined,
       formula: form.surface.of === 'alloy' ? word(form.surface.formula) : undefined,
       structure: form.surface.structure || undefined,
@@ -84,6 +85,7 @@ export function readForm(form: EntryForm): ReadForm {
       : form.rateOf.counts || undefined,
     kineticOrders: orders.length > 0 ? Object.fromEntries(orders) : undefined,
     conditions: part({
+      ...form.kept.conditions,
       coverage: word(typed.coverage), coverageDefinition: word(typed.coverageDefinition), pressures: word(typed.pressures),
       temperatureK: number(typed.temperatureK, 'conditions.temperatureK', kelvin),
       siteDensityPerM2: number(typed.siteDensityPerM2, 'conditions.siteDensityPerM2', positive),

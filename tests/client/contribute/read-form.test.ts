@@ -72,6 +72,19 @@ describe('the form and the input', () => {
   });
 });
 
+describe('what the form has no field for', () => {
+  it('stays in the entry when the rest is edited', () => {
+    const input: EntryInput = { ...full, surface: { metal: 'Pt', guest: 'Ni', arrangement: 'subsurface', facet: '111' }, conditions: { perPair: true, nearestNeighbours: 6 } };
+    const form = formOf(input);
+    form.surface.facet = '100';
+    form.conditions.text = 'at low coverage';
+    const { input: saved, faults } = readForm(form);
+    expect(faults).toEqual([]);
+    expect(saved.surface).toEqual({ metal: 'Pt', guest: 'Ni', arrangement: 'subsurface', facet: '100' });
+    expect(saved.conditions).toEqual({ perPair: true, nearestNeighbours: 6, text: 'at low coverage' });
+  });
+});
+
 describe('a draft is made by something worth keeping', () => {
   it.each<[EntryInput, boolean]>([
     [{}, false], [{ kind: 'kie' }, false], [{ kind: 'kie', scope: 'elementary', provenance: 'measured' }, false], [{ locator: 'p. 3' }, true], [{ source: { doi: '10.5555/x' } }, true],

@@ -8,6 +8,7 @@ import { useEntryField } from '../entry-field.ts';
 import { conditionNames, type ConditionName, type EntryForm } from '../entry-form.ts';
 import { FieldRow, FormSection } from './form-section.tsx';
 import { RateCounts } from './rate-counts.tsx';
+import { KeptNote } from './kept-note.tsx';
 
 interface ConditionField {
   label: string;
@@ -70,7 +71,8 @@ export function ConditionsSection({ preview }: { preview: Preview | undefined })
           <InputField {...field('validRange.min')} label="Valid from, K" inputMode="decimal" hint="The range of temperatures the source supports" />
           <InputField {...field('validRange.max')} label="Valid to, K" inputMode="decimal" />
         </FieldRow>
-      </FormSection>
+        <KeptNote part="conditions" />
+    </FormSection>
     </>
   );
 }

@@ -8,6 +8,7 @@ import { vocabularyOptions } from '../api.ts';
 import { fieldId, useEntryField } from '../entry-field.ts';
 import type { EntryForm } from '../entry-form.ts';
 import { FieldRow, FormSection } from './form-section.tsx';
+import { KeptNote } from './kept-note.tsx';
 
 function structureOf(term: Term | undefined): Structure | null {
   return structures.find((one) => one === term?.data.structure) ?? null;
@@ -83,6 +84,7 @@ export function SurfaceSection() {
           <InputField {...field('surface.particleSizeNm')} label="Size, nm" inputMode="decimal" hint="Of the particles, or the thickness of the film" />
         )}
       </FieldRow>
+      <KeptNote part="surface" />
     </FormSection>
   );
 }
