@@ -78,9 +78,10 @@ function CollectedEntries({ collection }: { collection: CollectionDetail }) {
   const [taken, setTaken] = useState<readonly string[]>([]);
   const chosen = useChosen();
   const { add, remove } = useCollectionChanges();
-  const search = useInfiniteQuery(entrySearchOptions({ collection: [id] }, sort, temperatureK));
+  const search = useInfiniteQuery(entrySearchOptions({ collection: [id] }, sort, 'step', temperatureK));
   const page = search.data?.pages[0];
   const shown = search.data?.pages.flatMap(({ items }) => items) ?? [];
+  const heads = search.data?.pages.flatMap(({ groups }) => groups ?? []) ?? [];
   const held = useMemo(() => new Set(items.map(({ accession }) => accession)), [items]);
   // Rows chosen elsewhere stay chosen there; here only those of this collection count.
   const accessions = [...chosen.keys()].filter((accession) => held.has(accession));
@@ -108,7 +109,7 @@ function CollectedEntries({ collection }: { collection: CollectionDetail }) {
           : (
             <>
               <ResultTable
-                entries={shown} kinds={undefined} grouping="step" sort={sort} hidden={noColumns} activeId={activeId} stale={search.isPlaceholderData} onActive={setActiveId} onSort={setSort}
+                entries={shown} heads={heads} searchedWords={false} dense={false} kinds={undefined} grouping="step" sort={sort} hidden={noColumns} activeId={activeId} stale={search.isPlaceholderData} onActive={setActiveId} onSort={setSort}
               />
               <LoadMore shown={shown.length} total={page.total} totalIsExact={page.totalIsExact} hasMore={search.hasNextPage} busy={search.isFetchingNextPage} onMore={() => void search.fetchNextPage()} what="entries" />
             </>

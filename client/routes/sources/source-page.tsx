@@ -67,8 +67,9 @@ function EntriesOf({ source }: { source: SourceDetail }) {
   const [sort, setSort] = useState<SortKey>('step');
   const [activeId, setActiveId] = useState<string | null>(null);
   const filter = useMemo(() => ({ source: [source.doi ?? source.id] }), [source]);
-  const search = useInfiniteQuery(entrySearchOptions(filter, sort, temperatureK));
+  const search = useInfiniteQuery(entrySearchOptions(filter, sort, 'step', temperatureK));
   const entries = useMemo(() => search.data?.pages.flatMap((page) => page.items) ?? [], [search.data]);
+  const heads = useMemo(() => search.data?.pages.flatMap((page) => page.groups ?? []) ?? [], [search.data]);
   const page = search.data?.pages[0];
   return (
     <section>
@@ -81,7 +82,10 @@ function EntriesOf({ source }: { source: SourceDetail }) {
           : page.total === 0 ? <p className="py-4 text-second">{source.status === 'retracted' ? 'None: the source is retracted.' : 'None has been accepted yet.'}</p>
             : (
               <>
-                <ResultTable entries={entries} kinds={undefined} grouping="step" sort={sort} hidden={hidden} activeId={activeId} stale={search.isPlaceholderData} onActive={setActiveId} onSort={setSort} />
+                <ResultTable
+                  entries={entries} heads={heads} searchedWords={false} dense={false} kinds={undefined} grouping="step" sort={sort} hidden={hidden} activeId={activeId}
+                  stale={search.isPlaceholderData} onActive={setActiveId} onSort={setSort}
+                />
                 <LoadMore shown={entries.length} total={page.total} totalIsExact={page.totalIsExact} hasMore={search.hasNextPage} busy={search.isFetchingNextPage} onMore={() => void search.fetchNextPage()} />
               </>
             )}
