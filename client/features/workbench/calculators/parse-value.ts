@@ -30,7 +30,7 @@ export const parseValueSheet = sheet({
       main: [{ label: 'Read as', value, low, high, bound, u: standardUncertainty, uScale: scale, unit: unit ?? '', digits: Math.max(1, significantDigits ?? 4) }],
       facts: [
         { label: 'What it is', text: boundWords[result.bound] ?? result.bound },
-        { label: 'Reported uncertainty', text: `${reported}${scale === 'ln' && reported !== 'none' ? ' of the natural logarithm' : ''}` },
+        { label: 'Reported uncertainty', ...(reportedUncertainty === null ? { text: reported } : { value: reportedUncertainty, unit: scale === 'ln' ? '' : unit ?? '', digits: 2 }), note: scale === 'ln' && reported !== 'none' ? 'of the natural logarithm' : undefined },
         ...(reported === 'none' ? [] : [{ label: 'Its kind', text: kind ? uncertaintyKindWords[kind] : result.uncertaintyKind }]),
         { label: 'Standard uncertainty', ...(standardUncertainty === null ? { text: 'none can be drawn from the print' } : { value: standardUncertainty, unit: scale === 'ln' ? '' : unit ?? '', digits: 2, note: scale === 'ln' ? 'of the natural logarithm' : undefined }) },
         { label: 'Significant digits', text: String(significantDigits ?? 'not known') },

@@ -83,7 +83,7 @@ export function CalculatorPage({ sheet, mayContribute }: CalculatorPageProps) {
           </div>
           <MethodPanel sheet={sheet} />
         </div>
-        {!wide && <div className="section-line"><h2 className="pb-2 no-print">Other calculators</h2><CalculatorNav /></div>}
+        {!wide && <div className="section-line no-print"><h2 className="pb-2">Other calculators</h2><CalculatorNav /></div>}
       </div>
     </>
   );

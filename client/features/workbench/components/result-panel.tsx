@@ -9,7 +9,9 @@ import { SillLine } from '#client/ui/sill-line.tsx';
 import { Sign } from '#client/ui/signs.tsx';
 import { Tag } from '#client/ui/tag.tsx';
 import { fieldName, type Answer } from '../answer.ts';
+import type { Fault } from '../read-typed.ts';
 import type { Outcome, Sheet } from '../sheet.ts';
+import { paramOf } from '../typed.ts';
 import { addressOf } from '../onward.ts';
 import { FigureName, FigureView } from './figure-view.tsx';
 
@@ -77,6 +79,12 @@ function MainFigures({ outcome }: { outcome: Outcome }) {
   );
 }
 
+/** The field of a fault in words, before its message; a table with its row. */
+function placeOf(sheet: Sheet, fault: Fault): string {
+  const field = sheet.fields.find((one) => paramOf(one) === fault.param);
+  return field ? `${fieldName(field)}${fault.cell ? `, row ${fault.cell.row + 1}` : ''}: ` : '';
+}
+
 function NoResult({ sheet, answer, onType }: { sheet: Sheet; answer: Exclude<Answer, { state: 'result' }>; onType: (param: string, text: string) => void }) {
   if (answer.state === 'empty') return <div className="no-result"><SillLine shape="flat" /><p>{sheet.empty}</p></div>;
   if (answer.state === 'missing') {
@@ -92,7 +100,7 @@ function NoResult({ sheet, answer, onType }: { sheet: Sheet; answer: Exclude<Ans
   const { suggestion } = answer;
   return (
     <Notice kind="refusal" title="No result.">
-      {answer.faults.map((fault) => <p key={fault.message}>{fault.message}</p>)}
+      {answer.faults.map((fault, index) => <p key={index}>{placeOf(sheet, fault)}{fault.message}</p>)}
       {suggestion && <p className="pt-2"><TextButton onClick={() => onType('equation', suggestion)}>{`Write ${suggestion}`}</TextButton></p>}
     </Notice>
   );
