@@ -79,8 +79,8 @@ export interface SummaryFigures {
   median: number | null;
   low: number | null;
   high: number | null;
-  /** How many kinds of energy there are that must not be mixed. */
-  unlike: number;
+  /** Whether there are energies among them that must not be mixed. */
+  unlike: boolean;
   /** Energies that can be drawn, bounds and ranges among them. */
   drawn: number;
 }

@@ -8,7 +8,8 @@ import type { Ask, GroupName, SummaryFigures, SummaryPoint } from './search-engi
 
 const exact = sql`filter (where ${rows.energyBound} = '=' and ${rows.energyKJPerMol} is not null)`;
 const some = sql`filter (where ${rows.energyKJPerMol} is not null)`;
-const count = (column: SQL, only: SQL = some) => sql<number>`(count(distinct ${column}) ${only})::int`;
+/** Whether a column takes more than one value; the ends tell it without sorting all. */
+const differs = (column: SQL, only: SQL) => sql<boolean>`coalesce(min(${column}) ${only} <> max(${column}) ${only}, false)`;
 
 export async function summaryFigures(db: DbOrTx, ask: Ask): Promise<SummaryFigures> {
   const [row] = await db.select({
@@ -19,10 +20,10 @@ export async function summaryFigures(db: DbOrTx, ask: Ask): Promise<SummaryFigur
     median: sql<number | null>`percentile_cont(0.5) within group (order by ${rows.energyKJPerMol}) ${exact}`,
     low: sql<number | null>`min(${rows.energyKJPerMol}) ${exact}`,
     high: sql<number | null>`max(${rows.energyKJPerMol}) ${exact}`,
-    unlike: count(sql`(${rows.scope}, ${rows.energyType}, ${rows.stepKey}, ${rows.stepDirection}, ${rows.state})`),
+    unlike: sql<boolean>`(${sql.join([rows.scope, rows.energyType, rows.stepKey, rows.stepDirection, rows.state].map((column) => differs(sql`${column}`, some)), sql` or `)})`,
     drawn: sql<number>`count(${rows.energyKJPerMol})::int`,
   }).from(rows).where(whereOf(ask));
-  return row ?? { sources: 0, measured: 0, computed: 0, energies: 0, median: null, low: null, high: null, unlike: 0, drawn: 0 };
+  return row ?? { sources: 0, measured: 0, computed: 0, energies: 0, median: null, low: null, high: null, unlike: false, drawn: 0 };
 }
 
 export async function summaryPoints(db: DbOrTx, ask: Ask, most: number): Promise<SummaryPoint[]> {
@@ -58,16 +59,16 @@ const figures = {
   median: sql<number | null>`percentile_cont(0.5) within group (order by ${rows.energyKJPerMol}) ${exact}`,
   low: sql<number | null>`min(${rows.energyKJPerMol}) ${exact}`,
   high: sql<number | null>`max(${rows.energyKJPerMol}) ${exact}`,
-  steps: count(sql`${rows.stepKey}`, exact), directions: count(sql`${rows.stepDirection}`, exact), scopes: count(sql`${rows.scope}`, exact),
-  energyTypes: count(sql`${rows.energyType}`, exact), states: count(sql`${rows.state}`, exact),
+  steps: differs(sql`${rows.stepKey}`, exact), directions: differs(sql`${rows.stepDirection}`, exact), scopes: differs(sql`${rows.scope}`, exact),
+  energyTypes: differs(sql`${rows.energyType}`, exact), states: differs(sql`${rows.state}`, exact),
 };
 
-interface HeadRow { key: string; direction: number | null; label: string; count: number; measured: number; computed: number; energies: number; median: number | null; low: number | null; high: number | null; steps: number; directions: number; scopes: number; energyTypes: number; states: number }
+interface HeadRow { key: string; direction: number | null; label: string; count: number; measured: number; computed: number; energies: number; median: number | null; low: number | null; high: number | null; steps: boolean; directions: boolean; scopes: boolean; energyTypes: boolean; states: boolean }
 
 function headOf(by: GroupBy, row: HeadRow): GroupHead {
   const { key, label, count: entries, measured, computed, energies, median, low, high } = row;
-  const why: GroupHead['noMedian'] = energies === 0 ? 'no-energies' : row.steps > 1 ? 'several-steps' : row.directions > 1 ? 'both-directions' : row.scopes > 1 ? 'several-scopes'
-    : row.energyTypes > 1 ? 'several-energy-types' : row.states > 1 ? 'several-states' : null;
+  const why: GroupHead['noMedian'] = energies === 0 ? 'no-energies' : row.steps ? 'several-steps' : row.directions ? 'both-directions' : row.scopes ? 'several-scopes'
+    : row.energyTypes ? 'several-energy-types' : row.states ? 'several-states' : null;
   return {
     by, key, label, direction: row.direction === null ? null : row.direction > 0 ? 1 : -1, count: entries, measured, computed,
     energy: low === null || high === null ? null : { count: energies, median: why === null ? median : null, low, high }, noMedian: why,
@@ -95,7 +96,8 @@ export async function listGroups(db: DbOrTx, ask: Ask, by: GroupBy, { limit, pos
   const query = selectHeads(db, by, whereOf(ask));
   const after = position ? query.having(sql`(-count(*), ${key} collate "C", coalesce(${direction}, 0)) > (${-Number(n)}::bigint, ${last}::text collate "C", ${Number(sense)}::int)`) : query;
   const found = await after.orderBy(sql`count(*) desc`, sql`${key} collate "C"`, sql`coalesce(${direction}, 0)`).limit(limit + 1);
-  const [counted] = await db.select({ n: sql<number>`count(distinct (${sql.join(columns, sql`, `)}))::int` }).from(rows).where(whereOf(ask));
+  const each = db.select({ one: sql`1`.as('one') }).from(rows).where(whereOf(ask)).groupBy(...columns).as('each');
+  const [counted] = await db.select({ n: sql<number>`count(*)::int` }).from(each);
   const page = found.slice(0, limit);
   const end = page.at(-1);
   return { heads: page.map((row) => headOf(by, row)), total: counted?.n ?? 0, next: found.length > limit && end ? [end.count, end.key, end.direction ?? 0] : null };

@@ -103,7 +103,7 @@ export function createSearchService({ db }: Context, records: EntryRecordsServic
     async summarise(actor: Actor, asked: EntryFilter): Promise<SearchSummary> {
       const { ask } = await readQuestion(db, engine, actor, asked);
       const { sources, measured, computed, energies, median, low, high, unlike, drawn } = await engine.figures(ask);
-      const summary = { sources, measured, computed, alike: unlike <= 1, energy: median === null || low === null || high === null ? null : { count: energies, median, low, high } };
+      const summary = { sources, measured, computed, alike: !unlike, energy: median === null || low === null || high === null ? null : { count: energies, median, low, high } };
       if (drawn <= maxPoints || low === null || high === null || low === high) {
         const points = await engine.points(ask, maxPoints);
         return { ...summary, histogram: null, points: points.map(({ methodClass, bound, ...point }) => ({ ...point, bound: bound as '=', computed: methodClass === 'computed' })) };
