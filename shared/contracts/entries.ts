@@ -1,11 +1,11 @@
 import * as z from 'zod';
 import {
-  arrangements, kinds, methodClasses, provenances, sampleTypes, scopes, siteTypes, structures,
+  arrangements, bounds, energyTypes, kinds, methodClasses, provenances, sampleTypes, scopes, siteTypes, structures,
 } from '../domain/kinds.ts';
 import { checkCodes } from '../domain/check-codes.ts';
 import { states } from '../domain/states.ts';
 import { endpoint } from './endpoint.ts';
-import { quantity, quantityInput } from './quantities.ts';
+import { derivationLine, quantity, quantityInput } from './quantities.ts';
 import { sourceSummary } from './sources.ts';
 
 /** What the printed rate counts: one event of the step as written, consumption of a named species, or not known. */
@@ -174,13 +174,49 @@ const accessionParam = z.object({ accession: z.string().max(20) });
 /** One line of an entry's history, in plain words. */
 export const historyLine = z.object({ at: z.string(), by: z.string(), what: z.string(), version: z.int().nullable() });
 
+/** How E_f - E_r stands against a reaction energy of the same type that is held; the figures where one is, the reason where two energies are not compared. */
+export const reverseConsistency = z.discriminatedUnion('status', [
+  z.object({ status: z.literal('not-compared'), reason: z.string() }),
+  z.object({
+    /** `undecided`: an uncertainty is not known. `no-reaction-energy`: none of this type is held, so that nothing is checked. */
+    status: z.enum(['consistent', 'inconsistent', 'undecided', 'no-reaction-energy']),
+    energyType: z.enum(energyTypes),
+    /** E_f - E_r, forward being the entry shown [kJ mol-1]. */
+    differenceKJPerMol: z.number(),
+    uDifferenceKJPerMol: z.number().nullable(),
+    /** The reaction energy in the direction of the entry shown, and the entry that holds it. */
+    reactionEnergy: z.object({ accession: z.string(), label: z.string(), valueKJPerMol: z.number(), uKJPerMol: z.number().nullable() }).nullable(),
+    closureErrorKJPerMol: z.number().nullable(),
+    normalizedError: z.number().nullable(),
+    derivation: z.array(derivationLine),
+    /** Where a gas takes part: what E_f - E_r is on concentrations, and other things taken as given. */
+    assumption: z.string().nullable(),
+  }),
+]);
+export type ReverseConsistency = z.infer<typeof reverseConsistency>;
+
+/** An accepted entry beside the one shown. */
+export const relatedEntry = z.object({
+  accession: z.string(), asPrinted: z.string(), label: z.string(), energyKJPerMol: z.number().nullable(), computed: z.boolean(),
+  bound: z.enum(bounds).nullable(), uEnergyKJPerMol: z.number().nullable(), energyType: z.enum(energyTypes).nullable(), scope: z.enum(scopes).nullable(),
+  promoters: z.array(z.string()),
+  /** Same energy type, scope and promoters as the entry shown, so that both may stand on one scale. */
+  alike: z.boolean(),
+  validRange: z.object({ min: z.number().nullable(), max: z.number().nullable() }).nullable(),
+  /** What k(T) = A (T/T0)^n exp(-E/RT) needs; null where it cannot be had. */
+  rate: z.object({ lnPreExponential: z.number(), exponent: z.number(), referenceTemperatureK: z.number(), unit: z.string() }).nullable(),
+});
+export type RelatedEntry = z.infer<typeof relatedEntry>;
+
 export const entryDetail = entry.extend({
   sourceDetail: z.object({ citation: z.string(), bibtex: z.string(), ris: z.string() }).nullable(),
   history: z.array(historyLine),
   versions: z.array(z.object({ version: z.int(), state: z.enum(states), acceptedAt: z.string() })),
+  /** Every revision that the viewer may see, oldest first: what can be compared. */
+  revisions: z.array(z.object({ revision: z.int(), version: z.int().nullable(), state: z.enum(states), at: z.string() })),
   /** Accepted entries for the same elementary step on the same surface, and those of the reverse step. */
-  sameStepAndSurface: z.array(z.object({ accession: z.string(), asPrinted: z.string(), label: z.string(), energyKJPerMol: z.number().nullable(), computed: z.boolean() })),
-  reverse: z.array(z.object({ accession: z.string(), asPrinted: z.string(), label: z.string(), energyKJPerMol: z.number().nullable(), computed: z.boolean() })),
+  sameStepAndSurface: z.array(relatedEntry),
+  reverse: z.array(relatedEntry.extend({ consistency: reverseConsistency })),
   submission: z.string().nullable(),
 });
 export type EntryDetail = z.infer<typeof entryDetail>;
@@ -198,6 +234,21 @@ export const getEntryVersion = endpoint({
 export const listEntryVersions = endpoint({
   method: 'GET', path: '/entries/:accession/versions', access: 'visitor', summary: 'The public versions of an entry',
   params: accessionParam, response: z.object({ items: entryDetail.shape.versions }),
+});
+/** A version by its number, or for those who may see it a revision as `r3`. */
+const versionOrRevision = z.string().regex(/^r?[1-9]\d{0,5}$/, 'Name a version by its number, such as 2, or a revision as r3.');
+const comparedRevision = z.object({ revision: z.int(), version: z.int().nullable(), state: z.enum(states), contributor: z.string(), at: z.string() });
+export const entryChanges = z.object({
+  accession: z.string(), from: comparedRevision, to: comparedRevision,
+  /** What was typed, part by part. */
+  changes: z.array(z.object({ field: z.string(), before: z.string(), after: z.string() })),
+  /** Quantities whose converted value differs, whether the print changed or only its conversion. */
+  quantities: z.array(z.object({ symbol: quantity.shape.symbol, before: quantity.nullable(), after: quantity.nullable() })),
+});
+export type EntryChanges = z.infer<typeof entryChanges>;
+export const getEntryChanges = endpoint({
+  method: 'GET', path: '/entries/:accession/changes', access: 'visitor', summary: 'What differs between two versions of an entry (or revisions, for those who may see them)',
+  params: accessionParam, query: z.object({ from: versionOrRevision, to: versionOrRevision }), response: entryChanges,
 });
 export const getDraft = endpoint({
   method: 'GET', path: '/entries/:accession/draft', access: 'contributor', summary: 'The open revision of an entry as its contributor typed it',

@@ -70,7 +70,7 @@ function EntryPage({ accession, version }: { accession: string; version: number 
         <div className="flex min-w-0 flex-col gap-9">
           <RatePlot entry={entry} temperatureK={temperatureK} />
           <SourceCard entry={entry} temperatureK={temperatureK} />
-          <EntryHistory entry={entry} />
+          <EntryHistory entry={entry} unit={unit} />
         </div>
       </div>
       <div className="grid gap-x-10 gap-y-9 pt-10 wide:grid-cols-2">

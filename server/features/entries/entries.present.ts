@@ -20,7 +20,7 @@ export interface View {
 /** Tag of what somebody saw of a revision; sent back as If-Match or `seen`. */
 export const revisionTag = (revision: Pick<RevisionRow, 'number' | 'lock'>): string => `${revision.number}.${revision.lock}`;
 
-function presentQuantity({ printed, converted }: EntryRecord['quantities'][number]): Quantity {
+export function presentQuantity({ printed, converted }: EntryRecord['quantities'][number]): Quantity {
   return {
     symbol: printed.symbol as Quantity['symbol'],
     energyType: printed.energyType as Quantity['energyType'],

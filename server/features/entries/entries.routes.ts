@@ -30,6 +30,7 @@ export function entriesRoutes(entries: EntriesService): Router {
   });
   route(router, contract.listEntryVersions, async ({ actor, params }) => ({ items: await entries.versions(actor, params.accession) }));
   route(router, contract.getEntryVersion, ({ actor, params, query }) => entries.getVersion(actor, params.accession, params.version, query.T ?? null));
+  route(router, contract.getEntryChanges, ({ actor, params, query }) => entries.changes(actor, params.accession, query));
   route(router, contract.getDraft, async ({ actor, params, res }) => {
     const entry = await entries.draft(actor, params.accession);
     res.setHeader('ETag', editTag(entry));

@@ -8,20 +8,21 @@ import type { SourcesService } from '#server/features/sources/sources.service.ts
 import { notFound, Refusal, refusalFromZod } from '#server/refusal.ts';
 import { assessEntry } from '#shared/assessment/assess-entry.ts';
 import { rateAtTemperature } from '#shared/assessment/rate-at-temperature.ts';
-import { entryInput, type EntryDetail, type EntryForEditing, type EntryInput, type Preview } from '#shared/contracts/entries.ts';
+import { entryInput, type EntryChanges, type EntryDetail, type EntryForEditing, type EntryInput, type Preview } from '#shared/contracts/entries.ts';
 import { accessionAlphabetSize, accessionFrom, readAccession } from '#shared/domain/accession.ts';
 import type { State } from '#shared/domain/states.ts';
 import { readHistory } from './history.repository.ts';
 import { mergePatch } from './merge-patch.ts';
-import { listRelated } from './neighbours.repository.ts';
 import { maySee } from './entries.policy.ts';
 import { actionsFor, presentAssessed, presentDraft, presentRecord, presentStep, revisionTag } from './entries.present.ts';
 import * as repository from './entries.repository.ts';
 import type { EntryHead, RevisionRow } from './entries.repository.ts';
+import { relatedTo } from './related.ts';
 import { makeSearchRows } from './make-search-rows.service.ts';
 import { freezeRevision } from './freeze.ts';
 import { checkAgainstStore } from './store-checks.ts';
 import { describeStanding } from './standing.ts';
+import { compareRevisions, findNamed } from './version-changes.ts';
 
 const newAccession = () => accessionFrom(Array.from({ length: 6 }, () => randomInt(accessionAlphabetSize)));
 const inputHash = (input: EntryInput) => textHash(JSON.stringify(input));
@@ -107,19 +108,17 @@ export function createEntriesService(context: Context, sources: SourcesService) 
     const versions = all.filter((other) => other.version !== null)
       .map((other) => ({ version: other.version ?? 0, state: other.state as State, acceptedAt: other.acceptedAt?.toISOString() ?? '' }));
     const seesAll = maySee(actor, { state: 'draft', authorId: revision.authorId });
-    const shared = { history: await readHistory(db, head.id, seesAll), versions, submission: seesAll && last?.submission.revisionId === revision.id ? last.submission.id : null };
+    const revisions = all.filter((other) => maySee(actor, { state: other.state as State, authorId: other.authorId })).reverse()
+      .map((other) => ({ revision: other.number, version: other.version, state: other.state as State, at: (other.acceptedAt ?? other.changedAt).toISOString() }));
+    const shared = { history: await readHistory(db, head.id, seesAll), versions, revisions, submission: seesAll && last?.submission.revisionId === revision.id ? last.submission.id : null };
     if (!record) {
       const draft = await forEditing(actor, head, revision, all);
       return {
         ...draft, kAtT: null, ...shared, sourceDetail: null, sameStepAndSurface: [], reverse: [],
       };
     }
-    const related = { stepKey: record.step.key, surfaceLabel: record.surface.label, accession: head.accession };
-    const [sameStepAndSurface, reverse] = await Promise.all([
-      listRelated(db, { ...related, direction: record.step.direction }), listRelated(db, { ...related, direction: -record.step.direction }),
-    ]);
     return {
-      ...presentRecord(record, view), ...shared, sameStepAndSurface, reverse,
+      ...presentRecord(record, view), ...shared, ...await relatedTo(db, record, temperatureK),
       sourceDetail: { citation: record.source.citation, bibtex: record.source.bibtex, ris: record.source.ris },
     };
   }
@@ -287,6 +286,18 @@ export function createEntriesService(context: Context, sources: SourcesService) 
       const revision = all.find((other) => other.version === version);
       if (!revision) throw notFound(`Version ${version} of entry ${accession}`);
       return detailOf(actor, head, revision, all, temperatureK);
+    },
+
+    /** What differs between two versions, or between two revisions that the viewer may see. */
+    async changes(actor: Actor, accession: string, { from, to }: { from: string; to: string }): Promise<EntryChanges> {
+      const { head, all } = await findVisible(actor, accession);
+      const visible = all.filter((revision) => maySee(actor, { state: revision.state as State, authorId: revision.authorId }));
+      const [before, after] = [from, to].map((name) => {
+        const named = findNamed(name, visible);
+        if (!named) throw notFound(`${name.startsWith('r') ? `Revision ${name.slice(1)}` : `Version ${name}`} of entry ${accession}`);
+        return named;
+      }) as [RevisionRow, RevisionRow];
+      return compareRevisions(db, head.accession, before, after);
     },
 
     async versions(actor: Actor, accession: string) {

@@ -1,7 +1,8 @@
-import { and, asc, eq, isNotNull, ne, notInArray, sql } from 'drizzle-orm';
+import { and, arrayContains, asc, eq, isNotNull, ne, notInArray, sql } from 'drizzle-orm';
 import type { DbOrTx } from '#server/db/pool.ts';
 import { revisions } from '#server/db/schema/entries.ts';
 import { searchRows } from '#server/db/schema/search.ts';
+import type { Bound, EnergyType, Scope } from '#shared/domain/kinds.ts';
 
 export interface Neighbour {
   accession: string;
@@ -46,16 +47,29 @@ export async function listNeighbours(db: DbOrTx, family: Family, surfaceLabel: s
 
 /** Other accepted entries of the step on the surface (or of its reverse), whatever their scope. */
 export async function listRelated(db: DbOrTx, { stepKey, direction, surfaceLabel, accession }: { stepKey: string; direction: number; surfaceLabel: string; accession: string }) {
-  const rows = await db.select({
-    accession: searchRows.accession, source: searchRows.sourceLabel, energyKJPerMol: searchRows.energyKJPerMol, methodClass: searchRows.methodClass, input: revisions.input,
-  }).from(searchRows).innerJoin(revisions, eq(revisions.id, searchRows.revisionId))
+  const rows = await db.select({ row: searchRows, input: revisions.input })
+    .from(searchRows).innerJoin(revisions, eq(revisions.id, searchRows.revisionId))
     .where(and(searchRows.listed, eq(searchRows.stepKey, stepKey), eq(searchRows.stepDirection, direction), eq(searchRows.surfaceLabel, surfaceLabel), ne(searchRows.accession, accession)))
     .orderBy(asc(searchRows.energyKJPerMol), asc(searchRows.accession)).limit(50);
-  return rows.map((row) => {
-    const primary = row.input.quantities?.[0];
+  return rows.map(({ row, input }) => {
+    const primary = input.quantities?.[0];
+    const { lnPreExponential, referenceTemperatureK, exponent, rateUnit } = row;
     return {
-      accession: row.accession, label: row.source, energyKJPerMol: row.energyKJPerMol, computed: row.methodClass === 'computed',
+      accession: row.accession, label: row.sourceLabel, energyKJPerMol: row.energyKJPerMol, computed: row.methodClass === 'computed',
       asPrinted: primary ? `${primary.asPrinted} ${primary.unitAsPrinted}`.trim() : '',
+      bound: row.energyBound as Bound | null, uEnergyKJPerMol: row.uEnergyKJPerMol, energyType: row.energyType as EnergyType | null, scope: (row.scope || null) as Scope | null,
+      promoters: row.promoters, site: row.site, equation: row.equation,
+      validRange: row.validMinK === null && row.validMaxK === null ? null : { min: row.validMinK, max: row.validMaxK },
+      rate: lnPreExponential === null || rateUnit === null ? null : { lnPreExponential, exponent: exponent ?? 0, referenceTemperatureK: referenceTemperatureK ?? 1, unit: rateUnit },
     };
   });
+}
+export type Related = Awaited<ReturnType<typeof listRelated>>[number];
+
+/** Accepted revisions that hold a reaction energy of the step on the surface, in either direction. */
+export async function listReactionEnergyHolders(db: DbOrTx, { stepKey, surfaceLabel }: { stepKey: string; surfaceLabel: string }): Promise<string[]> {
+  const rows = await db.select({ id: searchRows.revisionId }).from(searchRows)
+    .where(and(searchRows.listed, eq(searchRows.stepKey, stepKey), eq(searchRows.surfaceLabel, surfaceLabel), arrayContains(searchRows.kindsHeld, ['reaction-energy'])))
+    .orderBy(asc(searchRows.accession)).limit(20);
+  return rows.map(({ id }) => id);
 }

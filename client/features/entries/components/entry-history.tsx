@@ -1,10 +1,12 @@
 import { Link } from 'react-router-dom';
 import { stateWords } from '#shared/domain/states.ts';
 import type { EntryDetail } from '#shared/contracts/entries.ts';
+import type { EnergyUnit } from '#shared/contracts/accounts.ts';
 import { formatDate } from '#client/lib/dates.ts';
+import { EntryChanges } from './entry-changes.tsx';
 
 /** What happened to the entry, newest first, and its public versions. */
-export function EntryHistory({ entry }: { entry: EntryDetail }) {
+export function EntryHistory({ entry, unit }: { entry: EntryDetail; unit: EnergyUnit }) {
   const { history, versions, accession, version } = entry;
   const lines = [...history].reverse();
   return (
@@ -32,6 +34,7 @@ export function EntryHistory({ entry }: { entry: EntryDetail }) {
           ))}
         </p>
       )}
+      <EntryChanges entry={entry} unit={unit} />
     </section>
   );
 }
