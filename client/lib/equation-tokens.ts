@@ -1,11 +1,17 @@
 import { isNuclide } from '#shared/steps/nuclides.ts';
-import { StepError } from '#shared/steps/step-error.ts';
-import { speakStep, stepTokens, type StepToken } from '#shared/steps/step-format.ts';
+import { readPrinted } from '#shared/steps/printed-equation.ts';
+import { wordsOf } from '#shared/steps/set-terms.ts';
 
 /** A piece of an equation as it is set. */
 export interface EquationToken {
   kind: 'text' | 'count' | 'index' | 'isotope' | 'star' | 'site' | 'charge' | 'plus' | 'arrow' | 'equilibrium' | 'phase';
   text: string;
+}
+
+/** An equation cut into pieces, and in words for those who listen. */
+export interface SetEquation {
+  tokens: EquationToken[];
+  spoken: string;
 }
 
 const patterns: readonly [EquationToken['kind'] | 'space', RegExp][] = [
@@ -21,7 +27,7 @@ const patterns: readonly [EquationToken['kind'] | 'space', RegExp][] = [
 ];
 
 /** A count keeps its blank where the number would make a fraction of the formula, or a nuclide: `1/2 N2`, `15 N*`. */
-function spaced(count: string, next: string): string {
+export function spacedCount(count: string, next: string): string {
   return count.includes('/') || isNuclide(`${count}${/^[A-Z][a-z]?/.exec(next)?.[0] ?? ''}`) ? `${count} ` : count;
 }
 
@@ -38,7 +44,7 @@ export function equationTokens(equation: string): EquationToken[] {
     const digits = /^(?:\d+(?:[./]\d+)?|[½¼¾])/.exec(rest)?.[0];
     if (digits) {
       rest = rest.slice(digits.length);
-      tokens.push({ kind: inside ? 'index' : 'count', text: inside ? digits : spaced(digits, rest.trimStart()) });
+      tokens.push({ kind: inside ? 'index' : 'count', text: inside || !/^\s/.test(rest) ? digits : spacedCount(digits, rest.trimStart()) });
       continue;
     }
     if (/^\+(?=\s|$)/.test(rest) || (rest.startsWith('+') && !inside)) {
@@ -67,32 +73,13 @@ export function equationTokens(equation: string): EquationToken[] {
   return tokens;
 }
 
-const kindOf: Readonly<Record<Exclude<StepToken['kind'], 'sup' | 'coefficient'>, EquationToken['kind']>> = {
-  'text': 'text', 'sub': 'index', 'site': 'star', 'site-type': 'site', 'plus': 'plus', 'arrow': 'arrow',
-};
-
-function fromStepToken({ kind, text }: StepToken, index: number, all: readonly StepToken[]): EquationToken {
-  if (kind === 'coefficient') return { kind: 'count', text: spaced(text, all[index + 1]?.text ?? '') };
-  if (kind === 'sup') return /^\d+$/.test(text) ? { kind: 'isotope', text } : { kind: 'charge', text: `^${text}` };
-  return { kind: kindOf[kind], text: kind === 'site-type' ? `_${text}` : text };
+/** An equation in the spelling that is printed, cut into pieces and in words; null for one that only the whole reader can read. */
+export function setPrinted(equation: string): SetEquation | null {
+  const printed = readPrinted(equation);
+  return printed ? { tokens: equationTokens(equation), spoken: wordsOf(printed) } : null;
 }
 
-/** Only the symbol right after an isotope's number belongs to it: the letters that follow are cut off. */
-function afterIsotope(token: EquationToken, index: number, all: readonly EquationToken[]): EquationToken[] {
-  const [, symbol, rest] = /^([A-Z][a-z]?)(.+)$/.exec(token.text) ?? [];
-  if (all[index - 1]?.kind !== 'isotope' || !symbol || !rest) return [token];
-  return [{ kind: 'text', text: symbol }, { kind: 'text', text: rest }];
-}
-
-/** An equation cut into pieces, and in words for those who listen; one that is no equation yet is heard as it is typed. */
-export function readEquation(equation: string): { tokens: EquationToken[]; spoken: string } {
-  try {
-    const spoken = speakStep(equation);
-    // The reader of equations keeps one arrow; an equilibrium and a phase that were printed are set as printed, unless with markup.
-    const plain = /<->|<=>|[⇌↔]|\([a-z]+\)/.test(equation) && /^[\w\s*+<>=⇌↔→()[\]^/.,½¼¾-]+$/.test(equation) && !/&|<\/|[_^]\{|_ads?\b|\^\*/.test(equation);
-    return { tokens: plain ? equationTokens(equation) : stepTokens(equation).map(fromStepToken).flatMap(afterIsotope), spoken };
-  } catch (error) {
-    if (error instanceof StepError) return { tokens: equationTokens(equation), spoken: equation };
-    throw error;
-  }
+/** An equation that is no equation yet: set as far as it goes, and heard as it is typed. */
+export function setAsTyped(equation: string): SetEquation {
+  return { tokens: equationTokens(equation), spoken: equation };
 }

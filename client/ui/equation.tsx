@@ -1,5 +1,5 @@
-import { memo, type ReactNode } from 'react';
-import { readEquation, type EquationToken } from '#client/lib/equation-tokens.ts';
+import { memo, useEffect, useState, type ReactNode } from 'react';
+import { setAsTyped, setPrinted, type EquationToken, type SetEquation } from '#client/lib/equation-tokens.ts';
 import { Sign } from './signs.tsx';
 
 interface EquationProps {
@@ -31,9 +31,31 @@ function setToken(token: EquationToken, before: EquationToken | undefined): Reac
   }
 }
 
+type SetTyped = (equation: string) => SetEquation;
+let wholeReader: SetTyped | null = null;
+
+/** An equation cut into pieces. The whole reader is fetched for the first one that is not in the spelling kept; until it is there, and without it, what was typed is set. */
+function useSetEquation(equation: string): SetEquation {
+  const [reader, setReader] = useState<SetTyped | null>(() => wholeReader);
+  const printed = setPrinted(equation);
+  const wanted = printed === null && reader === null && equation.trim() !== '';
+  useEffect(() => {
+    if (!wanted) return;
+    let shown = true;
+    void import('#client/lib/typed-equation.ts').then(({ setTyped }) => {
+      wholeReader = setTyped;
+      if (shown) setReader(() => setTyped);
+    }, () => undefined);
+    return () => {
+      shown = false;
+    };
+  }, [wanted]);
+  return printed ?? (reader ?? setAsTyped)(equation);
+}
+
 /** An equation set with true indices and quiet raised asterisks; read aloud in words, copied in plain spelling. */
 export const Equation = memo(function Equation({ equation, display = false }: EquationProps) {
-  const { tokens, spoken } = readEquation(equation);
+  const { tokens, spoken } = useSetEquation(equation);
   return (
     <span className={display ? 'equation equation-display' : 'equation'} role="img" aria-label={spoken}>
       {tokens.map((token, index) => {

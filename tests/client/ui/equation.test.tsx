@@ -1,4 +1,4 @@
-import { render } from '@testing-library/react';
+import { render, waitFor } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import { Equation } from '#client/ui/equation.tsx';
 
@@ -39,9 +39,12 @@ describe('equation', () => {
     ['NH<sub>3</sub>* + * &rarr; NH<sub>2</sub>* + H*', 'NH3* + * -> NH2* + H*'],
     ['CO_ads + * <-> C_ads + O_ads', 'CO* + * -> C* + O*'],
     ['13CO* + * -> 13C* + O*', '[13C]O* + * -> [13C]* + O*'],
-  ])('sets %s, with its markup, in the spelling kept', (typed, plain) => {
+    ['15N* -> 15N + *', '[15N]* -> [15N] + *'],
+    ['O2* + e- -> O2-*', 'O2* + e^- -> O2^-*'],
+    ['CO* + * = C* + O*', 'CO* + * -> C* + O*'],
+  ])('sets %s in the spelling kept as soon as the reader is there', async (typed, plain) => {
     const { container } = render(<Equation equation={typed} />);
-    expect(copied(container.firstElementChild)).toBe(plain);
+    await waitFor(() => expect(copied(container.firstElementChild)).toBe(plain));
   });
 
   it('sets a charge with a true minus sign, raised', () => {
