@@ -6,7 +6,7 @@ import type { Context } from './context.ts';
 import { accountsRoutes } from './features/accounts/accounts.routes.ts';
 import { calculatorsRoutes } from './features/calculators/calculators.routes.ts';
 import { collectionsRoutes } from './features/collections/collections.routes.ts';
-import { entriesRoutes } from './features/entries/entries.routes.ts';
+import { describePages, entriesRoutes } from './features/entries/entries.routes.ts';
 import { exportsRoutes } from './features/exports/exports.routes.ts';
 import { healthRoutes } from './features/health/health.routes.ts';
 import { reviewsRoutes } from './features/reviews/reviews.routes.ts';
@@ -58,8 +58,14 @@ export function createApp(context: Context, services: Services, settings: HttpSe
     strictTransportSecurity: settings.secureCookies,
   }));
   app.use(compression());
+  if (context.demonstration) {
+    app.use((_req, res, next) => {
+      res.setHeader('X-Robots-Tag', 'noindex');
+      next();
+    });
+  }
 
-  const { assets, page } = staticFiles(settings.clientDir);
+  const { assets, page } = staticFiles(settings.clientDir, { demonstration: context.demonstration, describe: describePages(services.entries) });
   const api = express.Router();
   const csrf = csrfProtection(settings.sessionSecret, settings.secureCookies);
   api.use(healthRoutes(context));

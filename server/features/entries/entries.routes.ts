@@ -1,5 +1,6 @@
 import { Router, type Request } from 'express';
 import { Refusal } from '#server/refusal.ts';
+import type { PageHead } from '#server/http/page-head.ts';
 import { route } from '#server/http/route.ts';
 import * as contract from '#shared/contracts/entries.ts';
 import type { EntriesService } from './entries.service.ts';
@@ -15,6 +16,12 @@ function seenTag(req: Request): string | null {
 
 const editTag = (entry: contract.EntryForEditing) => `"${entry.revision}.${entry.lock}"`;
 
+/** The heads of the pages of entries; of other pages it knows nothing. */
+export const describePages = (entries: EntriesService) => async (pathname: string): Promise<PageHead | null> => {
+  const [, accession, version] = /^\/entries\/([^/]{1,40})(?:\/v\/(\d{1,6}))?\/?$/.exec(pathname) ?? [];
+  return accession === undefined ? null : entries.pageHead(accession, version === undefined ? null : Number(version));
+};
+
 export function entriesRoutes(entries: EntriesService): Router {
   const router = Router();
   route(router, contract.createEntry, async ({ actor, body, res }) => {
@@ -23,11 +30,8 @@ export function entriesRoutes(entries: EntriesService): Router {
     return entry;
   });
   route(router, contract.previewEntry, ({ actor, body, query }) => entries.preview(actor, body, query.T ?? null));
-  route(router, contract.getEntry, async ({ actor, params, query, res }) => {
-    const { entry, tag } = await entries.get(actor, params.accession, query.T ?? null);
-    res.setHeader('ETag', `W/"${tag}${query.T ? `@${query.T}` : ''}${actor.userId ? `-${actor.userId.slice(0, 8)}` : ''}"`);
-    return entry;
-  });
+  // Its ETag is made from the whole answer: neighbours and history change without the revision.
+  route(router, contract.getEntry, ({ actor, params, query }) => entries.get(actor, params.accession, query.T ?? null));
   route(router, contract.listEntryVersions, async ({ actor, params }) => ({ items: await entries.versions(actor, params.accession) }));
   route(router, contract.getEntryVersion, ({ actor, params, query }) => entries.getVersion(actor, params.accession, params.version, query.T ?? null));
   route(router, contract.getEntryChanges, ({ actor, params, query }) => entries.changes(actor, params.accession, query));

@@ -5,6 +5,7 @@ import { appendEvents, textHash, type EventRecord } from '#server/db/event-log.t
 import { readCursor, writeCursor } from '#server/db/keyset.ts';
 import { isUniqueViolation } from '#server/db/pg-errors.ts';
 import type { SourcesService } from '#server/features/sources/sources.service.ts';
+import type { PageHead } from '#server/http/page-head.ts';
 import { notFound, Refusal, refusalFromZod } from '#server/refusal.ts';
 import { assessEntry } from '#shared/assessment/assess-entry.ts';
 import { rateAtTemperature } from '#shared/assessment/rate-at-temperature.ts';
@@ -19,6 +20,7 @@ import * as repository from './entries.repository.ts';
 import type { EntryHead, RevisionRow } from './entries.repository.ts';
 import { relatedTo } from './related.ts';
 import { makeSearchRows } from './make-search-rows.service.ts';
+import { headOfEntry, hiddenHead } from './entry-head.ts';
 import { freezeRevision } from './freeze.ts';
 import { checkAgainstStore } from './store-checks.ts';
 import { describeStanding } from './standing.ts';
@@ -28,7 +30,7 @@ const newAccession = () => accessionFrom(Array.from({ length: 6 }, () => randomI
 const inputHash = (input: EntryInput) => textHash(JSON.stringify(input));
 
 export function createEntriesService(context: Context, sources: SourcesService) {
-  const { db, clock, publicUrl } = context;
+  const { db, clock, publicUrl, demonstration } = context;
 
   async function findVisible(actor: Actor, text: string): Promise<{ head: EntryHead; all: RevisionRow[] }> {
     const accession = readAccession(text);
@@ -273,12 +275,12 @@ export function createEntriesService(context: Context, sources: SourcesService) 
     },
 
     /** An entry for reading: its public version, else the newest revision the viewer may see. */
-    async get(actor: Actor, accession: string, temperatureK: number | null): Promise<{ entry: EntryDetail; tag: string }> {
+    async get(actor: Actor, accession: string, temperatureK: number | null): Promise<EntryDetail> {
       const { head, all } = await findVisible(actor, accession);
       const visible = all.filter((revision) => maySee(actor, { state: revision.state as State, authorId: revision.authorId }));
       const revision = visible.find(({ state }) => state === 'accepted') ?? visible.find(isPublic) ?? visible[0];
       if (!revision) throw notFound(`Entry ${accession}`);
-      return { entry: await detailOf(actor, head, revision, all, temperatureK), tag: revisionTag(revision) };
+      return detailOf(actor, head, revision, all, temperatureK);
     },
 
     async getVersion(actor: Actor, accession: string, version: number, temperatureK: number | null): Promise<EntryDetail> {
@@ -292,12 +294,17 @@ export function createEntriesService(context: Context, sources: SourcesService) 
     async changes(actor: Actor, accession: string, { from, to }: { from: string; to: string }): Promise<EntryChanges> {
       const { head, all } = await findVisible(actor, accession);
       const visible = all.filter((revision) => maySee(actor, { state: revision.state as State, authorId: revision.authorId }));
-      const [before, after] = [from, to].map((name) => {
-        const named = findNamed(name, visible);
-        if (!named) throw notFound(`${name.startsWith('r') ? `Revision ${name.slice(1)}` : `Version ${name}`} of entry ${accession}`);
-        return named;
-      }) as [RevisionRow, RevisionRow];
-      return compareRevisions(db, head.accession, before, after);
+      return compareRevisions(db, head.accession, findNamed(from, visible, accession), findNamed(to, visible, accession));
+    },
+
+    /** What the page of an entry says of itself to whoever asks without being signed in. */
+    async pageHead(text: string, version: number | null): Promise<PageHead> {
+      const accession = readAccession(text);
+      const head = accession ? await repository.findEntry(db, accession) : null;
+      const published = head ? (await repository.listRevisions(db, head.id)).filter(isPublic) : [];
+      const revision = version === null ? published.find(({ state }) => state === 'accepted') ?? published[0] : published.find((one) => one.version === version);
+      const record = revision ? await repository.loadRecord(db, revision.id) : null;
+      return record ? headOfEntry(record, { publicUrl, demonstration }) : hiddenHead;
     },
 
     async versions(actor: Actor, accession: string) {

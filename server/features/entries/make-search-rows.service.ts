@@ -1,11 +1,11 @@
 import type { Db, Tx } from '#server/db/pool.ts';
 import { loadRecords } from './entries.repository.ts';
 import { SEARCH_ROW_MAKER, searchRowOf, type TermNames } from './search-row.ts';
-import { insertSearchRows, listTermNames, listWithoutSearchRow, takeOldSearchRows } from './search-rows.repository.ts';
+import { insertSearchRows, listTermNames, listWithoutSearchRow, takeOldSearchRows, withoutSearchRow } from './search-rows.repository.ts';
 
 /** Makes the search rows of frozen revisions that have none yet, and gives how many it made. */
 export async function makeSearchRows(tx: Tx, revisionIds: readonly string[]): Promise<number> {
-  const records = await loadRecords(tx, revisionIds);
+  const records = await loadRecords(tx, await withoutSearchRow(tx, revisionIds));
   if (records.length === 0) return 0;
   const known = new Map((await listTermNames(tx)).map(({ list, code, names }) => [`${list} ${code.toLowerCase()}`, names]));
   const names: TermNames = (list, code) => known.get(`${list} ${code.toLowerCase()}`) ?? [];

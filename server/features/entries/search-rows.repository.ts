@@ -31,6 +31,14 @@ export async function takeOldSearchRows(tx: Tx, maker: number, most: number): Pr
   return rows.map(({ id }) => id);
 }
 
+/** Which of some revisions have no search row. */
+export async function withoutSearchRow(tx: Tx, revisionIds: readonly string[]): Promise<string[]> {
+  if (revisionIds.length === 0) return [];
+  const rows = await tx.select({ id: searchRows.revisionId }).from(searchRows).where(inArray(searchRows.revisionId, [...revisionIds]));
+  const there = new Set(rows.map(({ id }) => id));
+  return revisionIds.filter((id) => !there.has(id));
+}
+
 /** Frozen revisions without a search row. */
 export async function listWithoutSearchRow(tx: Tx, most: number): Promise<string[]> {
   const rows = await tx.select({ id: revisions.id }).from(revisions).where(and(

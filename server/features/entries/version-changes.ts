@@ -1,4 +1,5 @@
 import type { DbOrTx } from '#server/db/pool.ts';
+import { notFound } from '#server/refusal.ts';
 import { assessEntry } from '#shared/assessment/assess-entry.ts';
 import type { EntryChanges } from '#shared/contracts/entries.ts';
 import type { Quantity } from '#shared/contracts/quantities.ts';
@@ -7,10 +8,16 @@ import { listChanges, pairQuantities } from './changes.service.ts';
 import { presentAssessed, presentQuantity } from './entries.present.ts';
 import { loadRecord, type RevisionRow } from './entries.repository.ts';
 
-/** The revision that "2" (version 2) or "r3" (revision 3) names among those given. */
-export function findNamed(name: string, revisions: readonly RevisionRow[]): RevisionRow | undefined {
+/**
+ * The revision that "2" (version 2) or "r3" (revision 3) names among those that the viewer may see.
+ * @throws Refusal when none of them has the name
+ */
+export function findNamed(name: string, visible: readonly RevisionRow[], accession: string): RevisionRow {
+  const byRevision = name.startsWith('r');
   const wanted = Number(name.replace('r', ''));
-  return revisions.find(({ version, number }) => (name.startsWith('r') ? number : version) === wanted);
+  const named = visible.find(({ version, number }) => (byRevision ? number : version) === wanted);
+  if (!named) throw notFound(`${byRevision ? 'Revision' : 'Version'} ${wanted} of entry ${accession}`);
+  return named;
 }
 
 /** The quantities of a revision as they were accepted, or as they would be read now while it is not frozen. */
