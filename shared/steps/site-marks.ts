@@ -45,7 +45,8 @@ export function findSiteMarks(terms: readonly PlainText[], choices: Choices): Si
   const texts = terms.map(({ text }) => text);
   const asterisks = texts.some((text) => marked.test(text));
   const metal = solidMetal(terms);
-  const solid = metal !== null || texts.some((text) => /^[([][sS][)\]]$/.test(text) || /^\*+$/.test(text));
+  // Beside O* a C(s) is more likely solid carbon: (s) marks the surface only where nothing else marks what is on it.
+  const solid = metal !== null || (!texts.some((text) => /[A-Za-z0-9)\]]\*|\*[A-Z]/.test(text)) && texts.some((text) => /^[([][sS][)\]]$/.test(text) || /^\*+$/.test(text)));
   const letter = ['M', 'X', 'Z'].find((name) => texts.includes(name)) ?? null;
   const numbered = texts.some((text) => /\*_?\{?1\}?$/.test(text));
   if (letter || asterisks || metal) return { letter, attached: letter === 'X', solid, numbered };
