@@ -150,6 +150,30 @@ describe('pages', () => {
     }
   });
 
+  it.each<[string, (entry: Entry) => string | null]>([
+    ['step', ({ step }) => step?.key ?? null], ['metal', ({ surface }) => surface?.formula ?? null], ['surface', ({ surface }) => surface?.label ?? null], ['source', ({ source }) => source?.label ?? null],
+    ['method', ({ method }) => method.technique ?? method.class], ['scope', ({ scope }) => scope], ['provenance', ({ provenance }) => provenance], ['energyType', (entry) => energyOf(entry)?.energyType ?? null], ['accession', ({ accession }) => accession],
+  ])('by %s follow the codes of their letters either way, and what has none comes last', async (name, read) => {
+    for (const sort of [name, `-${name}`]) {
+      const values = ((await search({ sort, limit: '200' })).items as Entry[]).map(read);
+      const known = values.filter((value): value is string => value !== null);
+      expect(values.slice(known.length).every((value) => value === null), sort).toBe(true);
+      expect(known, sort).toEqual([...known].sort((a, b) => Buffer.compare(Buffer.from(a), Buffer.from(b)) * (sort === name ? 1 : -1)));
+    }
+  });
+
+  it.each(['preExponential', '-preExponential'])('by %s are in order within one unit', async (sort) => {
+    const factors = ((await search({ sort, limit: '200' })).items as Entry[]).map(({ quantities }) => quantities.find(({ symbol }) => symbol === 'preExponential') ?? null);
+    const known = factors.flatMap((factor) => (factor ? [{ unit: factor.siteUnit ?? factor.unit, value: factor.siteValue ?? factor.value ?? factor.low ?? factor.high ?? 0 }] : []));
+    expect(known.length).toBeGreaterThan(8);
+    expect(factors.slice(known.length).every((factor) => factor === null)).toBe(true);
+    expect(known.map(({ unit }) => unit)).toEqual(known.map(({ unit }) => unit).sort());
+    for (const unit of new Set(known.map((one) => one.unit))) {
+      const values = known.filter((one) => one.unit === unit).map(({ value }) => value);
+      expect(values).toEqual([...values].sort((a, b) => (sort === 'preExponential' ? a - b : b - a)));
+    }
+  });
+
   it.each(['k', '-k'])('by %s, within one unit, follow the k that is shown', async (sort) => {
     const items = (await search({ sort, T: '650', limit: '200' })).items as Entry[];
     const shown = items.flatMap(({ kAtT }) => (kAtT ? [kAtT] : []));
