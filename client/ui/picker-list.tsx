@@ -63,7 +63,7 @@ export function PickerList<Value extends string>({
 
   const activeId = shown[at] ? `${id}-${at}` : undefined;
   const row = (option: PickerOption<Value>, index: number) => (
-    <li
+    <div
       key={option.value}
       id={`${id}-${index}`}
       role="option"
@@ -83,7 +83,7 @@ export function PickerList<Value extends string>({
           {option.count}<span className="sr-only">{option.count === 1 ? ' entry' : ' entries'}</span>
         </span></>
       )}
-    </li>
+    </div>
   );
   return (
     <>
@@ -111,7 +111,7 @@ export function PickerList<Value extends string>({
           onKeyDown={onKey}
         />
       )}
-      <ul
+      <div
         id={`${id}-list`}
         role="listbox"
         aria-label={label}
@@ -125,13 +125,13 @@ export function PickerList<Value extends string>({
         {text ? shown.map(row) : sectionsOf(shown).map(({ name, from, options: some }) => (name === undefined
           ? some.map((option, index) => row(option, from + index))
           : (
-            <li key={`section ${name}`} role="group" aria-label={name}>
+            <div key={`section ${name}`} role="group" aria-label={name}>
               <span className="picker-section" aria-hidden="true">{name}</span>
-              <ul role="presentation">{some.map((option, index) => row(option, from + index))}</ul>
-            </li>
+              {some.map((option, index) => row(option, from + index))}
+            </div>
           )))}
-      </ul>
-      {shown.length === 0 && <p className="picker-note" role="status">{text ? `Nothing here is spelled like “${text}”.` : empty}</p>}
+      </div>
+      {shown.length === 0 && <p className="picker-note" role="status">{text && options.length > 0 ? `Nothing here is spelled like “${text}”.` : empty}</p>}
       {listed.length > shown.length && <p className="picker-note">{`${listed.length - shown.length} more; type to find them.`}</p>}
       {(footer || (clearLabel && chosen.length > 0)) && (
         <div className="picker-foot">

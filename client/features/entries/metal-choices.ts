@@ -28,6 +28,9 @@ export function metalChoices({ filter, counts, vocabulary }: SentenceSource): Ch
   const groupIsChosen = (group: MetalGroup) => contains.length === 0 && group.metals.every((metal) => metals.includes(metal));
   const options: ChoiceOption[] = [
     ...(counts?.metal ?? []).map(({ value, count }) => ({ value: choice('metal', value), label: value, count, also: also(value), group: nameOf(value), section: 'metals' })),
+    ...(counts ? terms : []).filter(({ code }) => !counted.has(code)).map(({ code, label }) => ({
+      value: choice('metal', code), label: code, count: 0, also: also(code), group: label, section: 'metals', deep: true,
+    })),
     ...groups.map((group) => ({
       value: choice('group', group.code), label: group.name, also: `${group.also} ${group.metals.join(' ')}`, group: group.metals.join(', '), section: 'groups of metals',
       ...(counts ? { count: group.metals.reduce((sum, metal) => sum + (counted.get(metal) ?? 0), 0) } : {}),

@@ -47,6 +47,9 @@ export function stepChoices({ filter, counts, vocabulary }: SentenceSource): Cho
       };
     }),
     ...made('stepClass', counts?.stepClass, 'by class', (value) => ({ label: classWords(value), also: classes.find(({ code }) => code === value)?.synonyms.join(', ') ?? '' })),
+    ...(counts ? classes : []).filter(({ code }) => !counts?.stepClass.some(({ value }) => value === code)).map(({ code, synonyms }) => ({
+      value: choice('stepClass', code), label: classWords(code), count: 0, also: synonyms.join(', '), section: 'by class', deep: true,
+    })),
     ...made('species', counts?.species, 'by species', (value, _, index) => ({ label: `with ${value}`, formula: value, ...rare(index), also: [value, namesOfSpecies(value)].join(', '), group: namesOfSpecies(value).split(',')[0] ?? '' })),
     ...made('bond', counts?.bond, 'by bond', (value) => ({ label: `bond ${bondWords(value)}`, also: `${value} ${value.replaceAll('-', '')} breaking forming scission` })),
     ...made('cleavage', counts?.cleavage, 'by bond', (value) => ({ label: `${valueWords('cleavage', value)} cleavage` })),

@@ -30,11 +30,16 @@ const source = (filter: EntryFilter) => ({ filter, counts, vocabulary });
 describe('elementary steps', () => {
   it('are offered by equation, class, species, bond and cleavage, each with its count', () => {
     const { options } = stepChoices(source({}));
-    expect(options.map(({ value, count: n, section }) => [section, value, n])).toEqual([
+    expect(options.filter(({ deep }) => !deep).map(({ value, count: n, section }) => [section, value, n])).toEqual([
       ['by equation', `step:${desorption}`, 103], ['by equation', 'step:H* + NH2* <=> NH3* + *', 67], ['by class', 'stepClass:dehydrogenation', 149],
       ['by species', 'species:NH3', 166], ['by bond', 'bond:N-H', 175], ['by bond', 'cleavage:hydrogen-assisted', 3],
     ]);
     expect(options[0]?.also).toMatch(/recombination.*dissociative adsorption.*nitrogen/);
+  });
+
+  it('can be asked for by a class that nothing is known of', () => {
+    expect(stepChoices(source({})).options.find(({ value }) => value === 'stepClass:isomerisation')).toMatchObject({ count: 0, deep: true });
+    expect(metalChoices(source({})).options.find(({ value }) => value === 'metal:Au')).toMatchObject({ count: 0, deep: true });
   });
 
   it('set the filter that a choice belongs to and leave the others as they are chosen', () => {

@@ -55,7 +55,12 @@ export function StepPicker({ choices, ...rest }: Omit<ChoicePickerProps, 'asType
     // The reader of equations is fetched for the first one that is typed; without it the server reads all the same.
     if (isEquation(typed)) void import('#shared/steps/parse-step.ts').then((module) => setReader(() => module.readStep), () => undefined);
   }, []);
-  const asTyped = useCallback((typed: string) => typedStep(typed, choices.options.map(set), readStep && isEquation(typed) ? keyOf(readStep, typed) : null), [choices.options, readStep]);
+  const { counted, options } = choices;
+  const asTyped = useCallback((typed: string) => {
+    // Before the list is there, words would be taken for free ones that the list may hold.
+    if (!counted && !isEquation(typed)) return null;
+    return typedStep(typed, options.map(set), readStep && isEquation(typed) ? keyOf(readStep, typed) : null);
+  }, [counted, options, readStep]);
   return <ChoicePicker choices={choices} recent="step" placeholder="equation, species, class or bond" asTyped={asTyped} onType={onType} {...rest} />;
 }
 

@@ -1,4 +1,5 @@
 import { useMemo } from 'react';
+import { energyTypes, kinds, provenances, sampleTypes, scopes, siteTypes } from '#shared/domain/kinds.ts';
 import type { AllFilterCounts, EntryFilter } from '#shared/contracts/entry-search.ts';
 import type { Vocabulary } from '#shared/contracts/vocabulary.ts';
 import { Picker, type PickerOption } from '#client/ui/picker.tsx';
@@ -63,11 +64,19 @@ function optionsFor(
     ? (collections ?? []).map(({ id, name }) => ({ value: id, label: name }))
     : (counts?.[filter] ?? []).map(({ value, label, count }) => ({ value, label: filter === 'source' ? label : worded(filter, value, label), count, also: alsoOf(filter, value, terms) }));
   const known = new Set(options.map(({ value }) => value));
-  const rest = chosen.filter((value) => !known.has(value)).map((value) => ({
-    value, label: filter === 'collection' ? 'a collection of yours' : valueWords(filter, value, vocabulary), ...(counts && filter !== 'collection' ? { count: 0 } : {}),
+  // What finds nothing now can be asked all the same: the answer says what stands against it. Long lists keep it for those who type.
+  const others = counts ? [...closedLists[filter] ?? [], ...terms.map(({ code }) => code)] : [];
+  const rest = [...new Set([...chosen, ...others])].filter((value) => !known.has(value)).map((value) => ({
+    value, label: filter === 'collection' ? 'a collection of yours' : valueWords(filter, value, vocabulary), also: alsoOf(filter, value, terms),
+    ...(counts && filter !== 'collection' ? { count: 0 } : {}), ...(terms.length > 0 ? { deep: true } : {}),
   }));
   return [...options, ...rest];
 }
+
+/** Filters whose values are known beforehand, whatever the store holds. */
+const closedLists: Partial<Record<ListFilter, readonly string[]>> = {
+  kind: kinds, site: siteTypes, sampleType: sampleTypes, scope: scopes, energyType: energyTypes, provenance: provenances, hasUncertainty: ['true', 'false'],
+};
 
 /** The words of the sentence where it has its own; else those that came with the count. */
 function worded(filter: ListFilter, value: string, label: string): string {
