@@ -67,7 +67,7 @@ describe('accessibility', () => {
     }
     await context.close();
     expect(found).toEqual([]);
-  });
+  }, 300_000);
 
   it('holds on the sign-in page', async () => {
     const { context, page } = await open('light', 1440, null);
