@@ -6,7 +6,7 @@ type Fuse = typeof import('fuse.js').default;
 let loading: Promise<Fuse> | null = null;
 
 /** Letters as they are compared: without accents, case, and the differences between dashes and between small and plain digits. */
-export function foldLetters(text: string): string {
+function foldLetters(text: string): string {
   return text.normalize('NFKD').replace(/\p{M}/gu, '').replace(/[\u2010-\u2015\u2212]/g, '-').toLowerCase().trim();
 }
 

@@ -1,7 +1,7 @@
 import { readStored, writeStored } from '#client/lib/local-storage.ts';
 
 /** How many choices of a list are remembered. */
-export const mostRecent = 5;
+const mostRecent = 5;
 
 const keyOf = (name: string): string => `sillstone.recent.${name}`;
 

@@ -156,3 +156,8 @@ const titles: Partial<Record<FilterName, string>> = {
   q: 'Containing', step: 'Elementary step', stepClass: 'Class of elementary step', species: 'Species', bond: 'Bond', cleavage: 'How the bond breaks', metal: 'Metal', formula: 'Formula',
   contains: 'Containing the metal', method: 'Method', methodClass: 'Method', methodFamily: 'Family of methods', yearFrom: 'Published', yearTo: 'Published', valueMin: 'Value', valueMax: 'Value',
 };
+
+/** What the filter by valid range left out without knowing. */
+export function statedRangeWords(count: number, validAt: number | undefined): string {
+  return `${count} measured ${count === 1 ? 'entry is' : 'entries are'} left out because the source states no valid range${validAt === undefined ? '' : `, so that it is not known whether the value holds at ${validAt} K`}.`;
+}

@@ -43,7 +43,7 @@ export function methodChoices({ filter, counts, vocabulary }: SentenceSource): C
 }
 
 /** A family of techniques in words: "DFT methods", "desorption methods". */
-export function familyWords(family: string): string {
+function familyWords(family: string): string {
   return `${family} methods`;
 }
 

@@ -77,7 +77,7 @@ function chosenStep(value: string, label: (step: string) => string): ChoiceOptio
 }
 
 /** A bond with a dash between its atoms. */
-export function bondWords(bond: string): string {
+function bondWords(bond: string): string {
   return bond.replaceAll('-', '–');
 }
 

@@ -1,5 +1,5 @@
 import { useInfiniteQuery, useQuery } from '@tanstack/react-query';
-import { useEffect, useMemo, useState } from 'react';
+import { lazy, Suspense, useEffect, useMemo, useState } from 'react';
 import { announce } from '#client/lib/announce.ts';
 import { useInstrument } from '#client/lib/instrument.ts';
 import { useTitle } from '#client/lib/use-title.ts';
@@ -8,6 +8,7 @@ import { LoadMore } from '#client/ui/pagination.tsx';
 import { ErrorState, LoadingState } from '#client/ui/states.tsx';
 import { entrySearchOptions, filterCountsOptions, summaryOptions, vocabularyOptions } from '#client/features/entries/api.ts';
 import { useChosen } from '#client/features/entries/chosen.ts';
+import { statedRangeWords } from '#client/features/entries/filter-words.ts';
 import { useEntrySearchState } from '#client/features/entries/search-state.ts';
 import { ChosenTray } from '#client/features/entries/components/chosen-tray.tsx';
 import { QuerySentence } from '#client/features/entries/components/query-sentence.tsx';
@@ -17,9 +18,11 @@ import { ResultTable } from '#client/features/entries/components/result-table.ts
 import { SearchBox } from '#client/features/entries/components/search-box.tsx';
 import { SearchNotes, SpellingLine } from '#client/features/entries/components/search-notes.tsx';
 import { SummaryLine } from '#client/features/entries/components/summary-line.tsx';
-import { statedRangeWords, ZeroResults } from '#client/features/entries/components/zero-results.tsx';
 import { Collect } from '#client/routes/collections/collect.tsx';
 import { useOwnCollections } from './own-collections.ts';
+
+/** Loaded only for a question that finds nothing. */
+const ZeroResults = lazy(async () => ({ default: (await import('#client/features/entries/components/zero-results.tsx')).ZeroResults }));
 
 /** The search: a question as a sentence, and the entries that answer it. */
 export function Component() {
@@ -64,10 +67,12 @@ export function Component() {
         : !page ? <LoadingState what="entries" rows={10} />
           : page.total === 0 ? (
             <div className="section-line">
-              <ZeroResults
-                filter={filter} emptiedBy={page.emptiedBy} nearMisses={page.nearMisses ?? []} withoutStatedRange={page.withoutStatedRange} unit={unit} vocabulary={vocabulary}
-                onChange={changeFilter} onClear={clearFilter}
-              />
+              <Suspense fallback={<LoadingState what="what lies near" rows={3} />}>
+                <ZeroResults
+                  filter={filter} emptiedBy={page.emptiedBy} nearMisses={page.nearMisses ?? []} withoutStatedRange={page.withoutStatedRange} unit={unit} vocabulary={vocabulary}
+                  onChange={changeFilter} onClear={clearFilter}
+                />
+              </Suspense>
             </div>
           ) : (
             <>

@@ -27,7 +27,7 @@ export function entryColumns(view: RowView, grouping: Grouping, value: Heading, 
   const naming: ColumnName = grouping === 'surface' ? 'step' : 'surface';
   const column = (id: ColumnName, rest: Partial<DataColumn<EntryRow>> & Pick<DataColumn<EntryRow>, 'cell'>): DataColumn<EntryRow> =>
     ({ id, header: columnWords[id], ...(columnSort[id] ? { sortKey: columnSort[id] } : {}), ...rest });
-  const unit = (text: string | null) => (text ? { unit: <UnitText unit={text} /> } : {});
+  const unit = (text: string | null) => (text && text !== '1' ? { unit: <UnitText unit={text} /> } : {});
   const named = (id: ColumnName, words: (entry: Entry) => ReactNode): Pick<DataColumn<EntryRow>, 'cell' | 'rowHeader'> => (id === naming
     ? { rowHeader: true, cell: ({ entry }) => <Link to={`/entries/${entry.accession}`}>{words(entry)}</Link> }
     : { cell: ({ entry }) => words(entry) });

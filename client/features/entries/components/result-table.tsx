@@ -47,27 +47,31 @@ export function ResultTable({ entries, heads, searchedWords, dense, kinds, group
     const key = groupKey(entry, grouping);
     return { key, label: <GroupHeading entry={entry} head={headOf.get(key)} grouping={grouping} unit={unit} /> };
   }), [grouping, headOf, unit]);
+  const kMixed = sort.endsWith('k') && view.kUnit === null && entries.some(({ kAtT }) => kAtT);
   return (
-    <DataTable
-      caption="Entries found"
-      columns={columns}
-      rows={rows}
-      rowId={rowId}
-      rowLabel={rowLabel}
-      hidden={hidden}
-      sort={sort === usualSort ? null : tableSort(sort)}
-      onSort={(next) => onSort((next && sortOf(next)) ?? usualSort)}
-      chosen={accessions}
-      onChosen={(next) => setChosen(next, entries)}
-      group={group}
-      activeId={activeId}
-      onActive={onActive}
-      onOpen={({ entry }) => void navigate(`/entries/${entry.accession}`)}
-      stanza={(row) => <Stanza row={row} view={{ ...view, valueUnit: null, valueDecimals: 0, valuePower: false, kUnit: null }} grouping={grouping} />}
-      stale={stale}
-      dense={dense}
-      stanzaSort={false}
-    />
+    <>
+      {kMixed && <p className="py-1 text-second">Rate constants of different units cannot be compared: they are in order within each unit, one unit after another.</p>}
+      <DataTable
+        caption="Entries found"
+        columns={columns}
+        rows={rows}
+        rowId={rowId}
+        rowLabel={rowLabel}
+        hidden={hidden}
+        sort={sort === usualSort ? null : tableSort(sort)}
+        onSort={(next) => onSort((next && sortOf(next)) ?? usualSort)}
+        chosen={accessions}
+        onChosen={(next) => setChosen(next, entries)}
+        group={group}
+        activeId={activeId}
+        onActive={onActive}
+        onOpen={({ entry }) => void navigate(`/entries/${entry.accession}`)}
+        stanza={(row) => <Stanza row={row} view={{ ...view, valueUnit: null, valueDecimals: 0, valuePower: false, kUnit: null }} grouping={grouping} />}
+        stale={stale}
+        dense={dense}
+        stanzaSort={false}
+      />
+    </>
   );
 }
 
@@ -80,22 +84,22 @@ function Stanza({ row, view, grouping }: { row: EntryRow; view: RowView; groupin
   const { entry, figure } = row;
   return (
     <>
-      <p className="stanza-head">
-        <Link to={`/entries/${entry.accession}`}>
-          {grouping !== 'step' && entry.step && <><Equation equation={entry.step.equation} />{' on '}</>}
-          {entry.surface ? <SurfaceLabel label={entry.surface.label} /> : 'no surface'}
-        </Link>
-      </p>
-      <div className="stanza-line">
-        <BarrierCell entry={entry} view={view} />
-        <span className="text-lead"><ValueCell figure={figure} view={view} /></span>
-        <span className="text-second"><UncertaintyCell figure={figure} /></span>
-      </div>
-      <p className="printed"><PrintedText figure={figure} /></p>
-      {entry.kAtT && <p className="stanza-quiet">k at {view.temperatureK} K: <RateCell entry={entry} view={view} /></p>}
-      <p className="stanza-quiet"><MethodCell entry={entry} /></p>
-      <p className="stanza-quiet"><SourceCell entry={entry} /></p>
-      {entry.matches && entry.matches.length > 0 && <p className="stanza-quiet"><FoundIn matches={entry.matches} /></p>}
+        <p className="stanza-head">
+          <Link to={`/entries/${entry.accession}`}>
+            {grouping !== 'step' && entry.step && <><Equation equation={entry.step.equation} />{' on '}</>}
+            {entry.surface ? <SurfaceLabel label={entry.surface.label} /> : 'no surface'}
+          </Link>
+        </p>
+        <div className="stanza-line">
+          <BarrierCell entry={entry} view={view} />
+          <span className="text-lead"><ValueCell figure={figure} view={view} /></span>
+          <span className="text-second"><UncertaintyCell figure={figure} /></span>
+        </div>
+        <p className="printed"><PrintedText figure={figure} /></p>
+        {entry.kAtT && <p className="stanza-quiet">k at {view.temperatureK} K: <RateCell entry={entry} view={view} /></p>}
+        <p className="stanza-quiet"><MethodCell entry={entry} /></p>
+        <p className="stanza-quiet"><SourceCell entry={entry} /></p>
+        {entry.matches && entry.matches.length > 0 && <p className="stanza-quiet"><FoundIn matches={entry.matches} /></p>}
     </>
   );
 }

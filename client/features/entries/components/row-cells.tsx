@@ -28,7 +28,7 @@ export function BarrierCell({ entry, view }: { entry: Entry; view: RowView }) {
 export function ValueCell({ figure, view }: { figure: RowFigure | null; view: RowView }) {
   if (!figure) return <Absent words="not given yet" />;
   const { shown: { quantity, unit }, number, low, high } = figure;
-  const tail = view.valueUnit === null && unit ? <span className="text-second">{' '}<UnitText unit={unit} /></span> : null;
+  const tail = view.valueUnit === null && unit && unit !== '1' ? <span className="text-second">{' '}<UnitText unit={unit} /></span> : null;
   if (quantity.bound === 'range' && low && high) {
     return <span className="whitespace-nowrap"><b className="font-semibold"><NumberText number={low} />–<NumberText number={high} /></b>{tail}</span>;
   }

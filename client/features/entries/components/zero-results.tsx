@@ -5,7 +5,7 @@ import type { Vocabulary } from '#shared/contracts/vocabulary.ts';
 import { Button } from '#client/ui/button.tsx';
 import { EmptyState } from '#client/ui/states.tsx';
 import type { SearchPage } from '../api.ts';
-import { filterWords, joinWords } from '../filter-words.ts';
+import { filterWords, joinWords, statedRangeWords } from '../filter-words.ts';
 import { filtersInForce, type FilterName } from '../search-state.ts';
 
 interface ZeroResultsProps {
@@ -28,7 +28,7 @@ export function ZeroResults({ filter, emptiedBy, nearMisses, withoutStatedRange,
   const known = [...(emptiedBy ?? [])].filter(({ filter: name }, at, all) => all.findIndex((one) => namesOf(one.filter)[0] === namesOf(name)[0]) === at).sort((a, b) => b.totalWithout - a.totalWithout);
   const helps = known.filter(({ totalWithout }) => totalWithout > 0);
   return (
-    <EmptyState title="No accepted entry answers this question" actions={<Button onClick={onClear}>Take all filters away</Button>}>
+    <EmptyState title={filter.state?.some((state) => state !== 'accepted') ? 'No entry answers this question' : 'No accepted entry answers this question'} actions={<Button onClick={onClear}>Take all filters away</Button>}>
       {helps.length > 0 ? (
         <>
           <p>{inForce.length === 1 ? 'This filter empties the list:' : 'Each of these filters empties the list together with the others:'}</p>
@@ -91,9 +91,4 @@ function namesOf(name: string): FilterName[] {
   if (name.startsWith('year')) return ['yearFrom', 'yearTo'];
   if (name === 'validFrom' || name === 'validTo') return ['validFrom', 'validTo'];
   return [name as FilterName];
-}
-
-/** What the filter by valid range left out without knowing. */
-export function statedRangeWords(count: number, validAt: number | undefined): string {
-  return `${count} measured ${count === 1 ? 'entry is' : 'entries are'} left out because the source states no valid range${validAt === undefined ? '' : `, so that it is not known whether the value holds at ${validAt} K`}.`;
 }
