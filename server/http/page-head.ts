@@ -36,7 +36,7 @@ export function withHead(html: string, head: PageHead): string {
     ...(head.data ? [dataBlock(head.data)] : []),
   ];
   // A function gives the replacement, since "$&" in a title would otherwise be taken for a command.
-  return html.replace(/<title>[^<]*<\/title>\s*/, '').replace(/<meta name="description"[^>]*>\s*/, '').replace('</head>', () => `${lines.map((line) => `  ${line}\n`).join('')}  </head>`);
+  return html.replace(/<title>[^<]*<\/title>\s*/, '').replace(/<meta name="description"[^>]*>\s*/, '').replace('</head>', () => `  ${lines.join('\n    ')}\n  </head>`);
 }
 
 /** The page as it is, kept out of search services. */

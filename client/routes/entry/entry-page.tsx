@@ -4,6 +4,7 @@ import { printSearch } from '#shared/contracts/entry-search.ts';
 import type { EntryDetail } from '#shared/contracts/entries.ts';
 import { readAccession } from '#shared/domain/accession.ts';
 import { stateWords, type State } from '#shared/domain/states.ts';
+import { useSession } from '#client/app/session.ts';
 import { formatDate } from '#client/lib/dates.ts';
 import { useInstrument } from '#client/lib/instrument.ts';
 import { useTitle } from '#client/lib/use-title.ts';
@@ -15,12 +16,15 @@ import { Tag, type TagKind } from '#client/ui/tag.tsx';
 import { entryOptions } from '#client/features/entries/api.ts';
 import { entryTitle } from '#client/features/entries/entry-words.ts';
 import { EntryActions } from '#client/features/entries/components/entry-actions.tsx';
+import { EntryChanges } from '#client/features/entries/components/entry-changes.tsx';
+import { EntryCite } from '#client/features/entries/components/entry-cite.tsx';
 import { EntryFacts } from '#client/features/entries/components/entry-facts.tsx';
 import { EntryHistory } from '#client/features/entries/components/entry-history.tsx';
 import { EntryNotices } from '#client/features/entries/components/entry-notices.tsx';
+import { EntryReverse, reverseChecks } from '#client/features/entries/components/entry-reverse.tsx';
+import { EntryScale } from '#client/features/entries/components/entry-scale.tsx';
 import { EntryDerivations, EntryQuantities } from '#client/features/entries/components/entry-quantities.tsx';
 import { RatePlot } from '#client/features/entries/components/rate-plot.tsx';
-import { RelatedEntries } from '#client/features/entries/components/related-entries.tsx';
 import { SourceCard } from '#client/features/entries/components/source-card.tsx';
 import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { Collect } from '#client/routes/collections/collect.tsx';
@@ -43,6 +47,7 @@ function Missing({ detail }: { detail: string }) {
 function EntryPage({ accession, version }: { accession: string; version: number | null }) {
   const { temperatureK, unit } = useInstrument();
   const { data: entry, error, refetch } = useQuery(entryOptions(accession, version, temperatureK));
+  const { me } = useSession();
   useTitle(entry ? entryTitle(entry) : `Entry ${accession}`);
   if (!entry) {
     return (
@@ -64,18 +69,20 @@ function EntryPage({ accession, version }: { accession: string; version: number 
           <EntryFacts entry={entry} />
           <section>
             <h2 className="pb-2">Checks</h2>
-            <CheckBars checks={entry.checks} none="None was raised: nothing in the record or in the store speaks against the value." />
+            <CheckBars checks={[...entry.checks, ...reverseChecks(entry, unit)]} none="None was raised: nothing in the record or in the store speaks against the value." />
           </section>
         </div>
         <div className="flex min-w-0 flex-col gap-9">
           <RatePlot entry={entry} temperatureK={temperatureK} />
-          <SourceCard entry={entry} temperatureK={temperatureK} />
-          <EntryHistory entry={entry} unit={unit} />
+          <SourceCard entry={entry} />
+          <EntryCite entry={entry} temperatureK={temperatureK} demonstration={me?.demonstration ?? false} />
+          <EntryHistory entry={entry} />
         </div>
       </div>
-      <div className="grid gap-x-10 gap-y-9 pt-10 wide:grid-cols-2">
-        <RelatedEntries title="The same elementary step and surface" entries={entry.sameStepAndSurface} unit={unit} none="No other accepted entry for this elementary step on this surface." />
-        <RelatedEntries title="The reverse elementary step" entries={entry.reverse} unit={unit} none="No accepted entry for the reverse on this surface." />
+      <EntryChanges entry={entry} unit={unit} />
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-x-10 gap-y-9 pt-10 wide:grid-cols-[repeat(2,minmax(0,1fr))]">
+        <EntryScale entry={entry} unit={unit} />
+        <EntryReverse entry={entry} unit={unit} />
       </div>
     </article>
   );

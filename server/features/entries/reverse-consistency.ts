@@ -59,8 +59,8 @@ function assumptionOf(own: Direction, reverse: Direction, type: EnergyType, gasM
   const parts: string[] = [];
   if (own.exponent !== 0 || reverse.exponent !== 0) parts.push(`Local energies E + nRT at ${temperatureK} K.`);
   if (type === 'arrhenius' && gasMoleChange !== 0) {
-    const shift = temperatureK === null ? '' : ` (${((-gasMoleChange * R * temperatureK) / 1000).toFixed(1).replace('-', '−')} kJ/mol at ${temperatureK} K)`;
-    parts.push(`A gas takes part: both energies are taken on pressures. On concentrations ΔH° − ΔνRT stands for ΔH°, with −ΔνRT${shift}.`);
+    const shift = temperatureK === null ? '' : `; −ΔνRT is ${((-gasMoleChange * R * temperatureK) / 1000).toFixed(1).replace('-', '−')} kJ/mol at ${temperatureK} K`;
+    parts.push(`A gas takes part: both energies are taken on pressures. On concentrations E_f − E_r is ΔH° − ΔνRT${shift}.`);
   }
   if (type === 'gibbs') parts.push('The Gibbs energies are taken to hold at one temperature.');
   if (own.site !== reverse.site) parts.push('One of the two does not state its site.');

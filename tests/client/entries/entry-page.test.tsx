@@ -5,27 +5,8 @@ import { createMemoryRouter, RouterProvider } from 'react-router-dom';
 import { afterEach, describe, expect, it, vi } from 'vitest';
 import type { EntryDetail } from '#shared/contracts/entries.ts';
 import { Component as EntryPage } from '#client/routes/entry/entry-page.tsx';
-import { energy, sampleEntry } from './entry-samples.ts';
-
-const factor = {
-  ...energy(), symbol: 'preExponential' as const, energyType: null, asPrinted: '1.0e13', unitAsPrinted: 's-1', unit: 's-1', value: 1e13, reportedUncertainty: null,
-  uncertaintyKind: 'none' as const, standardUncertainty: null, significantDigits: 2, derivation: [],
-};
-
-/** An accepted entry beside the one shown. */
-const related = { accession: '222-223-9', asPrinted: '< 30 kcal/mol', label: 'Sørlie 1999', energyKJPerMol: 125.52, computed: false, bound: '<' as const, uEnergyKJPerMol: null, energyType: 'arrhenius' as const, scope: 'elementary' as const, promoters: [], alike: true, validRange: null, rate: null };
-
-function detail(change: Partial<EntryDetail> = {}): EntryDetail {
-  return {
-    ...sampleEntry('222-222-2', { quantities: [energy(), factor], kAtT: { temperatureK: 700, value: 1e13 * Math.exp(-186000 / (8.31446261815324 * 700)), unit: 's-1', uLnK: null, extrapolated: true } }),
-    sourceDetail: { citation: 'Vantongeren, L. (1994). An invented paper. https://doi.org/10.5555/invented.1', bibtex: '@article{vantongeren1994}', ris: 'TY  - JOUR' },
-    history: [{ at: '2026-03-14T10:00:00Z', by: 'I. Okonjo-Vale', what: 'Version 1 accepted: figures agree', version: 1 }, { at: '2026-02-01T10:00:00Z', by: 'T. Adeyemi-Holt', what: 'Submitted', version: null }],
-    versions: [{ version: 1, state: 'accepted', acceptedAt: '2026-03-14T10:00:00Z' }],
-    revisions: [{ revision: 1, version: 1, state: 'accepted', at: '2026-03-14T10:00:00Z' }],
-    sameStepAndSurface: [related],
-    reverse: [], submission: null, ...change,
-  };
-}
+import { entryDetail as detail } from './entry-detail.ts';
+import { energy } from './entry-samples.ts';
 
 function open(address: string, answer: unknown, status = 200) {
   const fetched = vi.fn((url: string, init?: RequestInit) => Promise.resolve(new Response(

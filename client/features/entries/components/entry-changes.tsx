@@ -1,6 +1,6 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
-import { useId } from 'react';
-import { useSearchParams } from 'react-router-dom';
+import { useEffect, useId, useRef } from 'react';
+import { useLocation, useSearchParams } from 'react-router-dom';
 import type { EnergyUnit } from '#shared/contracts/accounts.ts';
 import { getEntryChanges, type EntryChanges as Changes, type EntryDetail } from '#shared/contracts/entries.ts';
 import type { Quantity } from '#shared/contracts/quantities.ts';
@@ -25,45 +25,61 @@ type Comparable = EntryDetail['revisions'][number];
 const nameOf = ({ version, revision }: Pick<Comparable, 'version' | 'revision'>) => (version === null ? `r${revision}` : String(version));
 const wordsOf = ({ version, revision }: Pick<Comparable, 'version' | 'revision'>) => (version === null ? `revision ${revision}` : `version ${version}`);
 
-/** Two versions of the entry side by side, chosen by two pickers; the choice is in the address, so that a link shows the same. */
-export function EntryChanges({ entry, unit }: { entry: EntryDetail; unit: EnergyUnit }) {
+/** The pair of versions in the address, and what changes it. */
+function useChosenPair() {
   const [params, setParams] = useSearchParams();
-  const heading = useId();
-  const { revisions, accession } = entry;
-  const names = revisions.map(nameOf);
-  const shownName = nameOf(entry);
-  const own = Math.max(0, names.indexOf(shownName));
-  const from = params.get('from');
-  const to = params.get('to');
-  const choose = (change: { from: string; to: string } | null) => setParams((before) => {
+  const choose = (change: { from: string; to: string } | null, opened = false) => setParams((before) => {
     const next = new URLSearchParams(before);
     for (const name of ['from', 'to'] as const) {
       if (change) next.set(name, change[name]);
       else next.delete(name);
     }
     return next;
-  }, { replace: true, preventScrollReset: true });
-  if (revisions.length < 2 && from === null && to === null) return null;
+  }, { replace: true, preventScrollReset: true, state: opened ? { opened: 'changes' } : null });
+  return { pair: { from: params.get('from'), to: params.get('to') }, choose };
+}
+
+/** What is compared when nothing is named: the version shown with the one before it, or the first with the one after. */
+function usualPair(entry: EntryDetail): { from: string; to: string; words: string } {
+  const names = entry.revisions.map(nameOf);
+  const shown = nameOf(entry);
+  const own = Math.max(0, names.indexOf(shown));
   const before = names[own - 1];
-  // The first version has none before it: the next one is set beside it instead.
-  const usual = before === undefined ? { from: shownName, to: names[own + 1] ?? shownName } : { from: before, to: shownName };
-  if (from === null && to === null) {
-    return (
-      <p className="pt-3 no-print">
-        <Button onClick={() => choose(usual)}>{before === undefined ? 'Compare with the version after' : 'Compare with the version before'}</Button>
-      </p>
-    );
-  }
-  const chosen = { from: from ?? usual.from, to: to ?? usual.to };
+  return before === undefined ? { from: shown, to: names[own + 1] ?? shown, words: 'Compare with the version after' } : { from: before, to: shown, words: 'Compare with the version before' };
+}
+
+/** Opens the comparison; nothing where there is only one version, or where it is open. */
+export function CompareVersions({ entry }: { entry: EntryDetail }) {
+  const { pair, choose } = useChosenPair();
+  if (entry.revisions.length < 2 || pair.from !== null || pair.to !== null) return null;
+  const { words, from, to } = usualPair(entry);
+  return <p className="pt-3 no-print"><Button onClick={() => choose({ from, to }, true)}>{words}</Button></p>;
+}
+
+/** Two versions of the entry side by side, chosen by two pickers; the choice is in the address, so that a link shows the same. */
+export function EntryChanges({ entry, unit }: { entry: EntryDetail; unit: EnergyUnit }) {
+  const { pair, choose } = useChosenPair();
+  const heading = useRef<HTMLHeadingElement>(null);
+  const id = useId();
+  const open = pair.from !== null || pair.to !== null;
+  const opened = (useLocation().state as { opened?: unknown } | null)?.opened === 'changes';
+  // Opened by a press, it takes the focus, since it stands elsewhere than the button did.
+  useEffect(() => {
+    if (open && opened) heading.current?.focus();
+  }, [open, opened]);
+  if (!open) return null;
+  const { revisions, accession } = entry;
+  const usual = usualPair(entry);
+  const chosen = { from: pair.from ?? usual.from, to: pair.to ?? usual.to };
   const choices: Choice[] = revisions.map((one) => ({ value: nameOf(one), label: `${wordsOf(one)}, ${stateWords[one.state]}, ${formatDate(one.at)}` }));
   // What a link names and the viewer may not see stays in the picker, so that it does not say another than the one asked for.
-  const withNamed = (name: string): Choice[] => (names.includes(name) ? choices : [{ value: name, label: `${name.slice(0, 8)}, not among those you may see` }, ...choices]);
+  const withNamed = (name: string): Choice[] => (choices.some(({ value }) => value === name) ? choices : [{ value: name, label: `${name.slice(0, 8)}, not among those you may see` }, ...choices]);
   return (
-    <section aria-labelledby={heading} className="pt-5">
-      <h3 id={heading} className="pb-2">Two versions side by side</h3>
+    <section aria-labelledby={id} className="pt-9">
+      <h2 id={id} ref={heading} tabIndex={-1} className="pb-2">Two versions side by side</h2>
       <div className="flex flex-wrap items-end gap-3 pb-3 no-print">
-        <SelectField label="From" className="min-w-0 grow" choices={withNamed(chosen.from)} value={chosen.from} onChange={(event) => choose({ ...chosen, from: event.target.value })} />
-        <SelectField label="To" className="min-w-0 grow" choices={withNamed(chosen.to)} value={chosen.to} onChange={(event) => choose({ ...chosen, to: event.target.value })} />
+        <SelectField label="From" className="min-w-0 max-w-full" choices={withNamed(chosen.from)} value={chosen.from} onChange={(event) => choose({ ...chosen, from: event.target.value })} />
+        <SelectField label="To" className="min-w-0 max-w-full" choices={withNamed(chosen.to)} value={chosen.to} onChange={(event) => choose({ ...chosen, to: event.target.value })} />
         <Button onClick={() => choose(null)}>Close</Button>
       </div>
       <Difference accession={accession} from={chosen.from} to={chosen.to} unit={unit} />

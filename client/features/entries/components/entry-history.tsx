@@ -1,12 +1,11 @@
 import { Link } from 'react-router-dom';
 import { stateWords } from '#shared/domain/states.ts';
 import type { EntryDetail } from '#shared/contracts/entries.ts';
-import type { EnergyUnit } from '#shared/contracts/accounts.ts';
 import { formatDate } from '#client/lib/dates.ts';
-import { EntryChanges } from './entry-changes.tsx';
+import { CompareVersions } from './entry-changes.tsx';
 
 /** What happened to the entry, newest first, and its public versions. */
-export function EntryHistory({ entry, unit }: { entry: EntryDetail; unit: EnergyUnit }) {
+export function EntryHistory({ entry }: { entry: EntryDetail }) {
   const { history, versions, accession, version } = entry;
   const lines = [...history].reverse();
   return (
@@ -34,7 +33,7 @@ export function EntryHistory({ entry, unit }: { entry: EntryDetail; unit: Energy
           ))}
         </p>
       )}
-      <EntryChanges entry={entry} unit={unit} />
+      <CompareVersions entry={entry} />
     </section>
   );
 }

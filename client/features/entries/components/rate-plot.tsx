@@ -1,21 +1,33 @@
+import { useState } from 'react';
 import { rateParameters } from '#shared/assessment/rate-at-temperature.ts';
-import type { Entry } from '#shared/contracts/entries.ts';
+import type { Entry, EntryDetail } from '#shared/contracts/entries.ts';
 import { lnRateAt, uLnRateAt } from '#shared/kinetics/arrhenius.ts';
 import { R } from '#shared/kinetics/constants.ts';
 import { ArrheniusPlot, type ArrheniusLine } from '#client/ui/arrhenius-plot.tsx';
 import { setNumber } from '#client/lib/numbers.ts';
+import { Checkbox } from '#client/ui/choice.tsx';
 import { Tag } from '#client/ui/tag.tsx';
 import { UnitText } from '#client/ui/unit-text.tsx';
 import { NumberText } from '#client/ui/value.tsx';
 
 /** k against temperature where the entry holds A and E; why not where it does not. */
-export function RatePlot({ entry, temperatureK }: { entry: Entry; temperatureK: number }) {
+export function RatePlot({ entry, temperatureK }: { entry: EntryDetail; temperatureK: number }) {
+  const [withOthers, setWithOthers] = useState(false);
   const { kAtT } = entry;
   const line = lineOf(entry);
+  const others = linesOfOthers(entry);
+  const unlike = entry.sameStepAndSurface.filter(({ alike, rate }) => alike && rate !== null).length - others.length;
   return (
     <section>
       <h2 className="pb-2">Rate against temperature</h2>
-      {line && kAtT && <ArrheniusPlot lines={[line]} temperatureK={temperatureK} unit={kAtT.unit} />}
+      {line && kAtT && <ArrheniusPlot lines={withOthers ? [line, ...others] : [line]} temperatureK={temperatureK} unit={kAtT.unit} />}
+      {line && kAtT && others.length > 0 && (
+        <Checkbox
+          className="no-print" checked={withOthers} onChange={(event) => setWithOthers(event.target.checked)}
+          label={others.length === 1 ? 'Draw the other entry for this step and surface' : `Draw ${others.length} other entries for this step and surface`}
+          {...(unlike > 0 ? { hint: `${unlike === 1 ? 'One more has' : `${unlike} more have`} k in another unit.` } : {})}
+        />
+      )}
       {kAtT ? (
         <p className="pt-1">
           k at {kAtT.temperatureK} K: <b className="font-semibold"><NumberText number={setNumber(kAtT.value, { scientific: true, digits: 3 })} /></b>{' '}
@@ -46,6 +58,22 @@ function whyNot({ quantities }: Entry): string {
   if (!energy) return 'No activation energy is reported, so that the rate constant cannot be evaluated.';
   if (factor.value === null) return 'The pre-exponential factor could not be converted, so that the rate constant cannot be evaluated.';
   return 'The rate constant cannot be evaluated: a bound or a range is printed for the activation energy or the pre-exponential factor.';
+}
+
+/** Most lines beside the entry's own: more could not be told apart. */
+const mostOthers = 11;
+
+/** The lines of entries of the same kind whose k has the same unit. */
+function linesOfOthers({ sameStepAndSurface, kAtT }: EntryDetail): ArrheniusLine[] {
+  return sameStepAndSurface.flatMap(({ accession, label, alike, rate, energyKJPerMol, validRange }) => {
+    if (!alike || rate === null || energyKJPerMol === null || rate.unit !== kAtT?.unit) return [];
+    const lnT0 = Math.log(rate.referenceTemperatureK);
+    const energyOverR = (energyKJPerMol * 1000) / R;
+    return [{
+      id: accession, label, lnK: (temperatureK: number) => lnRateAt(rate.lnPreExponential, rate.exponent, lnT0, energyOverR, temperatureK),
+      range: validRange && validRange.min !== null && validRange.max !== null ? { min: validRange.min, max: validRange.max } : null,
+    }];
+  }).slice(0, mostOthers);
 }
 
 function lineOf(entry: Entry): ArrheniusLine | null {

@@ -1,13 +1,12 @@
 import { Link } from 'react-router-dom';
 import type { EntryDetail } from '#shared/contracts/entries.ts';
-import { LinkButton } from '#client/ui/button.tsx';
-import { exportAddress } from '../api.ts';
+import { saveFile } from '#client/lib/save-file.ts';
+import { Button, LinkButton } from '#client/ui/button.tsx';
 import { CopyButton } from './copy-button.tsx';
 
-/** The source of an entry: its formatted citation, and what can be taken along. */
-export function SourceCard({ entry, temperatureK }: { entry: EntryDetail; temperatureK: number }) {
-  const { source, sourceDetail, accession, actions } = entry;
-  const exportable = actions.includes('export');
+/** The source of an entry: its formatted citation, to copy or to take along for a reference manager. */
+export function SourceCard({ entry }: { entry: EntryDetail }) {
+  const { source, sourceDetail } = entry;
   return (
     <section>
       <h2 className="pb-2">Source</h2>
@@ -18,11 +17,13 @@ export function SourceCard({ entry, temperatureK }: { entry: EntryDetail; temper
           <p className="pt-1"><Link to={`/sources/${source.id}`}>All entries from this source</Link></p>
         </>
       )}
-      <div className="flex flex-wrap gap-3 pt-3 no-print">
-        {sourceDetail && <CopyButton label="Copy citation" copied="Citation copied." text={sourceDetail.citation} />}
-        {exportable && <a className="button" href={exportAddress('bib', temperatureK, { accession: [accession] })} download>BibTeX</a>}
-        {exportable && <a className="button" href={exportAddress('zip', temperatureK, { accession: [accession] })} download>Export</a>}
-      </div>
+      {source && sourceDetail && (
+        <div className="flex flex-wrap gap-3 pt-3 no-print">
+          <CopyButton label="Copy citation" copied="Citation copied." text={sourceDetail.citation} />
+          <Button onClick={() => saveFile(`${source.key}.bib`, sourceDetail.bibtex, 'application/x-bibtex')}>BibTeX</Button>
+          <Button onClick={() => saveFile(`${source.key}.ris`, sourceDetail.ris, 'application/x-research-info-systems')}>RIS</Button>
+        </div>
+      )}
     </section>
   );
 }
