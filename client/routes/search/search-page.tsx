@@ -58,7 +58,7 @@ export function Component() {
           label="Also containing" placeholder="also containing: step edge, potassium, author …" maxLength={400}
           value={filter.q ?? ''} onChange={(q) => changeFilter({ q: q || undefined }, true)}
         />
-        {page && <p className="text-second">{`${page.total} of ${page.all} entries · filters live in the address bar`}</p>}
+        {page && <p className="text-second">{filter.state ? 'Entries that are not accepted are marked; they are not public.' : `${page.total} of ${page.all} entries · filters live in the address bar`}</p>}
         {(stale || (search.isFetching && !search.isFetchingNextPage && page)) && <p className="text-second" role="status">Searching</p>}
       </div>
       <SearchNotes ignored={ignored} notes={page?.notes ?? []} />

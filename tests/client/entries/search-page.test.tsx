@@ -135,6 +135,14 @@ describe('rows', () => {
     expect(within(other).getByText('not reported')).toBeTruthy();
   });
 
+  it('say their state where they are not accepted', async () => {
+    searchServer(() => ({ entries: [{ ...ru, state: 'returned' }, ni] }));
+    open('/search?state=returned&state=accepted');
+    const row = (await screen.findByRole('link', { name: 'Ru(0001)' })).closest('tr') as HTMLElement;
+    expect(within(row).getByText('returned')).toBeTruthy();
+    expect(screen.getByText('Entries that are not accepted are marked; they are not public.')).toBeTruthy();
+  });
+
   it('keep their choice when the order and the filters change, until it is cleared', async () => {
     const server = searchServer((params) => ({ entries: params.get('sort') === 'energy' ? [ni, ru] : params.has('metal') ? [ni] : [ru, ni] }));
     const { user, address, router } = open();

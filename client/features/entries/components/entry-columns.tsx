@@ -13,7 +13,7 @@ import { barrierOf } from '../row-figures.ts';
 import type { EntryRow, RowView } from '../table-rows.ts';
 import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { FoundIn } from './found-in.tsx';
-import { BarrierCell, FactorCell, MethodCell, PrintedText, RangeCell, RateCell, SourceCell, UncertaintyCell, ValueCell } from './row-cells.tsx';
+import { BarrierCell, FactorCell, MethodCell, PrintedText, RangeCell, RateCell, SourceCell, StateTag, UncertaintyCell, ValueCell } from './row-cells.tsx';
 
 interface Heading {
   node: ReactNode;
@@ -29,7 +29,7 @@ export function entryColumns(view: RowView, grouping: Grouping, value: Heading, 
     ({ id, header: columnWords[id], ...(columnSort[id] ? { sortKey: columnSort[id] } : {}), ...rest });
   const unit = (text: string | null) => (text && text !== '1' ? { unit: <UnitText unit={text} /> } : {});
   const named = (id: ColumnName, words: (entry: Entry) => ReactNode): Pick<DataColumn<EntryRow>, 'cell' | 'rowHeader'> => (id === naming
-    ? { rowHeader: true, cell: ({ entry }) => <Link to={`/entries/${entry.accession}`}>{words(entry)}</Link> }
+    ? { rowHeader: true, cell: ({ entry }) => <><Link to={`/entries/${entry.accession}`}>{words(entry)}</Link><StateTag state={entry.state} /></> }
     : { cell: ({ entry }) => words(entry) });
   const columns = [
     column('step', { className: 'min-w-[10rem]', ...named('step', (entry) => (entry.step ? <Equation equation={entry.step.equation} /> : 'not given yet')) }),

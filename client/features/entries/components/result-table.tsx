@@ -12,7 +12,7 @@ import { entryRows, groupKey, headsByKey, rowView, type EntryRow, type RowView }
 import { entryColumns } from './entry-columns.tsx';
 import { FoundIn } from './found-in.tsx';
 import { GroupHeading } from './group-heading.tsx';
-import { BarrierCell, MethodCell, PrintedText, RateCell, SourceCell, UncertaintyCell, ValueCell } from './row-cells.tsx';
+import { BarrierCell, MethodCell, PrintedText, RateCell, SourceCell, StateTag, UncertaintyCell, ValueCell } from './row-cells.tsx';
 import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { valueHeading } from './value-heading.tsx';
 
@@ -89,6 +89,7 @@ function Stanza({ row, view, grouping }: { row: EntryRow; view: RowView; groupin
             {grouping !== 'step' && entry.step && <><Equation equation={entry.step.equation} />{' on '}</>}
             {entry.surface ? <SurfaceLabel label={entry.surface.label} /> : 'no surface'}
           </Link>
+        <StateTag state={entry.state} />
         </p>
         <div className="stanza-line">
           <BarrierCell entry={entry} view={view} />

@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { Entry } from '#shared/contracts/entries.ts';
+import { stateWords, type State } from '#shared/domain/states.ts';
 import { energyIn, fixed, setNumber } from '#client/lib/numbers.ts';
 import { SillGlyph } from '#client/ui/sill-glyph.tsx';
 import { Tag } from '#client/ui/tag.tsx';
@@ -8,6 +9,11 @@ import { Aligned, NumberText } from '#client/ui/value.tsx';
 import { methodTags, methodText } from '../entry-words.ts';
 import { asPrinted, barrierOf, factorOf, rangeText, shown, uncertaintyWords, type RowFigure } from '../row-figures.ts';
 import type { RowView } from '../table-rows.ts';
+
+/** The state of an entry that is not accepted; an accepted one needs no word. */
+export function StateTag({ state }: { state: State }) {
+  return state === 'accepted' ? null : <>{' '}<Tag kind={state === 'retracted' || state === 'rejected' ? 'refusal' : 'doubt'}>{stateWords[state]}</Tag></>;
+}
 
 /** The drawn barrier of a row, to the scale of the page. */
 export function BarrierCell({ entry, view }: { entry: Entry; view: RowView }) {
