@@ -43,6 +43,13 @@ describe('the Workbench in the browser', () => {
     await colleague.getByRole('img', { name: /^8 rate constants/ }).waitFor();
     expect(await result(colleague)).toBe(before);
 
+    await colleague.getByText('The plot as a table, and which points are used').click();
+    await colleague.getByRole('checkbox', { name: /^Point 1, 420 K/ }).uncheck();
+    await colleague.getByText('Row 1 left out of the fit.').waitFor();
+    expect(await result(colleague)).not.toBe(before);
+    await colleague.getByRole('textbox', { name: /^Rows left out/ }).fill('');
+    await expect.poll(() => result(colleague)).toBe(before);
+
     await colleague.getByRole('link', { name: /^Evaluate k at a temperature/ }).click();
     await colleague.getByRole('button', { name: 'Use 700 K' }).click();
     await expect.poll(() => result(colleague)).toMatch(/extrapolated.*700 K lies outside the valid range, 420 to 560 K/);
@@ -56,6 +63,21 @@ describe('the Workbench in the browser', () => {
     expect(await page.getByRole('form').isVisible()).toBe(false);
     expect(await page.getByRole('navigation', { name: 'Calculators' }).isVisible()).toBe(false);
     expect(await page.getByRole('region', { name: 'Given' }).innerText()).toMatch(/Pre-exponential factor A: 1e13 s/);
+  });
+
+  it('starts an entry from a calculation, with its figures as typed and saved as a draft', async () => {
+    const page = await openContext();
+    await page.goto(`${site.url}/sign-in`);
+    await page.getByLabel('E-mail', { exact: true }).fill('contributor@demo.sillstone.example');
+    await page.getByLabel('Password', { exact: true }).fill('stepping-stone');
+    await page.getByRole('button', { name: 'Sign in', exact: true }).click();
+    await page.waitForURL((url) => url.pathname !== '/sign-in');
+    await page.goto(`${site.url}/workbench/energy?value=24.0&standardUncertainty=0.5`);
+    await page.getByRole('link', { name: 'Use in a new entry' }).click();
+    await expect.poll(() => page.getByLabel('As printed', { exact: true }).inputValue()).toBe('24.0 ± 0.5');
+    expect(await page.getByLabel('Unit as printed', { exact: true }).inputValue()).toBe('kcal/mol');
+    await page.getByText(/^Saved/).first().waitFor();
+    await page.waitForURL(/\/contribute\/.+/);
   });
 
   it('answers while the server cannot be reached', async () => {

@@ -67,6 +67,16 @@ function readNumberField(field: NumberField, text: string, typed: Typed, reading
   else reading.input[field.key] = read.value;
 }
 
+/** Rows as people number them, "2, 5": counted from 0, or the sentence that says what is no number of a row. */
+export function rowsNamed(text: string): { rows: Set<number>; fault: string | null } {
+  const words = text.split(/[\s,;]+/).filter(Boolean);
+  const wrong = words.find((word) => !/^[1-9]\d{0,3}$/.test(word));
+  return {
+    rows: new Set(words.filter((word) => word !== wrong).map((word) => Number(word) - 1)),
+    fault: wrong === undefined ? null : `"${wrong.slice(0, 20)}" is no number of a row: write them as 2, 5.`,
+  };
+}
+
 function readTable(field: TableField, typed: Typed, reading: Reading): void {
   const param = paramOf(field);
   const rows = typed.tables[param] ?? [];
@@ -95,8 +105,10 @@ function readTable(field: TableField, typed: Typed, reading: Reading): void {
 
   const items: Record<string, unknown>[] = [];
   const used: number[] = [];
+  const leftOut = field.leftOutBy ? rowsNamed(typed.values[field.leftOutBy] ?? '') : { rows: new Set<number>(), fault: null };
+  if (leftOut.fault) reading.faults.push({ param: field.leftOutBy ?? param, message: leftOut.fault });
   rows.forEach((cells, row) => {
-    if (cells.every((cell) => cell.trim() === '')) return;
+    if (leftOut.rows.has(row) || cells.every((cell) => cell.trim() === '')) return;
     const values = field.columns.map((_, column) => readCell(row, column));
     const gap = field.columns.findIndex((column, at) => !column.optional && values[at] === null);
     if (gap >= 0) {

@@ -76,6 +76,8 @@ export interface TableField extends FieldBase {
   columns: readonly TableColumn[];
   /** Whether each row is one object of a list, or each column a list by itself. */
   by: 'rows' | 'columns';
+  /** The field, by its name in the address, that names rows to be left out by their numbers. */
+  leftOutBy?: string;
   /** Rows that are needed before anything can be computed. */
   least: number;
   most?: number;

@@ -109,6 +109,14 @@ describe('what cannot be calculated is named at its place', () => {
     expect(found.state === 'result' && found.notes).toEqual(['Row 3 is not used: k is empty.']);
   });
 
+  it('leaves rows out of a fit by their numbers, and says which', () => {
+    const points = [['300', '0.1', ''], ['325', '99', ''], ['350', '2', ''], ['400', '30', '']];
+    const found = answer('fit', { values: { leftOut: '2' }, tables: { points } });
+    expect(main(found)).toEqual(main(answer('fit', { tables: { points: points.filter((_, row) => row !== 1) } })));
+    expect(found.state === 'result' && found.outcome.warnings?.[0]).toBe('Row 2 left out of the fit.');
+    expect(answer('fit', { values: { leftOut: 'two' }, tables: { points } })).toEqual({ state: 'faulty', faults: [{ param: 'leftOut', message: '"two" is no number of a row: write them as 2, 5.' }] });
+  });
+
   it('names what is still to give', () => {
     const found = answer('arrhenius', { values: { preExponential: '1e13' } });
     expect(found.state === 'missing' && found.missing.map((field) => field.key)).toEqual(['energyKJPerMol', 'temperatureK']);

@@ -1,5 +1,6 @@
 import { lazy } from 'react';
 import { fitCalculator } from '#shared/calculators/fit.ts';
+import { rowsNamed } from '../read-typed.ts';
 import { sheet } from '../sheet.ts';
 import { rateUnit } from './common-fields.ts';
 
@@ -8,11 +9,14 @@ const points = [
   ['420', '3.80'], ['440', '13.1'], ['460', '45.2'], ['480', '127'], ['500', '366'], ['520', '880'], ['540', '2140'], ['560', '4600'],
 ];
 
+/** The rows that hold a point, left out or not. */
+const rowsFilled = (rows: readonly (readonly string[])[]) => rows.filter((row) => row[0]?.trim() && row[1]?.trim()).length;
+
 export const fitSheet = sheet({
   calculator: fitCalculator,
   fields: [
     {
-      kind: 'table', key: 'points', label: 'Rate constants', by: 'rows', least: 2,
+      kind: 'table', key: 'points', label: 'Rate constants', by: 'rows', least: 2, leftOutBy: 'leftOut',
       columns: [
         { id: 'temperatureK', label: 'T', unit: 'K' },
         { id: 'k', label: 'k', unitFrom: 'rateUnit' },
@@ -20,6 +24,7 @@ export const fitSheet = sheet({
       ],
     },
     rateUnit,
+    { kind: 'text', key: 'leftOut', label: 'Rows left out', optional: true, own: true, usual: '', hint: 'By their numbers, or by a click on a point of the plot.' },
     {
       kind: 'choice', key: 'weights', label: 'Weights', usual: 'none', look: 'segments',
       choices: [{ value: 'none', label: 'all alike' }, { value: 'given', label: 'by the u of k' }],
@@ -31,8 +36,9 @@ export const fitSheet = sheet({
   ],
   example: { tables: { points } },
   empty: 'Give temperatures and rate constants: type them, or paste two or three columns from a spreadsheet.',
-  outcome: ({ result, own }) => {
+  outcome: ({ result, own, cells, typed }) => {
     const unit = own.rateUnit ?? '';
+    const filled = rowsFilled(cells('points'));
     const correlation = 1 - result.correlation < 1e-3 ? result.correlation.toFixed(6) : result.correlation.toFixed(4);
     return {
       main: [
@@ -48,7 +54,10 @@ export const fitSheet = sheet({
         { label: 'Share explained', symbol: 'R^{2}', ...(result.rSquared === null ? { text: 'not known' } : { text: result.rSquared.toFixed(5) }) },
         { label: 'Points', text: `${result.n}, ${result.degreesOfFreedom} degrees of freedom` },
       ],
-      warnings: result.warnings.map((warning) => warning.message),
+      warnings: [
+        ...(result.n < filled ? [`${filled - result.n === 1 ? 'Row' : 'Rows'} ${[...rowsNamed(typed('leftOut')).rows].filter((row) => row < cells('points').length).map((row) => row + 1).join(', ')} left out of the fit.`] : []),
+        ...result.warnings.map((warning) => warning.message),
+      ],
     };
   },
   onward: ({ result, input, own }) => {
@@ -63,7 +72,7 @@ export const fitSheet = sheet({
       },
     }];
   },
-  entry: ({ result, own, input }) => {
+  entry: ({ result, own, input, cells }) => {
     const u = result.uEnergyKJPerMol;
     const temperatures = input.points.map((point) => point.temperatureK);
     return {
@@ -74,7 +83,7 @@ export const fitSheet = sheet({
       ],
       ...(u ? { correlation: result.correlation } : {}),
       validRange: { min: Math.min(...temperatures), max: Math.max(...temperatures) },
-      note: `A and E by a fit of ln k on 1/T to ${result.n} rate constants between ${Math.min(...temperatures)} and ${Math.max(...temperatures)} K.`,
+      note: `A and E by a fit of ln k on 1/T to ${result.n} of ${rowsFilled(cells('points'))} rate constants between ${Math.min(...temperatures)} and ${Math.max(...temperatures)} K.`,
     };
   },
   picture: lazy(() => import('../pictures/fit-picture.tsx')),

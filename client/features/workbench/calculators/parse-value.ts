@@ -44,6 +44,9 @@ export const parseValueSheet = sheet({
   },
   onward: ({ result }) => {
     const { value, unit, standardUncertainty, uncertaintyScale } = result;
+    if (result.uncertaintyKind === 'unknown' && result.reportedUncertainty !== null && uncertaintyScale === 'linear') {
+      return [{ to: 'uncertainty', label: 'Say what the ± is', values: { value: String(result.reportedUncertainty), of: unit ?? '' } }];
+    }
     if (value === null || !unit) return [];
     const u: Record<string, string> = standardUncertainty !== null && uncertaintyScale === 'linear' ? { standardUncertainty: String(standardUncertainty) } : {};
     const energy = findEnergyUnit(unit);
