@@ -20,7 +20,7 @@ export function CalculatorForm({ sheet, form, faults }: CalculatorFormProps) {
       {asked.filter((field) => !field.optional).map(line)}
       {optional.length > 0 && (
         <fieldset className="form-wide form-optional">
-          <legend>Where known</legend>
+          <legend>May stay empty</legend>
           <div className="calculator-form">{optional.map(line)}</div>
         </fieldset>
       )}
