@@ -60,7 +60,7 @@ function assumptionOf(own: Direction, reverse: Direction, type: EnergyType, gasM
   if (own.exponent !== 0 || reverse.exponent !== 0) parts.push(`Local energies E + nRT at ${temperatureK} K.`);
   if (type === 'arrhenius' && gasMoleChange !== 0) {
     const shift = temperatureK === null ? '' : `; −ΔνRT is ${((-gasMoleChange * R * temperatureK) / 1000).toFixed(1).replace('-', '−')} kJ/mol at ${temperatureK} K`;
-    parts.push(`A gas takes part: both energies are taken on pressures. On concentrations E_f − E_r is ΔH° − ΔνRT${shift}.`);
+    parts.push(`A gas takes part: both energies are taken on pressures. On concentrations their difference is ΔH° − ΔνRT${shift}.`);
   }
   if (type === 'gibbs') parts.push('The Gibbs energies are taken to hold at one temperature.');
   if (own.site !== reverse.site) parts.push('One of the two does not state its site.');

@@ -66,6 +66,19 @@ describe('two versions side by side', () => {
     expect(router.state.location.search).toBe('?from=1&to=2');
   });
 
+  it('a revision withdrawn in between is passed over', async () => {
+    const between = { revision: 2, version: null, state: 'withdrawn' as const, at: '2026-02-02T10:00:00Z' };
+    const { user, router } = open('/entries/222-222-2', entryDetail({ version: 2, revision: 3, revisions: [...versions.slice(0, 1), between, { revision: 3, version: 2, state: 'accepted', at: '2026-03-14T10:00:00Z' }] }));
+    await user.click(await screen.findByRole('button', { name: 'Compare with the version before' }));
+    expect(router.state.location.search).toBe('?from=1&to=2');
+  });
+
+  it('takes the focus when it is opened, not when it is linked to', async () => {
+    const { user } = open('/entries/222-222-2', entry);
+    await user.click(await screen.findByRole('button', { name: 'Compare with the version before' }));
+    expect(document.activeElement).toBe(screen.getByRole('heading', { name: 'Two versions side by side' }));
+  });
+
   it('says that nothing differs', async () => {
     open('/entries/222-222-2?from=1&to=2', entry, { ...changes, changes: [], quantities: [] });
     expect(await screen.findByText(/^Nothing differs/)).toBeTruthy();
@@ -127,6 +140,12 @@ describe('entries of the same step and surface', () => {
     expect(screen.getByText(/^One more entry is of another kind, scope or promoter and not drawn/)).toBeTruthy();
     const row = screen.getByRole('link', { name: 'Ranta 2011' }).closest('tr') as HTMLElement;
     expect(within(row).getByText('electronic energy barrier')).toBeTruthy();
+  });
+
+  it('are not looked for while it is a draft', async () => {
+    open('/entries/222-222-2', entryDetail({ state: 'draft', version: null, conversion: null, sameStepAndSurface: [], actions: ['edit'] }));
+    expect(await screen.findAllByText('Looked up when the revision is submitted.')).toHaveLength(2);
+    expect(screen.getByText(/^Only its contributor, reviewers and curators see this revision/)).toBeTruthy();
   });
 
   it('are drawn beside k against temperature when asked for, where their k has the same unit', async () => {

@@ -72,6 +72,17 @@ describe('the reverse of an elementary step on the same surface', () => {
   });
 });
 
+describe('what a browser keeps of an entry', () => {
+  it('is asked for anew once a neighbour is accepted', async () => {
+    const own = await accepted(forward, '211', '100');
+    const tag = String((await visitor.get(`/entries/${own}`)).headers['etag']);
+    expect((await visitor.get(`/entries/${own}`, { 'If-None-Match': tag })).status).toBe(304);
+    const other = await accepted(forward, '211', '104');
+    const again = await visitor.get(`/entries/${own}`, { 'If-None-Match': tag });
+    expect((okBody(again) as EntryDetail).sameStepAndSurface.map(({ accession }) => accession)).toEqual([other]);
+  });
+});
+
 describe('what is compared, and what is not', () => {
   const own: Direction = { energyKJPerMol: 100, uEnergyKJPerMol: 3, bound: '=', energyType: 'arrhenius', scope: 'elementary', exponent: 0, variantKey: 'k', site: 'terrace', promoters: [] };
   const back: Direction = { ...own, energyKJPerMol: 80, uEnergyKJPerMol: 4 };

@@ -41,11 +41,14 @@ function useChosenPair() {
 
 /** What is compared when nothing is named: the version shown with the one before it, or the first with the one after. */
 function usualPair(entry: EntryDetail): { from: string; to: string; words: string } {
-  const names = entry.revisions.map(nameOf);
   const shown = nameOf(entry);
+  // A version is set beside a version: a revision withdrawn in between says nothing to readers.
+  const names = entry.revisions.filter(({ version, revision }) => entry.version === null || version !== null || revision === entry.revision).map(nameOf);
   const own = Math.max(0, names.indexOf(shown));
   const before = names[own - 1];
-  return before === undefined ? { from: shown, to: names[own + 1] ?? shown, words: 'Compare with the version after' } : { from: before, to: shown, words: 'Compare with the version before' };
+  if (before !== undefined) return { from: before, to: shown, words: 'Compare with the version before' };
+  const after = names[own + 1] ?? entry.revisions.map(nameOf).find((name) => name !== shown) ?? shown;
+  return { from: shown, to: after, words: 'Compare with the version after' };
 }
 
 /** Opens the comparison; nothing where there is only one version, or where it is open. */

@@ -23,7 +23,7 @@ export function EntryNotices({ entry }: { entry: EntryDetail }) {
       )}
       {!(['accepted', 'superseded', 'retracted'] as string[]).includes(state) && (
         <Notice kind="doubt" title={`Not public: ${stateWords[state]}.`}>
-          {`Only its contributor${state === 'draft' ? '' : ', reviewers'} and curators see this revision. Its value has not been accepted.`}
+          Only its contributor, reviewers and curators see this revision. Its value has not been accepted.
         </Notice>
       )}
       {source && source.status !== 'current' && (

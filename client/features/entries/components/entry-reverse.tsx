@@ -39,7 +39,7 @@ export function EntryReverse({ entry, unit }: { entry: EntryDetail; unit: Energy
   return (
     <section aria-labelledby={heading}>
       <h2 id={heading} className="pb-2">The reverse elementary step</h2>
-      <RelatedEntries label="Entries for the reverse elementary step" entries={reverse} ownType={entry.quantities.find(({ symbol }) => symbol === 'energy')?.energyType ?? null} unit={unit} none="No accepted entry for the reverse on this surface, so that E_f − E_r cannot be checked." />
+      <RelatedEntries label="Entries for the reverse elementary step" entries={reverse} ownType={entry.quantities.find(({ symbol }) => symbol === 'energy')?.energyType ?? null} unit={unit} none={entry.conversion === null ? 'Looked up when the revision is submitted.' : 'No accepted entry for the reverse on this surface, so that the two directions cannot be set against each other.'} />
       {reverse.length > 0 && (
         <>
           <h3 className="pt-4 pb-2">Consistency of both directions</h3>

@@ -35,7 +35,7 @@ export function EntryScale({ entry, unit }: { entry: EntryDetail; unit: EnergyUn
           {others > 0 && <p className="text-fine text-second">{`${others === 1 ? 'One more entry is' : `${others} more entries are`} of another kind, scope or promoter and not drawn: unlike is not set on one scale.`}</p>}
         </div>
       )}
-      <RelatedEntries label="Entries for the same elementary step and surface" entries={all} ownType={energy?.energyType ?? null} unit={unit} none="No other accepted entry for this elementary step on this surface." />
+      <RelatedEntries label="Entries for the same elementary step and surface" entries={all} ownType={energy?.energyType ?? null} unit={unit} none={entry.conversion === null ? 'Looked up when the revision is submitted.' : 'No other accepted entry for this elementary step on this surface.'} />
     </section>
   );
 }
