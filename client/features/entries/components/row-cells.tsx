@@ -109,7 +109,10 @@ export function SourceCell({ entry }: { entry: Entry }) {
 
 /** The value exactly as printed. */
 export function PrintedText({ figure }: { figure: RowFigure | null }) {
-  return figure ? <>{asPrinted(figure.shown.quantity)}</> : null;
+  if (!figure) return null;
+  // The note on a column's heading may go to a second line; figure and unit stay together.
+  const [value = '', heading] = asPrinted(figure.shown.quantity).split(/ (?=\(× )/);
+  return <>{value}{heading && <>{' '}<span className="block">{heading}</span></>}</>;
 }
 
 /** A dash that is read as words. */
