@@ -24,9 +24,6 @@ interface QuerySentenceProps {
   onChange: (change: Partial<EntryFilter>) => void;
 }
 
-/** Keeps a comma or full stop on the line of the button before it. */
-const joined = '\u2060';
-
 type Addition = ListFilter | NameFilter | 'year' | 'value';
 
 /** The filters as a sentence whose emphasised parts are pickers. */
@@ -91,9 +88,13 @@ export function QuerySentence({ filter, counts, vocabulary, collections, onChang
       {mainParts.metal.before}{' '}
       <ChoicePicker title={mainParts.metal.title} unset={mainParts.metal.unset} choices={metals} recent="metal" placeholder="symbol, name, group or alloy" onChange={onChange} />{' '}
       {mainParts.method.before}{' '}
-      <ChoicePicker title={mainParts.method.title} unset={mainParts.method.unset} choices={methods} recent="method" placeholder="technique, family, measured …" onChange={onChange} />{joined}, valid {validWords(filter).before} <ValidPicker filter={filter} temperatureK={temperatureK} onChange={onChange} />
-      {further.map(({ key, words }) => <Fragment key={key}>{joined}, <span data-part={key}>{words}</span></Fragment>)}
-      {`${joined}. `}
+      <Tied mark=",">
+        <ChoicePicker title={mainParts.method.title} unset={mainParts.method.unset} choices={methods} recent="method" placeholder="technique, family, measured …" onChange={onChange} />
+      </Tied>{' '}
+      valid {validWords(filter).before} <Tied mark={further.length > 0 ? ',' : '.'}><ValidPicker filter={filter} temperatureK={temperatureK} onChange={onChange} /></Tied>{' '}
+      {further.map(({ key, words }, index) => (
+        <Fragment key={key}><span data-part={key}><Tied mark={index < further.length - 1 ? ',' : '.'}>{words}</Tied></span>{' '}</Fragment>
+      ))}
       {more.length > 0 && (
         <Picker
           label="Add to the question"
@@ -112,6 +113,11 @@ export function QuerySentence({ filter, counts, vocabulary, collections, onChang
       )}
     </div>
   );
+}
+
+/** Keeps a mark with what it follows: a line would otherwise break between a picker and its full stop. */
+function Tied({ mark, children }: { mark: string; children: ReactNode }) {
+  return <span className="sentence-tied">{children}{mark}</span>;
 }
 
 /** Limits of the value, in the reader's unit where it is an energy. */
