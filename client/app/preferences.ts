@@ -4,6 +4,7 @@ import { patchPreferences, type Preferences } from '#shared/contracts/accounts.t
 import { call } from '#client/lib/api-client.ts';
 import { announce } from '#client/lib/announce.ts';
 import { setInstrument } from '#client/lib/instrument.ts';
+import { rememberTable } from '#client/lib/table-setting.ts';
 import { useTheme } from '#client/lib/theme.ts';
 import { sessionOptions, useSession } from './session.ts';
 
@@ -23,6 +24,7 @@ export function useChoosePreferences(): (change: Partial<Preferences>) => void {
       ...(change.energyUnit === undefined ? {} : { unit: change.energyUnit }),
     });
     if (change.theme) setTheme(change.theme);
+    rememberTable(change);
     if (me?.user) mutate(change);
   };
 }
@@ -34,10 +36,11 @@ export function useAccountPreferences(): void {
   const id = me?.user?.id;
   useEffect(() => {
     if (!id || !me?.preferences) return;
-    const { temperatureK, energyUnit, theme } = me.preferences;
+    const { temperatureK, energyUnit, theme, ...table } = me.preferences;
     const named = new URLSearchParams(window.location.search);
     setInstrument({ ...(named.has('T') ? {} : { temperatureK }), ...(named.has('unit') ? {} : { unit: energyUnit }) });
     setTheme(theme);
+    rememberTable(table);
     // Once for each person: later changes are made here and sent there.
     // eslint-disable-next-line react-hooks/exhaustive-deps
   }, [id]);

@@ -10,9 +10,13 @@ export const preferences = z.object({
   energyUnit: z.enum(energyUnits),
   temperatureK: z.number().min(1).max(5000),
   theme: z.enum(['system', 'light', 'dark']),
+  /** Columns of the table of entries that are not shown; null for the usual choice. */
+  hiddenColumns: z.array(z.string().regex(/^[A-Za-z]{1,30}$/)).max(40).nullable(),
+  /** How close the rows of the table stand. */
+  rows: z.enum(['comfortable', 'dense']),
 });
 export type Preferences = z.infer<typeof preferences>;
-export const defaultPreferences: Preferences = { energyUnit: 'kJ/mol', temperatureK: 700, theme: 'system' };
+export const defaultPreferences: Preferences = { energyUnit: 'kJ/mol', temperatureK: 700, theme: 'system', hiddenColumns: null, rows: 'comfortable' };
 
 export const me = z.object({
   user: z.object({ id: z.string(), name: z.string(), roles: z.array(z.enum(grantableRoles)) }).nullable(),

@@ -1,4 +1,5 @@
 import { sortKeys, type SortKey } from '#shared/contracts/entry-search.ts';
+import { usualColumns } from '#client/lib/table-setting.ts';
 
 /** The columns of the table of entries that may be shown or not, in their order. */
 export const columnNames = [
@@ -38,16 +39,8 @@ export const fixedColumns: readonly ColumnName[] = ['step', 'surface', 'value'];
 
 /** Reads the remembered choice of columns: the hidden ones, by name. */
 export function readHidden(stored: string): ReadonlySet<ColumnName> {
-  if (stored === usual) return new Set(usuallyHidden);
+  if (stored === usualColumns) return new Set(usuallyHidden);
   return new Set(columnNames.filter((name) => stored.split(' ').includes(name)));
-}
-
-/** What stands for the usual columns where nothing was chosen. */
-export const usual = '-';
-
-/** Prints a choice of columns to be remembered. */
-export function printHidden(hidden: ReadonlySet<ColumnName>): string {
-  return columnNames.filter((name) => hidden.has(name)).join(' ');
 }
 
 /** The sort behind a heading; the other columns cannot be sorted. The value column is sorted by what it holds. */

@@ -1,5 +1,6 @@
 import { useInfiniteQuery, useQuery } from '@tanstack/react-query';
 import { lazy, Suspense, useEffect, useMemo, useState } from 'react';
+import { useChoosePreferences } from '#client/app/preferences.ts';
 import { announce } from '#client/lib/announce.ts';
 import { useInstrument } from '#client/lib/instrument.ts';
 import { useTitle } from '#client/lib/use-title.ts';
@@ -29,9 +30,10 @@ export function Component() {
   useTitle('Search');
   const { filter, sort, grouping, ignored, changeFilter, clearFilter, changeSort, changeGrouping } = useEntrySearchState();
   const { temperatureK, unit } = useInstrument();
-  const [hidden, setHidden] = useHiddenColumns();
+  const hidden = useHiddenColumns();
+  const choose = useChoosePreferences();
   const [activeId, setActiveId] = useState<string | null>(null);
-  const [density, setDensity] = useDensity();
+  const density = useDensity();
   const chosen = useChosen();
   const collections = useOwnCollections();
   const search = useInfiniteQuery(entrySearchOptions(filter, sort, grouping, temperatureK));
@@ -80,7 +82,7 @@ export function Component() {
               <SummaryLine total={page.total} totalIsExact={page.totalIsExact} summary={summary} unit={unit}>
                 <GroupChoice grouping={grouping} onChange={changeGrouping} />
                 <SortChoice sort={sort} onChange={changeSort} />
-                <ColumnChoice hidden={hidden} density={density} onChange={setHidden} onDensity={setDensity} />
+                <ColumnChoice hidden={hidden} density={density} onChange={choose} />
                 <ExportChoice filter={filter} total={page.total} temperatureK={temperatureK} />
               </SummaryLine>
               {page.withoutStatedRange !== null && page.withoutStatedRange > 0 && (

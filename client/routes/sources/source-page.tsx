@@ -61,7 +61,7 @@ export function Component() {
 
 function EntriesOf({ source }: { source: SourceDetail }) {
   const { temperatureK } = useInstrument();
-  const [usually] = useHiddenColumns();
+  const usually = useHiddenColumns();
   // Every row has this source: it is named above.
   const hidden = useMemo(() => new Set<ColumnName>([...usually, 'source']), [usually]);
   const [sort, setSort] = useState<SortKey>('step');

@@ -27,6 +27,8 @@ export const userPreferences = pgTable('user_preferences', {
   energyUnit: code('energy_unit').notNull(),
   temperatureK: real('temperature_k').notNull(),
   theme: code('theme').notNull(),
+  hiddenColumns: text('hidden_columns').array(),
+  rows: code('rows').notNull().default('comfortable'),
 });
 
 /** Sessions of the web client, in the form connect-pg-simple reads and writes. */

@@ -38,8 +38,8 @@ export async function insertAccount(tx: Tx, account: { email: string; name: stri
 }
 
 export async function findPreferences(db: DbOrTx, userId: string): Promise<Preferences | null> {
-  const [row] = await db.select({ energyUnit: userPreferences.energyUnit, temperatureK: userPreferences.temperatureK, theme: userPreferences.theme })
-    .from(userPreferences).where(eq(userPreferences.userId, userId));
+  const { energyUnit, temperatureK, theme, hiddenColumns, rows } = userPreferences;
+  const [row] = await db.select({ energyUnit, temperatureK, theme, hiddenColumns, rows }).from(userPreferences).where(eq(userPreferences.userId, userId));
   return (row as Preferences | undefined) ?? null;
 }
 

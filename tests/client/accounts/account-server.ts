@@ -3,7 +3,7 @@ import type { Me } from '#shared/contracts/accounts.ts';
 
 export const visitor: Me = { user: null, preferences: null, reviewsWaiting: null, demonstration: true, version: '0.1.0' };
 export const contributor: Me = {
-  ...visitor, user: { id: 'u2', name: 'T. Adeyemi-Holt', roles: ['contributor'] }, preferences: { energyUnit: 'kJ/mol', temperatureK: 700, theme: 'system' },
+  ...visitor, user: { id: 'u2', name: 'T. Adeyemi-Holt', roles: ['contributor'] }, preferences: { energyUnit: 'kJ/mol', temperatureK: 700, theme: 'system', hiddenColumns: null, rows: 'comfortable' },
 };
 
 export const json = (body: unknown, status = 200, headers: Record<string, string> = {}) =>

@@ -8,9 +8,11 @@ import { makeQueryClient } from '#client/app/query-client.ts';
 import { Shell } from '#client/app/shell.tsx';
 import { instrumentSetting, setInstrument } from '#client/lib/instrument.ts';
 import { PageHead } from '#client/ui/page-head.tsx';
+import { readStored } from '#client/lib/local-storage.ts';
+import { columnsKey, rowsKey } from '#client/lib/table-setting.ts';
 
 const visitor: Me = { user: null, preferences: null, reviewsWaiting: null, demonstration: true, version: '0.1.0' };
-const reviewer: Me = { ...visitor, user: { id: 'u1', name: 'I. Okonjo-Vale', roles: ['reviewer'] }, reviewsWaiting: 7, preferences: { energyUnit: 'eV', temperatureK: 550, theme: 'system' } };
+const reviewer: Me = { ...visitor, user: { id: 'u1', name: 'I. Okonjo-Vale', roles: ['reviewer'] }, reviewsWaiting: 7, preferences: { energyUnit: 'eV', temperatureK: 550, theme: 'system', hiddenColumns: ['barrier', 'rate'], rows: 'dense' } };
 
 /** The browser as wide as a desk's, and the server answering who is there. */
 function stubBrowser(me: Me) {
@@ -97,6 +99,7 @@ describe('shell', () => {
   it('takes over the preferences of an account when its holder is known', async () => {
     open('/other', reviewer);
     await waitFor(() => expect(temperature().value).toBe('550'));
+    expect([readStored(columnsKey), readStored(rowsKey)]).toEqual(['barrier rate', 'dense']);
   });
 
   it('moves the focus to the heading of the next page', async () => {

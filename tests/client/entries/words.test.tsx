@@ -5,7 +5,7 @@ import type { Quantity } from '#shared/contracts/quantities.ts';
 import { entryTitle, methodTags, methodText } from '#client/features/entries/entry-words.ts';
 import { filterWords, joinWords, valueRangeWords } from '#client/features/entries/filter-words.ts';
 import { uncertaintyText } from '#client/features/entries/quantity-words.ts';
-import { printHidden, readHidden, sortOf, tableSort } from '#client/features/entries/columns.ts';
+import { readHidden, sortOf, tableSort } from '#client/features/entries/columns.ts';
 import { SurfaceLabel } from '#client/ui/surface-label.tsx';
 import { energy, sampleEntry } from './entry-samples.ts';
 
@@ -76,7 +76,7 @@ describe('words of entries', () => {
 describe('columns', () => {
   it('a choice is remembered and read back; nonsense hides nothing', () => {
     const hidden = new Set(['barrier', 'rate'] as const);
-    expect(readHidden(printHidden(hidden))).toEqual(hidden);
+    expect(readHidden([...hidden].join(' '))).toEqual(hidden);
     expect(readHidden('unheard of').size).toBe(0);
     expect([...readHidden('-')]).toEqual(['factor', 'energyType', 'scope', 'provenance', 'year', 'conditions', 'accession', 'accepted']);
   });

@@ -157,8 +157,10 @@ describe('preferences', () => {
   it('are kept, changed one at a time, and private', async () => {
     const [one, other] = [await app.person('reader'), await app.person('reader')];
     expect(okBody(await one.client.patch('/auth/preferences', { energyUnit: 'eV' }))).toEqual({ ...defaultPreferences, energyUnit: 'eV' });
-    expect(okBody(await one.client.patch('/auth/preferences', { temperatureK: 673.15, theme: 'dark' }))).toEqual({ energyUnit: 'eV', temperatureK: 673.15, theme: 'dark' });
-    expect(okBody(await one.client.get('/auth/me')).preferences).toEqual({ energyUnit: 'eV', temperatureK: 673.15, theme: 'dark' });
+    expect(okBody(await one.client.patch('/auth/preferences', { temperatureK: 673.15, theme: 'dark' }))).toEqual({ ...defaultPreferences, energyUnit: 'eV', temperatureK: 673.15, theme: 'dark' });
+    const all = { energyUnit: 'eV', temperatureK: 673.15, theme: 'dark', hiddenColumns: ['barrier', 'rate'], rows: 'dense' };
+    expect(okBody(await one.client.patch('/auth/preferences', { hiddenColumns: ['barrier', 'rate'], rows: 'dense' }))).toEqual(all);
+    expect(okBody(await one.client.get('/auth/me')).preferences).toEqual(all);
     expect(okBody(await other.client.get('/auth/me')).preferences).toEqual(defaultPreferences);
   });
 

@@ -1,12 +1,14 @@
 import { useMemo } from 'react';
+import { defaultPreferences, type Preferences } from '#shared/contracts/accounts.ts';
 import { sortKeys, type EntryFilter, type SortKey } from '#shared/contracts/entry-search.ts';
 import { useLocalStorage } from '#client/lib/local-storage.ts';
+import { columnsKey, rowsKey, usualColumns } from '#client/lib/table-setting.ts';
 import { Checkbox, RadioGroup } from '#client/ui/choice.tsx';
 import { TextButton } from '#client/ui/button.tsx';
 import { Picker } from '#client/ui/picker.tsx';
 import { Popover } from '#client/ui/popover.tsx';
 import { exportAddress, type ExportFormat } from '../api.ts';
-import { columnNames, columnWords, fixedColumns, printHidden, readHidden, shortWordsOfSort, usual, wordsOfSort, type ColumnName } from '../columns.ts';
+import { columnNames, columnWords, fixedColumns, readHidden, shortWordsOfSort, wordsOfSort, type ColumnName } from '../columns.ts';
 import { groupings, type Grouping } from '../search-state.ts';
 
 const quiet = 'min-h-6 text-second hover:text-ink hover:underline underline-offset-4 aria-expanded:text-ink';
@@ -47,36 +49,35 @@ export function SortChoice({ sort, onChange }: { sort: SortKey; onChange: (sort:
 
 const sortOptions = sortKeys.map((value) => ({ value, label: wordsOfSort(value) }));
 
-export type Density = 'comfortable' | 'dense';
+type Density = Preferences['rows'];
 
-/** How close the rows stand, remembered on this device. */
-export function useDensity(): [Density, (density: Density) => void] {
-  const [stored, store] = useLocalStorage('sillstone.rows', 'comfortable');
-  return [stored === 'dense' ? 'dense' : 'comfortable', store];
+/** How close the rows of tables stand. */
+export function useDensity(): Density {
+  const [stored] = useLocalStorage(rowsKey, defaultPreferences.rows);
+  return stored === 'dense' ? 'dense' : 'comfortable';
 }
 
-/** Which columns are hidden, remembered on this device. */
-export function useHiddenColumns(): [ReadonlySet<ColumnName>, (hidden: ReadonlySet<ColumnName> | null) => void] {
-  const [stored, store] = useLocalStorage('sillstone.columns', usual);
-  const hiddenNow = useMemo(() => readHidden(stored), [stored]);
-  return [hiddenNow, (hidden) => store(hidden ? printHidden(hidden) : usual)];
+/** Which columns are hidden. */
+export function useHiddenColumns(): ReadonlySet<ColumnName> {
+  const [stored] = useLocalStorage(columnsKey, usualColumns);
+  return useMemo(() => readHidden(stored), [stored]);
 }
 
 interface ColumnChoiceProps {
   hidden: ReadonlySet<ColumnName>;
   density: Density;
-  onChange: (hidden: ReadonlySet<ColumnName> | null) => void;
-  onDensity: (density: Density) => void;
+  /** A choice to be remembered: on this device, and with the account where there is one. */
+  onChange: (choice: Partial<Pick<Preferences, 'hiddenColumns' | 'rows'>>) => void;
 }
 
 /** The columns to be shown, and how close the rows stand. */
-export function ColumnChoice({ hidden, density, onChange, onDensity }: ColumnChoiceProps) {
+export function ColumnChoice({ hidden, density, onChange }: ColumnChoiceProps) {
   return (
     <Popover label="Columns" buttonClassName={quiet} align="end" panelClassName="p-4">
       {() => (
         <>
           <RadioGroup
-            legend="Rows" name="density" look="segments" value={density} onChange={onDensity}
+            legend="Rows" name="density" look="segments" value={density} onChange={(rows) => onChange({ rows })}
             choices={[{ value: 'comfortable', label: 'comfortable' }, { value: 'dense', label: 'dense' }]}
           />
           <fieldset className="pt-4">
@@ -90,11 +91,11 @@ export function ColumnChoice({ hidden, density, onChange, onDensity }: ColumnCho
                   const next = new Set(hidden);
                   if (event.target.checked) next.delete(name);
                   else next.add(name);
-                  onChange(next);
+                  onChange({ hiddenColumns: [...next] });
                 }}
               />
             ))}
-            <TextButton className="mt-2" onClick={() => onChange(null)}>The usual columns</TextButton>
+            <TextButton className="mt-2" onClick={() => onChange({ hiddenColumns: null })}>The usual columns</TextButton>
           </fieldset>
         </>
       )}
