@@ -18,7 +18,7 @@ export const bondOrderCalculator = calculator({
     'E_{gas} = E_{ads} − Q_{AB}',
     'AB* + C* → A* + BC*: ΔH = D_{AB} − D_{BC} + Q_{AB} + Q_{C} − Q_{A} − Q_{BC}, with Q_{BC} for Q_{B}',
   ],
-  validity: 'An estimate from a model with two-body terms at zero coverage, shown beside literature values and never stored as one. The dissociation energy is that of the bond that breaks, not of the whole molecule. Never below 0 or the reaction energy. In an exchange the product that holds B is BC: give its heat as heatBC (heatB is read in its place). The interpolated form and the exchange are recalled from memory and not checked against the text.',
+  validity: 'An estimate from a model with two-body terms at zero coverage, shown beside literature values and never stored as one. The dissociation energy is that of the bond that breaks, not of the whole molecule. Never below 0 or the reaction energy. In an exchange the product that holds B is BC, whose heat is asked for (that of B is read in its place). The interpolated form and the exchange are recalled from memory and not checked against the text.',
   references: ['Shustorovich, Surf. Sci. Rep. 6 (1986) 1', 'Shustorovich, Adv. Catal. 37 (1990) 101', 'Shustorovich and Sellers, Surf. Sci. Rep. 31 (1998) 1'],
   input: z.discriminatedUnion('process', [
     z.strictObject({ process: z.literal('dissociation'), ...common, heatB: z.number() }),

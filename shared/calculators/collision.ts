@@ -86,7 +86,7 @@ export const collisionCalculator = calculator({
   title: 'Collisions with a surface',
   summary: 'Finds the flux of a gas on a surface, and the rate constant of adsorption that goes with a sticking coefficient.',
   formulas: ['Z = p/√(2π m k_B T)', 'k_{ads} = s_0/(Γ√(2π m k_B T))', 's = A_s exp(−E_s/RT)', 'E(k_p) = E_s − RT/2, E(k_c) = E_s + RT/2', '1 L = 10^{−6} Torr s'],
-  validity: 'Ideal gas at its own temperature T. s0 is the initial sticking coefficient per molecule, at zero coverage, from 0 to 1; it is not the factor A_s of activated sticking. A beam value at one energy and angle is not thermal: no rate constant is made from it.',
+  validity: 'Ideal gas at its own temperature T. s0 is the initial sticking coefficient per molecule, at zero coverage, from 0 to 1; it is not the factor A_{s} of activated sticking. A beam value at one energy and angle is not thermal: no rate constant is made from it.',
   references: ['Hertz–Knudsen equation, kinetic theory of gases', 'IUPAC Green Book, 3rd edition'],
   input,
   output: z.object({

@@ -6,8 +6,7 @@ import { R } from '#shared/kinetics/constants.ts';
 import { peakReducedEnergy, scaledExponentialIntegral } from '#shared/kinetics/desorption-integral.ts';
 import { desorptionFromHeatingRates, type HeatingRatesInput } from '#shared/kinetics/desorption-heating.ts';
 import { desorptionEnergyFromPeak, type DesorptionPeakInput } from '#shared/kinetics/desorption-peak.ts';
-import { KineticsError } from '#shared/kinetics/kinetics-error.ts';
-import { expectClose } from './reference.ts';
+import { expectClose, faultOf } from './reference.ts';
 
 interface Run {
   order: 1 | 2;
@@ -56,16 +55,6 @@ const runs: Run[] = [
 const peakOf = (run: Run, peakTemperatureK: number): DesorptionPeakInput => ({
   peakTemperatureK, heatingRateKPerS: run.heatingRate, order: run.order, preExponential: run.nu, initialCoverage: run.order === 2 ? run.coverage : undefined,
 });
-
-function faultOf(action: () => unknown): [path: string, code: string] {
-  try {
-    action();
-  } catch (error) {
-    if (error instanceof KineticsError) return [error.path, error.code];
-    throw error;
-  }
-  return ['accepted', ''];
-}
 
 describe('energy from one peak', () => {
   // The rate equation integrated step by step, with nothing of the computing core in it.

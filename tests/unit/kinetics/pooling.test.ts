@@ -3,11 +3,10 @@ import { describe, expect, it } from 'vitest';
 import { runCalculator } from '#shared/calculators/calculator.ts';
 import { poolCalculator } from '#shared/calculators/pool.ts';
 import { betweenVariance, centre, poolModels, type UncertainValue } from '#shared/kinetics/heterogeneity.ts';
-import { KineticsError } from '#shared/kinetics/kinetics-error.ts';
 import { poolIntervals, poolValues } from '#shared/kinetics/pool.ts';
 import { groupValues } from '#shared/kinetics/pool-groups.ts';
 import { studentCoverageFactor } from '#shared/kinetics/student-t.ts';
-import { expectClose, referenceCases } from './reference.ts';
+import { expectClose, faultOf, referenceCases } from './reference.ts';
 
 interface Interval {
   se: number;
@@ -32,16 +31,6 @@ const variants = referenceCases('pooled').flatMap((item) => {
 
 const three = [{ value: 41.8, u: 1.3 }, { value: 46, u: 1.6 }, { value: 39.7, u: 2.2 }];
 const five = [...three, { value: 44.1, u: 0.9 }, { value: 50.2, u: 3 }];
-
-function faultOf(action: () => unknown): [path: string, code: string] {
-  try {
-    action();
-  } catch (error) {
-    if (error instanceof KineticsError) return [error.path, error.code];
-    throw error;
-  }
-  return ['accepted', ''];
-}
 
 describe('pooling, reference cases', () => {
   // metafor 3.8-1 (R 4.2.2) with tightened tolerances; full double precision from the same equations in mpmath 1.2.1.

@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { expect } from 'vitest';
+import { KineticsError } from '#shared/kinetics/kinetics-error.ts';
 import type { RateConstantInput } from '#shared/kinetics/rate-constant.ts';
 
 /** A case of a reference file. */
@@ -31,4 +32,15 @@ export function rateUnitInput({ input }: ReferenceCase): RateConstantInput {
     value: Number(input.value), from: unit(input.from), to: unit(input.to), temperatureK: input.T_K === undefined ? undefined : Number(input.T_K),
     siteDensityPerM2: density === undefined ? undefined : Number(density) * 1e4,
   };
+}
+
+/** What is refused: the input at fault and the code; `accepted` when nothing is. */
+export function faultOf(action: () => unknown): [path: string, code: string] {
+  try {
+    action();
+  } catch (error) {
+    if (error instanceof KineticsError) return [error.path, error.code];
+    throw error;
+  }
+  return ['accepted', ''];
 }

@@ -4,23 +4,12 @@ import { runCalculator } from '#shared/calculators/calculator.ts';
 import { reverseCalculator } from '#shared/calculators/reverse.ts';
 import { rateAt } from '#shared/kinetics/arrhenius.ts';
 import { R } from '#shared/kinetics/constants.ts';
-import { KineticsError } from '#shared/kinetics/kinetics-error.ts';
 import { reverseRateConstant, reverseStep, stepEquilibrium, type ReverseStepInput } from '#shared/kinetics/reverse.ts';
 import { checkConsistency, cycleClosure, enthalpyFromBarriers, internalEnergy, type ConsistencyInput } from '#shared/kinetics/thermo-consistency.ts';
-import { expectClose, referenceCases } from './reference.ts';
+import { expectClose, faultOf, referenceCases } from './reference.ts';
 
 const cases = referenceCases('thermo_consistency');
 const of = (kind: string) => cases.filter((item) => item.kind === kind);
-
-function faultOf(action: () => unknown): [path: string, code: string] {
-  try {
-    action();
-  } catch (error) {
-    if (error instanceof KineticsError) return [error.path, error.code];
-    throw error;
-  }
-  return ['accepted', ''];
-}
 
 describe('thermodynamic consistency, reference cases', () => {
   it('covers every case of the file', () => {
