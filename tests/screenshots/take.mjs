@@ -37,6 +37,11 @@ for (const theme of ['light', 'dark']) {
   if (theme === 'light') {
     const { items: [entry] } = await (await page.request.get(`${base}/api/v1/entries?q=Tillinghast&method=TPD&metal=Ru&step=${encodeURIComponent('N* + N* -> N2 + 2*')}`)).json();
     await shoot(page, `/entries/${entry.accession}`, 'entry-light');
+    await page.goto(`${base}/workbench/fit`);
+    await page.getByRole('button', { name: 'Example' }).click();
+    await page.getByRole('heading', { name: 'The derivation' }).waitFor();
+    await page.waitForTimeout(500);
+    await page.screenshot({ path: place('workbench-light') });
   }
 }
 
