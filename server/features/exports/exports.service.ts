@@ -12,9 +12,10 @@ import { readExportFilter, type SearchFilter } from '#server/features/search/sea
 import { Refusal } from '#server/refusal.ts';
 import type { EntryFilter } from '#shared/contracts/entry-search.ts';
 import { CONSTANTS_VERSION, CORE_VERSION } from '#shared/kinetics/constants.ts';
+import { derivationColumns, derivationRows, derivationsHeader } from './derivations-csv.ts';
 import { inSnapshot, walkBibtex, walkEntries } from './exports.repository.ts';
 import { caution, inventedNotice, readmeText, tableMetadata } from './package-texts.ts';
-import { csvHeader, csvRow } from './parameters-csv.ts';
+import { csvHeader, csvRow, parameterColumns } from './parameters-csv.ts';
 
 export interface ExportRequest extends EntryFilter {
   format: 'zip' | 'csv' | 'bib';
@@ -35,6 +36,11 @@ export function createExportsService({ db, exportPool, clock, publicUrl, version
       tally.entries += records.length;
       for (const { source } of records) tally.sources.set(source.id, source.citationKey);
     }
+  }
+
+  async function* derivationLines(db: DbOrTx, filter: SearchFilter): AsyncGenerator<string> {
+    yield derivationsHeader();
+    for await (const records of walkEntries(db, filter)) yield records.map((record) => derivationRows(presentRecord(record, { temperatureK: null, actions: [], publicUrl }))).join('');
   }
 
   async function* bibtexLines(db: DbOrTx, tally: Tally): AsyncGenerator<string> {
@@ -76,7 +82,9 @@ export function createExportsService({ db, exportPool, clock, publicUrl, version
     const temperatureK = request.T ?? null;
     await add('parameters.csv', csvLines(db, filter, temperatureK, tally));
     await add('references.bib', bibtexLines(db, tally));
-    await add('parameters.csv-metadata.json', [tableMetadata()]);
+    await add('derivations.csv', derivationLines(db, filter));
+    await add('parameters.csv-metadata.json', [tableMetadata('parameters.csv', parameterColumns, 'accession')]);
+    await add('derivations.csv-metadata.json', [tableMetadata('derivations.csv', derivationColumns, ['accession', 'quantity_number', 'line'])]);
     await add('README.txt', [readmeText({ demonstration, entries: tally.entries, sources: tally.sources.size, madeAt: madeAt.toISOString(), publicUrl })]);
     const { format: _format, T: _temperature, ...query } = request;
     const manifest = {

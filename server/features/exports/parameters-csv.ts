@@ -1,7 +1,7 @@
-import Papa from 'papaparse';
 import type { Entry } from '#shared/contracts/entries.ts';
 import type { Quantity } from '#shared/contracts/quantities.ts';
 import { primarySymbol } from '#shared/domain/kinds.ts';
+import { csvLine, type Cell } from './csv-line.ts';
 
 /** Columns of `parameters.csv`: name, CSV-on-the-Web datatype, and what it holds. One row an entry. */
 export const parameterColumns = [
@@ -61,17 +61,6 @@ export const parameterColumns = [
 ] as const;
 
 type Column = (typeof parameterColumns)[number][0];
-type Cell = string | number | boolean | null | undefined;
-
-/** Keeps a spreadsheet from running a text cell as a formula; plain numbers are left alone. The manifest says so, and an import takes it off. */
-export function guardCell(text: string): string {
-  return /^[=+\-@\t\r]/.test(text) && !/^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/.test(text) ? `'${text}` : text;
-}
-
-function csvLine(cells: readonly Cell[]): string {
-  const texts = cells.map((cell) => (cell === null || cell === undefined ? '' : typeof cell === 'string' ? guardCell(cell) : String(cell)));
-  return `${Papa.unparse([texts], { newline: '\r\n', header: false })}\r\n`;
-}
 
 export const csvHeader = (): string => csvLine(parameterColumns.map(([name]) => name));
 

@@ -74,7 +74,7 @@ const keysOf = (bib: string): string[] => [...bib.matchAll(/^@\w+\{([^,]+),/gm)]
 describe('the package', () => {
   it('holds the table, the bibliography, their description, the manifest and the caution', async () => {
     const files = await unzip(await download('format=zip&T=700'));
-    expect(Object.keys(files).sort()).toEqual(['README.txt', 'manifest.json', 'parameters.csv', 'parameters.csv-metadata.json', 'references.bib']);
+    expect(Object.keys(files).sort()).toEqual(['README.txt', 'derivations.csv', 'derivations.csv-metadata.json', 'manifest.json', 'parameters.csv', 'parameters.csv-metadata.json', 'references.bib']);
     expect(textOf(files, 'README.txt')).toMatch(/not design data/);
     expect(textOf(files, 'README.txt')).toMatch(/DEMONSTRATION DATA: every entry, author, journal and DOI in this export is invented/);
     expect(textOf(files, 'references.bib')).toMatch(/^% DEMONSTRATION DATA/);
@@ -97,6 +97,23 @@ describe('the package', () => {
     const [header = []] = parse(textOf(files, 'parameters.csv'), { to_line: 1 }) as string[][];
     expect(metadata.tableSchema.columns.map(({ name }) => name)).toEqual(header);
     expect(header).toEqual(parameterColumns.map(([name]) => name));
+  });
+
+  it('holds the derivation of every quantity, line by line, as the entry shows it', async () => {
+    const files = await unzip(await download('format=zip&metal=Ru'));
+    const metadata = JSON.parse(textOf(files, 'derivations.csv-metadata.json')) as { tableSchema: { columns: { name: string }[] } };
+    const lines = rowsOf(textOf(files, 'derivations.csv'));
+    expect(metadata.tableSchema.columns.map(({ name }) => name)).toEqual(Object.keys(lines[0] ?? {}));
+    const accessions = rowsOf(textOf(files, 'parameters.csv')).map((row) => row['accession'] ?? '');
+    expect(new Set(lines.map((line) => line['accession']))).toEqual(new Set(accessions));
+    const entry = okBody(await visitor.get(`/entries/${accessions[0] ?? ''}`)) as { quantities: { symbol: string; derivation: Record<string, string>[] }[] };
+    const shown = entry.quantities.flatMap(({ symbol, derivation }) => derivation.map(({ operation, from, to, constant = '', assumption = '', reference }) => ({ quantity: symbol, operation, from, to, constant, assumption, reference })));
+    const unguarded = (text = '') => text.replace(/^'(?=[=+\-@])/, '');
+    const exported = lines.filter((line) => line['accession'] === accessions[0]).map(({ quantity, operation, from, to, constant, assumption, reference }) => ({
+      quantity, operation: unguarded(operation), from: unguarded(from), to: unguarded(to), constant: unguarded(constant), assumption: unguarded(assumption), reference,
+    }));
+    expect(exported).toEqual(shown);
+    expect(exported.length).toBeGreaterThan(0);
   });
 
   it('is the same again: two of one moment differ in nothing', async () => {
