@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom';
 import { purposes } from '../purposes.ts';
-import { Formula } from './formula.tsx';
+import { Formula } from '#client/ui/formula.tsx';
 
 /** The calculators by purpose: what each answers, in a line, and its first formula. */
 export function CalculatorList() {

@@ -17,7 +17,7 @@ import { useTyped } from '../use-typed.ts';
 import { CalculatorForm } from './calculator-form.tsx';
 import { CalculatorNav } from './calculator-nav.tsx';
 import { CopyButton } from './copy-button.tsx';
-import { Formula } from './formula.tsx';
+import { Formula } from '#client/ui/formula.tsx';
 import { GivenPanel } from './given-panel.tsx';
 import { MethodPanel } from './method-panel.tsx';
 import { ResultActions } from './result-actions.tsx';

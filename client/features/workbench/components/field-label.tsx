@@ -1,5 +1,5 @@
 import { UnitText } from '#client/ui/unit-text.tsx';
-import { Formula } from './formula.tsx';
+import { Formula } from '#client/ui/formula.tsx';
 
 interface FieldLabelProps {
   label: string;

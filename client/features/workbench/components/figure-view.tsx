@@ -5,7 +5,7 @@ import { Equation } from '#client/ui/equation.tsx';
 import { UnitText } from '#client/ui/unit-text.tsx';
 import { NumberText, Value } from '#client/ui/value.tsx';
 import { isBeyondDouble, valueOf, type Figure } from '../figures.ts';
-import { Formula } from './formula.tsx';
+import { Formula } from '#client/ui/formula.tsx';
 
 /** One figure of a result with its unit and uncertainty; beyond double precision by its logarithm. */
 export function FigureView({ figure, large = false }: { figure: Figure; large?: boolean }) {

@@ -1,5 +1,5 @@
 import type { Sheet } from '../sheet.ts';
-import { Formula } from './formula.tsx';
+import { Formula } from '#client/ui/formula.tsx';
 
 /** The formula, where it holds and where it is published. */
 export function MethodPanel({ sheet }: { sheet: Sheet }) {
