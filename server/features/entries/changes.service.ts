@@ -1,6 +1,7 @@
 import type { EntryInput } from '#shared/contracts/entries.ts';
 import type { QuantityInput } from '#shared/contracts/quantities.ts';
 import { arrangementWords, sampleTypeWords, symbolWords, uncertaintyKindWords, energyTypeWords, provenanceWords } from '#shared/domain/kinds.ts';
+import { quantityText } from '#shared/kinetics/derivation.ts';
 
 const partWords: Readonly<Partial<Record<keyof EntryInput, string>>> = {
   kind: 'Kind', scope: 'Scope', provenance: 'Provenance', step: 'Elementary step', surface: 'Surface', source: 'Source', locator: 'Where in the source',
@@ -28,6 +29,7 @@ function show(value: unknown): string {
   if (value === undefined || value === null || value === '') return nothing;
   if (typeof value === 'boolean') return value ? 'yes' : 'no';
   if (typeof value === 'object') return JSON.stringify(value);
+  if (typeof value === 'number') return quantityText(value);
   return typeof value === 'string' ? valueWords[value] ?? value : String(value);
 }
 

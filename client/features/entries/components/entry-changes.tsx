@@ -10,9 +10,9 @@ import { call } from '#client/lib/api-client.ts';
 import { formatDate } from '#client/lib/dates.ts';
 import { Button } from '#client/ui/button.tsx';
 import { SelectField, type Choice } from '#client/ui/field.tsx';
-import { QuantityValue } from '#client/ui/quantity-value.tsx';
 import { ErrorState, LoadingState } from '#client/ui/states.tsx';
 import { boundText, uncertaintyText } from '../quantity-words.ts';
+import { Converted } from './entry-quantities.tsx';
 
 const changesOptions = (accession: string, from: string, to: string) => queryOptions({
   queryKey: ['entries', 'one', accession, 'changes', from, to],
@@ -122,8 +122,8 @@ function DifferenceTable({ changes: { changes, quantities, from, to }, unit }: {
           {quantities.map(({ symbol, before, after }, index) => (
             <tr key={`converted ${symbol} ${index}`} className="align-top">
               <th scope="row">{`${symbolWords[symbol].replace(/^./, (first) => first.toUpperCase())}, converted`}</th>
-              <td className="text-second"><del className="no-underline"><Converted quantity={before} unit={unit} /></del></td>
-              <td><ins className="no-underline"><Converted quantity={after} unit={unit} /></ins></td>
+              <td className="text-second"><del className="no-underline"><ConvertedSide quantity={before} unit={unit} /></del></td>
+              <td><ins className="no-underline"><ConvertedSide quantity={after} unit={unit} /></ins></td>
             </tr>
           ))}
         </tbody>
@@ -132,11 +132,11 @@ function DifferenceTable({ changes: { changes, quantities, from, to }, unit }: {
   );
 }
 
-function Converted({ quantity, unit }: { quantity: Quantity | null; unit: EnergyUnit }) {
+function ConvertedSide({ quantity, unit }: { quantity: Quantity | null; unit: EnergyUnit }) {
   if (!quantity) return 'not given';
   return (
     <>
-      <QuantityValue quantity={quantity} energyUnit={unit} />
+      <Converted quantity={quantity} unit={unit} />
       <span className="block text-fine text-second">{[boundText(quantity), uncertaintyText(quantity)].filter(Boolean).join('; ')}</span>
     </>
   );

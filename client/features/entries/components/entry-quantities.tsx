@@ -44,7 +44,7 @@ export function EntryQuantities({ entry, unit }: { entry: Entry; unit: EnergyUni
 }
 
 /** The converted value, and per site where it could be brought there; what is missing otherwise. */
-function Converted({ quantity, unit, large = false }: { quantity: Quantity; unit: EnergyUnit; large?: boolean }) {
+export function Converted({ quantity, unit, large = false }: { quantity: Quantity; unit: EnergyUnit; large?: boolean }) {
   const { siteValue, siteUnit, missing, significantDigits } = quantity;
   return (
     <>
